@@ -1,0 +1,115 @@
+import { z } from 'zod';
+import { id, isoDate, line, paragraph } from './fields.ts';
+import { inspectionListItem } from './inspection.ts';
+import { listQuery, listResponse } from './list.ts';
+import { direction } from './measuring-point.ts';
+import { orderCell, verdict } from './screening.ts';
+import { seatAssessmentsResponse } from './seat-assessment.ts';
+
+export const findingStates = [
+  'open',
+  'inspecting',
+  'monitoring',
+  'repaired',
+  'verified',
+  'dismissed',
+] as const;
+export const findingState = z.enum(findingStates);
+export type FindingState = z.infer<typeof findingState>;
+
+export const findingListQuery = listQuery(['openedAt', 'state', 'machineTag', 'score']).extend({
+  direction: z.enum(['asc', 'desc']).default('desc'),
+  state: findingState.optional(),
+  /** Leaves out what is verified or dismissed. */
+  active: z.stringbool().optional(),
+});
+export type FindingListQuery = z.infer<typeof findingListQuery>;
+
+export const findingListItem = z.object({
+  id: z.int(),
+  state: findingState,
+  openedAt: z.string(),
+  machineId: z.int(),
+  machineTag: z.string(),
+  machineName: z.string(),
+  positionCode: z.string(),
+  positionName: z.string(),
+  ownerName: z.string().nullable(),
+  /** Of the screening with the highest score. */
+  verdict,
+  score: z.number().nullable(),
+  kind: z.string().nullable(),
+  orders: z.array(orderCell),
+  screeningCount: z.int(),
+});
+export const findingListResponse = listResponse(findingListItem);
+export type FindingListResponse = z.infer<typeof findingListResponse>;
+
+export const findingScreening = z.object({
+  screeningId: z.int(),
+  waveformId: z.int(),
+  surveyedOn: z.string(),
+  pointLabel: z.string(),
+  direction,
+  verdict,
+  score: z.number().nullable(),
+  speedRpm: z.number().nullable(),
+  overallMmPerSRms: z.number().nullable(),
+  orders: z.array(orderCell),
+  decisionReason: z.string().nullable(),
+  decidedByName: z.string().nullable(),
+  evidence: z.array(z.object({ for: z.boolean(), text: z.string() })),
+});
+
+export const stateChangeResponse = z.object({
+  id: z.int(),
+  subject: z.enum(['finding', 'inspection']),
+  fromState: z.string().nullable(),
+  toState: z.string(),
+  reason: z.string().nullable(),
+  changedByName: z.string(),
+  changedAt: z.string(),
+});
+
+export const findingResponse = findingListItem.extend({
+  bearingPositionId: z.int(),
+  ownerUserId: z.int().nullable(),
+  version: z.int(),
+  screenings: z.array(findingScreening),
+  seats: seatAssessmentsResponse,
+  inspections: z.array(inspectionListItem),
+  history: z.array(stateChangeResponse),
+  can: z.object({
+    assign: z.boolean(),
+    monitor: z.boolean(),
+    dismiss: z.boolean(),
+    reopen: z.boolean(),
+    verify: z.boolean(),
+  }),
+});
+export type FindingResponse = z.infer<typeof findingResponse>;
+
+/** The lead's decision on a finding; assigning an inspection has its own request. */
+export const decideFindingRequest = z.strictObject({
+  action: z.enum(['monitor', 'dismiss', 'reopen', 'verify']),
+  reason: paragraph(2000).min(1, 'Give a reason.'),
+  version: z.int().min(1),
+});
+export type DecideFindingRequest = z.infer<typeof decideFindingRequest>;
+
+export const assignInspectionRequest = z
+  .strictObject({
+    assigneeUserId: id,
+    dueOn: isoDate,
+    checkShaftSeat: z.boolean(),
+    checkHousingSeat: z.boolean(),
+    checkInPlace: z.boolean(),
+    workOrderReference: line(60, 'the work order').nullable().default(null),
+    instructions: paragraph(4000).nullable().default(null),
+    version: z.int().min(1),
+  })
+  .refine((body) => body.checkShaftSeat || body.checkHousingSeat || body.checkInPlace, {
+    path: ['checkShaftSeat'],
+    message: 'Choose at least one thing to check.',
+  });
+export type AssignInspectionRequest = z.infer<typeof assignInspectionRequest>;
