@@ -1,1 +1,14 @@
-export const migrations = [];
+import { CreateAccounts1796083200000 } from './1796083200000-create-accounts.ts';
+import { CreateRegister1796083201000 } from './1796083201000-create-register.ts';
+import { CreateSurveys1796083202000 } from './1796083202000-create-surveys.ts';
+import { CreateFindings1796083203000 } from './1796083203000-create-findings.ts';
+import { CreateMail1796083204000 } from './1796083204000-create-mail.ts';
+
+/** Every migration, oldest first. */
+export const migrations = [
+  CreateAccounts1796083200000,
+  CreateRegister1796083201000,
+  CreateSurveys1796083202000,
+  CreateFindings1796083203000,
+  CreateMail1796083204000,
+];

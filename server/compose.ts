@@ -1,0 +1,89 @@
+import { createTransport } from 'nodemailer';
+import type { Logger } from 'pino';
+import type { DataSource } from 'typeorm';
+import { accessTokenReader } from './auth/access-token.ts';
+import { AccountRepository } from './auth/account.repository.ts';
+import { RefreshTokenRepository } from './auth/refresh-token.repository.ts';
+import { sessionRoutes } from './auth/session.routes.ts';
+import { SessionService } from './auth/session.service.ts';
+import type { Config } from './config/config.ts';
+import { Database } from './db/database.ts';
+import { demoMailboxRoutes } from './features/demo-mailbox/demo-mailbox.routes.ts';
+import { memberRoutes } from './features/members/members.routes.ts';
+import type { Route } from './http/route.ts';
+import type { RouteContext } from './http/run-route.ts';
+import { DemoMailRepository } from './mail/demo-mail.repository.ts';
+import { FakeSmtpServer } from './mail/fake-smtp-server.ts';
+import { OutboxSender } from './mail/outbox-sender.ts';
+import type { ProductResponse } from '#shared/contracts/session.ts';
+
+export interface Product {
+  routes: Route[];
+  routeContext: RouteContext;
+  /** Starts what works in the background: screening, mail. */
+  start: () => Promise<void>;
+  /** Takes nothing new, finishes or hands back what runs. */
+  stop: () => Promise<void>;
+}
+
+/** Wires every service of the product; the only place that sees every feature. */
+export function compose(
+  config: Config,
+  dataSource: DataSource,
+  logger: Logger,
+  options: { demoAccounts?: ProductResponse['demoAccounts']; publicUrl: () => string },
+): Product {
+  const database = new Database(dataSource);
+  const accounts = new AccountRepository(dataSource);
+  const sessions = new SessionService(
+    accounts,
+    new RefreshTokenRepository(dataSource),
+    config.refreshTokenLifeS,
+  );
+  const demoMails = new DemoMailRepository(database.db);
+
+  const routes = [
+    ...sessionRoutes({ sessions, accounts, demoAccounts: options.demoAccounts ?? [], config }),
+    ...memberRoutes(accounts),
+    ...(config.demo ? demoMailboxRoutes(demoMails, options.publicUrl) : []),
+  ];
+
+  const userIdOf = accessTokenReader(config.authSecret);
+  const background: { stop: () => Promise<void> }[] = [];
+  return {
+    routes,
+    routeContext: {
+      roleAt: (userId, siteId) => accounts.roleAt(userId, siteId),
+      principalOf: async (req, res) => {
+        const userId = await userIdOf(req, res);
+        const user = userId === null ? null : await accounts.findById(userId);
+        if (user === null) return null;
+        return {
+          userId: user.id,
+          name: user.name,
+          email: user.email,
+          isAdministrator: user.isAdministrator,
+        };
+      },
+    },
+    start: async () => {
+      let smtpUrl = config.smtpUrl;
+      if (smtpUrl === undefined) {
+        const fake = new FakeSmtpServer((mail) => demoMails.add(mail), logger);
+        smtpUrl = await fake.listen();
+        background.push({ stop: () => fake.close() });
+      }
+      const sender = new OutboxSender({
+        database,
+        transport: createTransport(smtpUrl),
+        from: config.mailFrom,
+        logger,
+      });
+      sender.start();
+      background.push(sender);
+    },
+    stop: async () => {
+      for (const service of background.reverse()) await service.stop();
+    },
+  };
+}
