@@ -10,6 +10,12 @@ import type { Config } from './config/config.ts';
 import { Database } from './db/database.ts';
 import { demoMailboxRoutes } from './features/demo-mailbox/demo-mailbox.routes.ts';
 import { memberRoutes } from './features/members/members.routes.ts';
+import { fitChecks } from './features/register/fit-checks.ts';
+import { machineRoutes, positionRoutes } from './features/register/machine.routes.ts';
+import { MachineService } from './features/register/machine.service.ts';
+import { PositionService } from './features/register/position.service.ts';
+import { routeRoutes } from './features/register/route.routes.ts';
+import { RouteService } from './features/register/route.service.ts';
 import type { Route } from './http/route.ts';
 import type { RouteContext } from './http/run-route.ts';
 import { DemoMailRepository } from './mail/demo-mail.repository.ts';
@@ -45,6 +51,9 @@ export function compose(
   const routes = [
     ...sessionRoutes({ sessions, accounts, demoAccounts: options.demoAccounts ?? [], config }),
     ...memberRoutes(accounts),
+    ...machineRoutes(new MachineService(database, accounts)),
+    ...positionRoutes(new PositionService(database, fitChecks)),
+    ...routeRoutes(new RouteService(database)),
     ...(config.demo ? demoMailboxRoutes(demoMails, options.publicUrl) : []),
   ];
 
