@@ -8,6 +8,8 @@ import { sessionRoutes } from './auth/session.routes.ts';
 import { SessionService } from './auth/session.service.ts';
 import type { Config } from './config/config.ts';
 import { Database } from './db/database.ts';
+import { administrationRoutes } from './features/administration/administration.routes.ts';
+import { AdministrationService } from './features/administration/administration.service.ts';
 import { demoMailboxRoutes } from './features/demo-mailbox/demo-mailbox.routes.ts';
 import { memberRoutes } from './features/members/members.routes.ts';
 import { fitChecks } from './features/register/fit-checks.ts';
@@ -50,6 +52,7 @@ export function compose(
 
   const routes = [
     ...sessionRoutes({ sessions, accounts, demoAccounts: options.demoAccounts ?? [], config }),
+    ...administrationRoutes(new AdministrationService(database)),
     ...memberRoutes(accounts),
     ...machineRoutes(new MachineService(database, accounts)),
     ...positionRoutes(new PositionService(database, fitChecks)),
