@@ -28,6 +28,13 @@ import type { ProductResponse } from '#shared/contracts/session.ts';
 export interface Product {
   routes: Route[];
   routeContext: RouteContext;
+  /** The services themselves, for the demo loader, which does as a person would. */
+  services: {
+    administration: AdministrationService;
+    machines: MachineService;
+    positions: PositionService;
+    routes: RouteService;
+  };
   /** Starts what works in the background: screening, mail. */
   start: () => Promise<void>;
   /** Takes nothing new, finishes or hands back what runs. */
@@ -48,15 +55,19 @@ export function compose(
     new RefreshTokenRepository(dataSource),
     config.refreshTokenLifeS,
   );
+  const administration = new AdministrationService(database);
+  const machines = new MachineService(database, accounts);
+  const positions = new PositionService(database, fitChecks);
+  const walkRoutes = new RouteService(database);
   const demoMails = new DemoMailRepository(database.db);
 
   const routes = [
     ...sessionRoutes({ sessions, accounts, demoAccounts: options.demoAccounts ?? [], config }),
-    ...administrationRoutes(new AdministrationService(database)),
+    ...administrationRoutes(administration),
     ...memberRoutes(accounts),
-    ...machineRoutes(new MachineService(database, accounts)),
-    ...positionRoutes(new PositionService(database, fitChecks)),
-    ...routeRoutes(new RouteService(database)),
+    ...machineRoutes(machines),
+    ...positionRoutes(positions),
+    ...routeRoutes(walkRoutes),
     ...(config.demo ? demoMailboxRoutes(demoMails, options.publicUrl) : []),
   ];
 
@@ -64,6 +75,7 @@ export function compose(
   const background: { stop: () => Promise<void> }[] = [];
   return {
     routes,
+    services: { administration, machines, positions, routes: walkRoutes },
     routeContext: {
       roleAt: (userId, siteId) => accounts.roleAt(userId, siteId),
       principalOf: async (req, res) => {

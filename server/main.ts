@@ -5,6 +5,7 @@ import { join } from 'node:path';
 import { pino } from 'pino';
 import { compose } from './compose.ts';
 import { ConfigError, readConfig } from './config/config.ts';
+import { readDemoAccounts } from './config/demo-accounts.ts';
 import { readEnvironment } from './config/environment.ts';
 import { createDataSource } from './db/data-source.ts';
 import { runMigrations } from './db/run-migrations.ts';
@@ -25,7 +26,7 @@ async function main(): Promise<void> {
 
   let publicUrl = config.publicUrl ?? `http://${config.host}:${config.port}`;
   const product = compose(config, dataSource, logger, {
-    demoAccounts: environment.demoAccounts,
+    demoAccounts: config.demo ? readDemoAccounts(config.dataDirectory) : [],
     publicUrl: () => publicUrl,
   });
   const clientDirectory = join(environment.projectDirectory, 'dist/client');
