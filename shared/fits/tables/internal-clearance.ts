@@ -1,8 +1,9 @@
 /**
  * Radial internal clearance of unmounted bearings with a cylindrical bore, µm, as [least, greatest].
- * ISO 5753-1:2009. C2 to C4 equal in two published tables; C5 is from memory. Above 200 mm published
- * tables of ball bearings differ; the values bearing catalogues print are kept. Cylindrical rollers:
- * the values for rings that are not interchanged.
+ * ISO 5753-1:2009. C2 to C4 to 250 mm equal in two published tables; C5 of ball bearings equal in two to
+ * 100 mm, from memory above; C5 of cylindrical rollers and their sizes above 250 mm from one; C5 of
+ * spherical rollers from memory. Above 200 mm published tables of ball bearings differ; the values
+ * bearing catalogues print are kept. Cylindrical rollers: rings that are not interchanged.
  */
 import type { BearingType, ClearanceGroup } from '../fit-types.ts';
 
@@ -18,7 +19,11 @@ export interface ClearanceRow {
 export const internalClearance: Readonly<Record<BearingType, readonly ClearanceRow[]>> = {
   ball: [
     // From 2.5 mm; the smallest sizes belong to the same row in two published tables.
-    { above: 2.5, upTo: 10, um: { C2: [0, 7], CN: [2, 13], C3: [8, 23], C4: [14, 29] } },
+    {
+      above: 2.5,
+      upTo: 10,
+      um: { C2: [0, 7], CN: [2, 13], C3: [8, 23], C4: [14, 29], C5: [20, 37] },
+    },
     {
       above: 10,
       upTo: 18,
@@ -157,6 +162,36 @@ export const internalClearance: Readonly<Record<BearingType, readonly ClearanceR
       above: 225,
       upTo: 250,
       um: { C2: [45, 110], CN: [110, 175], C3: [170, 235], C4: [235, 300], C5: [330, 395] },
+    },
+    {
+      above: 250,
+      upTo: 280,
+      um: { C2: [55, 125], CN: [125, 195], C3: [190, 260], C4: [260, 330], C5: [370, 440] },
+    },
+    {
+      above: 280,
+      upTo: 315,
+      um: { C2: [55, 130], CN: [130, 205], C3: [200, 275], C4: [275, 350], C5: [410, 485] },
+    },
+    {
+      above: 315,
+      upTo: 355,
+      um: { C2: [65, 145], CN: [145, 225], C3: [225, 305], C4: [305, 385], C5: [455, 535] },
+    },
+    {
+      above: 355,
+      upTo: 400,
+      um: { C2: [100, 190], CN: [190, 280], C3: [280, 370], C4: [370, 460], C5: [510, 600] },
+    },
+    {
+      above: 400,
+      upTo: 450,
+      um: { C2: [110, 210], CN: [210, 310], C3: [310, 410], C4: [410, 510], C5: [565, 665] },
+    },
+    {
+      above: 450,
+      upTo: 500,
+      um: { C2: [110, 220], CN: [220, 330], C3: [330, 440], C4: [440, 550], C5: [625, 735] },
     },
   ],
   'spherical roller': [
