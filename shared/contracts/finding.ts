@@ -25,6 +25,9 @@ export const findingListQuery = listQuery(['openedAt', 'state', 'machineTag', 's
 });
 export type FindingListQuery = z.infer<typeof findingListQuery>;
 
+export const findingActions = ['assign', 'monitor', 'dismiss', 'reopen', 'verify'] as const;
+export type FindingAction = (typeof findingActions)[number];
+
 export const findingListItem = z.object({
   id: z.int(),
   state: findingState,
@@ -42,6 +45,7 @@ export const findingListItem = z.object({
   orders: z.array(orderCell),
   screeningCount: z.int(),
 });
+export type FindingListItem = z.infer<typeof findingListItem>;
 export const findingListResponse = listResponse(findingListItem);
 export type FindingListResponse = z.infer<typeof findingListResponse>;
 
@@ -61,6 +65,8 @@ export const findingScreening = z.object({
   evidence: z.array(z.object({ for: z.boolean(), text: z.string() })),
 });
 
+export type FindingScreeningResponse = z.infer<typeof findingScreening>;
+
 export const stateChangeResponse = z.object({
   id: z.int(),
   subject: z.enum(['finding', 'inspection']),
@@ -70,6 +76,7 @@ export const stateChangeResponse = z.object({
   changedByName: z.string(),
   changedAt: z.string(),
 });
+export type StateChangeResponse = z.infer<typeof stateChangeResponse>;
 
 export const findingResponse = findingListItem.extend({
   bearingPositionId: z.int(),

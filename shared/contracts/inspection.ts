@@ -29,19 +29,27 @@ export type SeatReading = z.infer<typeof seatReading>;
 
 export const inspectionOutcomes = ['loose', 'not loose', 'not clear'] as const;
 export const inspectionOutcome = z.enum(inspectionOutcomes);
+export type InspectionOutcome = z.infer<typeof inspectionOutcome>;
+
+/** Whether a seat is told as it was met or as it was left after the work. */
+export const seatStages = ['as found', 'as left'] as const;
+export const seatStage = z.enum(seatStages);
+export type SeatStage = z.infer<typeof seatStage>;
 
 export const reportedSeat = z.strictObject({
   seat: seatName,
+  stage: seatStage.default('as found'),
   condition: seatCondition,
   readings: z.array(seatReading).max(16),
 });
+export type ReportedSeat = z.infer<typeof reportedSeat>;
 
 /** What the owner found and did. */
 export const inspectionReport = z.strictObject({
   /** Cautions must be read and ticked before anything can be reported. */
   cautionsRead: z.literal(true, 'Read the cautions and tick the box first.'),
   outcome: inspectionOutcome,
-  seats: z.array(reportedSeat).max(2),
+  seats: z.array(reportedSeat).max(4),
   inPlaceResult: paragraph(2000).nullable(),
   workDone: paragraph(4000).min(1, 'Say what was done, or that nothing was.'),
   /** True where the fit was put right, so that the next survey can prove it. */
@@ -59,6 +67,7 @@ export const inspectionListItem = z.object({
   id: z.int(),
   findingId: z.int(),
   state: inspectionState,
+  machineId: z.int(),
   machineTag: z.string(),
   machineName: z.string(),
   positionCode: z.string(),
@@ -73,6 +82,7 @@ export const inspectionListItem = z.object({
   checkHousingSeat: z.boolean(),
   checkInPlace: z.boolean(),
 });
+export type InspectionListItem = z.infer<typeof inspectionListItem>;
 export const inspectionListResponse = listResponse(inspectionListItem);
 export type InspectionListResponse = z.infer<typeof inspectionListResponse>;
 
@@ -89,6 +99,8 @@ export const inspectionResponse = inspectionListItem.extend({
     report: z.boolean(),
     close: z.boolean(),
     cancel: z.boolean(),
+    /** An assignee who isn't the machine's owner sees the task, not the finding behind it. */
+    seeFinding: z.boolean(),
   }),
 });
 export type InspectionResponse = z.infer<typeof inspectionResponse>;

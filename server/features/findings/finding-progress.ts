@@ -1,0 +1,109 @@
+import type { SitePrincipal } from '#server/auth/principal.ts';
+import { recordActivity } from '#server/db/activity.repository.ts';
+import type { Db } from '#server/db/database.ts';
+import type { Finding } from '#server/db/entities/finding.entity.ts';
+import { AppError, notFound } from '#server/http/app-error.ts';
+import type { FindingState } from '#shared/contracts/finding.ts';
+import {
+  finishedFindingStates,
+  nextFindingState,
+  type FindingEvent,
+} from './finding-transitions.ts';
+import { FindingRepository } from './finding.repository.ts';
+
+export interface FindingStep {
+  principal: SitePrincipal;
+  findingId: number;
+  event: FindingEvent;
+  reason: string;
+  /** The version the person decided on; absent where an inspection's own version guards the step. */
+  version?: number;
+}
+
+const eventWords: Readonly<Record<FindingEvent, string>> = {
+  assign: 'be sent to inspection',
+  monitor: 'be put under monitoring',
+  dismiss: 'be dismissed',
+  reopen: 'be reopened',
+  verify: 'be verified',
+  'inspection-repaired': 'be marked as repaired',
+  'inspection-not-loose': 'be put under monitoring',
+  'inspection-unsettled': 'be given back to the lead',
+  'inspection-cancelled': 'be given back to the lead',
+};
+
+/**
+ * Moves a finding one step, in the transaction of the caller: state, version, the record of who,
+ * when and why, and the activity entry go together.
+ */
+export async function moveFinding(db: Db, step: FindingStep, now: Date): Promise<void> {
+  const { principal, findingId, event, reason, version } = step;
+  const repository = new FindingRepository(db);
+  const finding = await repository.lock(findingId);
+  if (finding === null) throw notFound('finding');
+  if (version !== undefined && finding.version !== version) throw changedMeanwhile(finding);
+  const next = nextFindingState(finding.state, event, principal.role);
+  if (next === null) {
+    throw new AppError(
+      'wrong_state',
+      `A finding that is ${finding.state} can't ${eventWords[event]}.`,
+    );
+  }
+  if (finishedFindingStates.includes(finding.state)) {
+    await refuseSecondActive(repository, finding);
+  }
+  await repository.write(finding, next);
+  await repository.addStateChange({
+    findingId,
+    fromState: finding.state,
+    toState: next,
+    reason: reason === '' ? null : reason,
+    changedByUserId: principal.userId,
+    changedAt: now,
+  });
+  await recordFindingActivity(
+    db,
+    principal,
+    findingId,
+    event,
+    { from: finding.state, to: next },
+    now,
+  );
+}
+
+/** One position has one active finding: new evidence must know where it belongs. */
+async function refuseSecondActive(repository: FindingRepository, finding: Finding): Promise<void> {
+  const other = await repository.lockActiveOf(finding.bearingPositionId, finding.id);
+  if (other === null) return;
+  throw new AppError(
+    'wrong_state',
+    `This bearing position has a newer finding (${other.id}). Go on with that one.`,
+  );
+}
+
+export const changedMeanwhile = (finding: { state: FindingState }) =>
+  new AppError(
+    'conflict',
+    `This finding was changed meanwhile and is now ${finding.state}. Read it again before deciding.`,
+  );
+
+export const recordFindingActivity = (
+  db: Db,
+  principal: SitePrincipal,
+  findingId: number,
+  action: string,
+  details: Record<string, unknown>,
+  now: Date,
+) =>
+  recordActivity(
+    db,
+    {
+      siteId: principal.siteId,
+      userId: principal.userId,
+      action: `finding.${action}`,
+      objectType: 'finding',
+      objectId: findingId,
+      details,
+    },
+    now,
+  );

@@ -1,0 +1,154 @@
+import { In, MoreThan, Not } from 'typeorm';
+import type { Db } from '#server/db/database.ts';
+import { FindingScreening } from '#server/db/entities/finding-screening.entity.ts';
+import { Finding } from '#server/db/entities/finding.entity.ts';
+import { StateChange } from '#server/db/entities/state-change.entity.ts';
+import type { FindingListQuery, FindingState } from '#shared/contracts/finding.ts';
+import { finishedFindingStates } from './finding-transitions.ts';
+
+const sortColumns: Record<FindingListQuery['sort'], string> = {
+  openedAt: 'finding.opened_at',
+  state:
+    "FIELD(finding.state, 'open', 'inspecting', 'monitoring', 'repaired', 'verified', 'dismissed')",
+  machineTag: 'machine.tag',
+  score:
+    '(SELECT MAX(s.score) FROM finding_screening fs JOIN screening s ON s.id = fs.screening_id WHERE fs.finding_id = finding.id)',
+};
+
+const likePattern = (text: string) => `%${text.replace(/[\\%_]/g, '\\$&')}%`;
+
+/** Findings, the screenings that show them and the record of their states. */
+export class FindingRepository {
+  private readonly db: Db;
+
+  constructor(db: Db) {
+    this.db = db;
+  }
+
+  /** One page of a site's findings; `ownerUserId` narrows it to an owner's machines. */
+  async list(siteId: number, ownerUserId: number | null, query: FindingListQuery) {
+    const found = this.db
+      .createQueryBuilder(Finding, 'finding')
+      .innerJoinAndSelect('finding.bearingPosition', 'position')
+      .innerJoinAndSelect('position.machine', 'machine')
+      .leftJoinAndSelect('machine.owner', 'owner')
+      .where('finding.siteId = :siteId', { siteId });
+    if (ownerUserId !== null) {
+      found.andWhere('machine.ownerUserId = :ownerUserId', { ownerUserId });
+    }
+    if (query.state !== undefined) found.andWhere('finding.state = :state', { state: query.state });
+    if (query.active === true) {
+      found.andWhere('finding.state NOT IN (:...finished)', { finished: finishedFindingStates });
+    }
+    if (query.search) {
+      found.andWhere(
+        '(machine.tag LIKE :pattern OR machine.name LIKE :pattern OR position.code LIKE :pattern OR position.name LIKE :pattern)',
+        { pattern: likePattern(query.search) },
+      );
+    }
+    const total = await found.clone().getCount();
+    const direction = query.direction === 'desc' ? 'DESC' : 'ASC';
+    const rows = await found
+      .addSelect(sortColumns[query.sort], 'sort_key')
+      .orderBy('sort_key', direction)
+      .addOrderBy('finding.id', direction)
+      .limit(query.pageSize)
+      .offset((query.page - 1) * query.pageSize)
+      .getMany();
+    return { rows, total };
+  }
+
+  find(siteId: number, id: number): Promise<Finding | null> {
+    return this.db.findOne(Finding, {
+      where: { id, siteId },
+      relations: { bearingPosition: { machine: { owner: true } } },
+    });
+  }
+
+  /** The screenings of several findings, oldest survey first. */
+  screeningsOf(findingIds: number[]): Promise<FindingScreening[]> {
+    if (findingIds.length === 0) return Promise.resolve([]);
+    return this.db
+      .createQueryBuilder(FindingScreening, 'link')
+      .innerJoinAndSelect('link.screening', 'screening')
+      .leftJoinAndSelect('screening.decidedBy', 'decidedBy')
+      .innerJoinAndSelect('screening.waveform', 'waveform')
+      .innerJoinAndSelect('waveform.survey', 'survey')
+      .innerJoinAndSelect('waveform.measuringPoint', 'point')
+      .where('link.findingId IN (:...findingIds)', { findingIds })
+      .orderBy('survey.surveyedOn', 'ASC')
+      .addOrderBy('point.id', 'ASC')
+      .addOrderBy('screening.id', 'ASC')
+      .getMany();
+  }
+
+  historyOf(findingId: number): Promise<StateChange[]> {
+    return this.db.find(StateChange, {
+      where: { findingId },
+      relations: { changedBy: true },
+      order: { changedAt: 'ASC', id: 'ASC' },
+    });
+  }
+
+  /** The finding as it is now, held against others. */
+  lock(id: number): Promise<Finding | null> {
+    return this.db.findOne(Finding, { where: { id }, lock: { mode: 'pessimistic_write' } });
+  }
+
+  /** The position's finding that isn't done with, held against others. */
+  lockActiveOf(bearingPositionId: number, exceptId = 0): Promise<Finding | null> {
+    return this.db.findOne(Finding, {
+      where: {
+        bearingPositionId,
+        id: Not(exceptId),
+        state: Not(In([...finishedFindingStates])),
+      },
+      order: { id: 'DESC' },
+      lock: { mode: 'pessimistic_write' },
+    });
+  }
+
+  lockLinkOf(screeningId: number): Promise<FindingScreening | null> {
+    return this.db.findOne(FindingScreening, {
+      where: { screeningId },
+      order: { findingId: 'DESC' },
+      lock: { mode: 'pessimistic_write' },
+    });
+  }
+
+  async insert(finding: Pick<Finding, 'siteId' | 'bearingPositionId' | 'state' | 'openedAt'>) {
+    const result = await this.db.insert(Finding, { ...finding, version: 1 });
+    return (result.identifiers[0] as { id: number }).id;
+  }
+
+  async link(findingId: number, screeningId: number): Promise<void> {
+    await this.db.insert(FindingScreening, { findingId, screeningId });
+  }
+
+  async unlink(findingId: number, screeningId: number): Promise<void> {
+    await this.db.delete(FindingScreening, { findingId, screeningId });
+  }
+
+  linkCount(findingId: number): Promise<number> {
+    return this.db.count(FindingScreening, { where: { findingId } });
+  }
+
+  changesSince(findingId: number, since: Date): Promise<number> {
+    return this.db.count(StateChange, { where: { findingId, changedAt: MoreThan(since) } });
+  }
+
+  async remove(findingId: number): Promise<void> {
+    await this.db.delete(Finding, { id: findingId });
+  }
+
+  /** Writes state and version of a finding that the caller holds. */
+  async write(finding: Finding, state: FindingState): Promise<void> {
+    await this.db.update(Finding, { id: finding.id }, { state, version: finding.version + 1 });
+  }
+
+  async addStateChange(
+    change: Omit<StateChange, 'id' | 'finding' | 'changedBy' | 'inspectionId'>,
+  ): Promise<void> {
+    await this.db.insert(StateChange, { ...change, inspectionId: null });
+  }
+}
