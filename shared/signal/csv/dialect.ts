@@ -36,6 +36,18 @@ export function guessDialect(
   to: number,
   told?: DecimalMark,
 ): Dialect {
+  // Native searches first: most files are settled by what doesn't occur in them at all.
+  const rows = bytes.subarray(from, to);
+  const occurs = (byte: number) => rows.includes(byte);
+  const hasQuote = occurs(34);
+  if (!hasQuote && occurs(59)) return { separator: ';', decimalMark: null };
+  if (!hasQuote && occurs(9)) return { separator: '\t', decimalMark: null };
+  const hasComma = occurs(44);
+  if (!hasQuote && !occurs(32)) {
+    if (!hasComma) return { separator: null, decimalMark: null };
+    if (told === undefined && occurs(46)) return { separator: ',', decimalMark: '.' };
+  }
+
   const marks = collectMarks(bytes, from, to);
   if (marks.semicolon) return { separator: ';', decimalMark: null };
   if (marks.tab) return { separator: '\t', decimalMark: null };

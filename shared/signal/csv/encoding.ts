@@ -11,6 +11,9 @@ const signatures: readonly (readonly [readonly number[], string])[] = [
   [[0x4d, 0x41, 0x54, 0x4c, 0x41, 0x42], 'a MATLAB file'],
 ];
 
+/** Control characters behind these bytes are met when their line is read. */
+const sniffedBytes = 4096;
+
 const saveAsUtf8 = 'Expected UTF-8 text. Save the file as "CSV UTF-8" and send it again.';
 
 /**
@@ -32,7 +35,8 @@ export function checkEncoding(head: Uint8Array): 0 | 3 {
   }
   refuseNul(head);
   let line = 1;
-  for (let at = 0; at < head.length; at += 1) {
+  const length = Math.min(head.length, sniffedBytes);
+  for (let at = 0; at < length; at += 1) {
     const byte = head[at]!;
     if (byte === 10) line += 1;
     else if (isControl(byte)) refuseControl(byte, line);

@@ -2,7 +2,6 @@ import { CsvError, quoteFound } from './csv-error.ts';
 import type { Line } from './line-cursor.ts';
 import { isGapText, NumberScanner } from './number-scanner.ts';
 import { splitHeader } from './split-line.ts';
-import { encodeUtf8 } from './utf8.ts';
 import type { ReadWaveformCsvOptions, Separator } from './waveform-csv.ts';
 
 /** Longest header cell, characters. */
@@ -66,6 +65,5 @@ export function readHeader(
 }
 
 function isNumberText(cell: string): boolean {
-  const bytes = encodeUtf8(cell);
-  return bytes.length > 0 && new NumberScanner().scan(bytes, 0, bytes.length) === bytes.length;
+  return new NumberScanner().scanText(cell);
 }

@@ -1,19 +1,12 @@
-import { asciiForMessage } from './utf8.ts';
-
-/** Powers of ten that a double holds exactly. */
-const exactPowers = Float64Array.from({ length: 23 }, (_, i) => Number(`1e${i}`));
-
-const zero = 48;
-const point = 46;
-const comma = 44;
+import { asciiForMessage, encodeUtf8 } from './utf8.ts';
+import { exactPowers, scaleWideDecimal } from './wide-decimal.ts';
 
 /**
  * Reads decimal numbers from bytes, correctly rounded: the value equals `Number(text)` bit for bit.
  *
  * A number of up to 2^53 as integer digits and a power of ten up to 22 needs one exact division or
  * multiplication (W. D. Clinger, "How to read floating point numbers accurately", 1990). Numbers of
- * up to 30 digits are divided in twice the precision and taken where the error cannot matter;
- * everything else goes through `Number`.
+ * up to 30 digits are reckoned in twice the precision; everything else goes through `Number`.
  *
  * One object is used for a whole file, its fields are the results: a result object a number would
  * cost more than the scanning.
@@ -34,77 +27,113 @@ export class NumberScanner {
   /**
    * Scans the number that starts at `from`: sign, digits with at most one mark, exponent.
    *
+   * There must be a byte behind the number that belongs to no number, such as the line end: the
+   * scan stops there, and checking for the end of the buffer at every digit is saved.
+   *
    * @returns index behind the number, or -1 where no number starts here; what follows the number is
-   *   for the caller to judge. Never reads at or behind `to`.
+   *   for the caller to judge
    */
-  scan(bytes: Uint8Array, from: number, to: number): number {
+  scan(bytes: Uint8Array, from: number): number {
     let at = from;
-    let byte = at < to ? bytes[at]! : 0;
+    let byte = bytes[at]!;
     const negative = byte === 45;
-    if (negative || byte === 43) {
-      at += 1;
-      byte = at < to ? bytes[at]! : 0;
-    }
+    if (negative || byte === 43) byte = bytes[++at]!;
 
-    let mantissa = 0;
-    const integerFrom = at;
-    while (byte >= zero && byte <= 57) {
-      mantissa = mantissa * 10 + (byte - zero);
-      at += 1;
-      byte = at < to ? bytes[at]! : 0;
+    const digitsFrom = at;
+    // Right for up to nine digits, more are read again below.
+    let small = 0;
+    while (byte >= 48 && byte <= 57) {
+      small = (Math.imul(small, 10) + byte - 48) | 0;
+      byte = bytes[++at]!;
     }
-    const integerDigits = at - integerFrom;
-    let fractionDigits = 0;
-    if (byte === point || byte === comma) {
-      if (this.mark === 0 && (byte === point || this.commaMayMark)) this.mark = byte;
+    const integerDigits = at - digitsFrom;
+    let digits = integerDigits;
+    if (byte === 46 || byte === 44) {
+      if (this.mark === 0 && (byte === 46 || this.commaMayMark)) this.mark = byte;
       if (byte === this.mark) {
-        at += 1;
-        byte = at < to ? bytes[at]! : 0;
+        byte = bytes[++at]!;
         const fractionFrom = at;
-        while (byte >= zero && byte <= 57) {
-          mantissa = mantissa * 10 + (byte - zero);
-          at += 1;
-          byte = at < to ? bytes[at]! : 0;
+        while (byte >= 48 && byte <= 57) {
+          small = (Math.imul(small, 10) + byte - 48) | 0;
+          byte = bytes[++at]!;
         }
-        fractionDigits = at - fractionFrom;
+        digits += at - fractionFrom;
       }
     }
-    if (integerDigits + fractionDigits === 0) return -1;
-
-    let exponent = 0;
+    if (digits === 0) return -1;
+    const fractionDigits = digits - integerDigits;
+    const digitsTo = at;
+    this.exponent = 0;
     if (byte === 101 || byte === 69) {
-      let digitAt = at + 1;
-      byte = digitAt < to ? bytes[digitAt]! : 0;
-      const negativeExponent = byte === 45;
-      if (negativeExponent || byte === 43) {
-        digitAt += 1;
-        byte = digitAt < to ? bytes[digitAt]! : 0;
-      }
-      const exponentFrom = digitAt;
-      while (byte >= zero && byte <= 57) {
-        // Held at a size that is infinite or zero in any case, so that it can't run over.
-        if (exponent < 100_000) exponent = exponent * 10 + (byte - zero);
-        digitAt += 1;
-        byte = digitAt < to ? bytes[digitAt]! : 0;
-      }
-      if (digitAt === exponentFrom) return -1;
-      if (negativeExponent) exponent = -exponent;
-      at = digitAt;
+      at = this.scanExponent(bytes, at + 1);
+      if (at < 0) return -1;
     }
-
     this.integerDigits = integerDigits;
     this.fractionDigits = fractionDigits;
-    this.exponent = exponent;
-    this.mantissa = mantissa;
-    const power = exponent - fractionDigits;
-    // Below 2^53 every step of the sum was exact; at or above it the sum never came back below.
-    if (mantissa < 9007199254740992 && power >= -22 && power <= 22) {
-      const value = power < 0 ? mantissa / exactPowers[-power]! : mantissa * exactPowers[power]!;
+
+    if (digits <= 9 && this.exponent === 0) {
+      this.mantissa = small;
+      const value = small / exactPowers[fractionDigits]!;
       this.value = negative ? -value : value;
     } else {
-      this.value = toNumber(asciiForMessage(bytes, from, at));
+      const value = this.scanWide(bytes, digitsFrom, digitsTo, at);
+      this.value = negative ? -value : value;
     }
     return at;
+  }
+
+  /** @returns index behind the exponent's digits, or -1 where there are none */
+  private scanExponent(bytes: Uint8Array, from: number): number {
+    let at = from;
+    let byte = bytes[at]!;
+    const negative = byte === 45;
+    if (negative || byte === 43) byte = bytes[++at]!;
+    const digitsFrom = at;
+    let exponent = 0;
+    while (byte >= 48 && byte <= 57) {
+      // Held at a size that is infinite or zero in any case, so that it can't run over.
+      if (exponent < 100_000) exponent = exponent * 10 + byte - 48;
+      byte = bytes[++at]!;
+    }
+    this.exponent = negative ? -exponent : exponent;
+    return at === digitsFrom ? -1 : at;
+  }
+
+  /** Magnitude of a number of many digits or with an exponent. */
+  private scanWide(bytes: Uint8Array, from: number, to: number, end: number): number {
+    let high = 0;
+    let low = 0;
+    let highDigits = 0;
+    let lowDigits = 0;
+    for (let at = from; at < to; at += 1) {
+      const digit = bytes[at]! - 48;
+      if (digit < 0) continue;
+      if (highDigits < 15) {
+        high = high * 10 + digit;
+        // Leading zeros don't use up precision.
+        if (high > 0) highDigits += 1;
+      } else {
+        low = low * 10 + digit;
+        lowDigits += 1;
+      }
+    }
+    const power = this.exponent - this.fractionDigits;
+    const all = lowDigits === 0 ? high : high * 10 ** lowDigits + low;
+    this.mantissa = all;
+    if (all === 0) return 0;
+    // Below 2^53 the sum is exact: so is each of its parts.
+    if (lowDigits <= 15 && all < 9007199254740992 && power >= -22 && power <= 22) {
+      return power < 0 ? all / exactPowers[-power]! : all * exactPowers[power]!;
+    }
+    const wide =
+      lowDigits > 0 && lowDigits <= 15 ? scaleWideDecimal(high, low, lowDigits, power) : NaN;
+    return Number.isNaN(wide) ? toNumber(asciiForMessage(bytes, from, end)) : wide;
+  }
+
+  /** @returns whether the whole text is one number; then the fields hold it */
+  scanText(text: string): boolean {
+    const bytes = encodeUtf8(`${text}\n`);
+    return this.scan(bytes, 0) === bytes.length - 1;
   }
 }
 

@@ -8,6 +8,10 @@ import { readUnusualRow, refuseValue } from './unusual-row.ts';
 import { TimeAxis } from './time-axis.ts';
 import type { Separator } from './waveform-csv.ts';
 
+// Local copies: an imported constant is looked up at every use by some module loaders.
+const lineBytesMax = maxLineBytes;
+const sampleMax = maxSampleMagnitude;
+
 const time = 1;
 const samples = 2;
 const ignore = 0;
@@ -53,6 +57,7 @@ export class RowReader {
   private readonly maxRows: number;
   private readonly maxSamples: number;
   private pendingBlankLines = 0;
+  private columnsRead = 0;
   private timeDecimals = 0;
   private timeMantissa = 0;
 
@@ -70,7 +75,8 @@ export class RowReader {
       .filter((column) => column.role === 'samples')
       .map(() => new GrowingSamples(setup.expectedRows));
     const timeColumn = setup.plan.find((column) => column.role === 'time');
-    this.axis = timeColumn === undefined ? null : new TimeAxis(timeColumn.timeUnitS);
+    this.axis =
+      timeColumn === undefined ? null : new TimeAxis(timeColumn.timeUnitS, setup.expectedRows);
   }
 
   /**
@@ -80,78 +86,73 @@ export class RowReader {
    * @returns index of the first byte not used: the start of an incomplete row
    */
   read(bytes: Uint8Array, from: number, to: number, final: boolean): number {
-    const { scanner, roles, row, separatorByte } = this;
-    const columnCount = roles.length;
-    const tabIsBlank = separatorByte !== 9;
-    const blankSeparates = separatorByte === 32;
+    // Behind the last line end no scan is safe from running out of the buffer.
+    let safeTo = to;
+    while (safeTo > from && bytes[safeTo - 1] !== 10 && bytes[safeTo - 1] !== 13) safeTo -= 1;
     let rowStart = from;
-
-    while (rowStart < to) {
-      let at = rowStart;
-      let column = 0;
-      let usual = true;
-      let atLineEnd = false;
-
-      for (;;) {
-        // The start of a cell, behind its blanks.
-        let byte = at < to ? bytes[at]! : 10;
-        while (byte === 32 || (byte === 9 && tabIsBlank)) {
-          at += 1;
-          byte = at < to ? bytes[at]! : 10;
-        }
-        atLineEnd = byte === 10 || byte === 13;
-        if (atLineEnd && (column === 0 || blankSeparates)) break;
-        if (column === columnCount) {
-          usual = false;
-          break;
-        }
-        if (atLineEnd || byte === separatorByte) {
-          row[column] = NaN;
-        } else {
-          const next = scanner.scan(bytes, at, to);
-          if (next < 0 || roles[column] === ignore) {
-            usual = false;
-            break;
-          }
-          row[column] = scanner.value;
-          if (roles[column] === time) {
-            this.timeDecimals = scanner.fractionDigits - scanner.exponent;
-            this.timeMantissa = scanner.mantissa;
-          }
-          if (scanner.mark === 44 && scanner.fractionDigits > 0) this.noteComma();
-          at = next;
-          byte = at < to ? bytes[at]! : 10;
-          const behind = at;
-          while (byte === 32 || (byte === 9 && tabIsBlank)) {
-            at += 1;
-            byte = at < to ? bytes[at]! : 10;
-          }
-          atLineEnd = byte === 10 || byte === 13;
-          if (!atLineEnd && byte !== separatorByte && !(blankSeparates && at > behind)) {
-            usual = false;
-            break;
-          }
-        }
-        column += 1;
-        if (atLineEnd) break;
-        if (!blankSeparates) at += 1;
-      }
-
-      if (!usual || (column !== columnCount && column !== 0)) {
-        const end = this.readUnusual(bytes, rowStart, to, final);
+    while (rowStart < safeTo) {
+      const lineEnd = this.readUsual(bytes, rowStart);
+      let end: number;
+      if (lineEnd < 0) {
+        end = this.readUnusual(bytes, rowStart, to, final);
         if (end < 0) return rowStart;
-        rowStart = end;
-        continue;
+      } else {
+        end = bytes[lineEnd] === 10 ? lineEnd + 1 : endOfLine(bytes, lineEnd, to, final);
+        if (end < 0) return rowStart;
+        if (end - rowStart > lineBytesMax) this.refuseLength();
+        if (this.columnsRead === 0) this.pendingBlankLines += 1;
+        else this.commit();
       }
-      const end = endOfLine(bytes, at, to, final);
-      if (end < 0) return rowStart;
-      if (end - rowStart > maxLineBytes) this.refuseLength();
-      if (column === 0) this.pendingBlankLines += 1;
-      else this.commit();
       this.line += 1;
       rowStart = end;
     }
-    return rowStart;
+    if (to - rowStart > lineBytesMax) this.refuseLength();
+    if (!final || rowStart >= to) return rowStart;
+    this.readUnusual(bytes, rowStart, to, true);
+    this.line += 1;
+    return to;
+  }
+
+  /**
+   * Reads a row of nothing but numbers, blank cells, blanks and separators into `row`.
+   *
+   * @returns index of the line end, or -1 where the row holds anything else or the wrong number of
+   *   cells; a blank line reads no column
+   */
+  private readUsual(bytes: Uint8Array, from: number): number {
+    const { scanner, roles, row, separatorByte } = this;
+    const columnCount = roles.length;
+    let at = from;
+    let column = 0;
+    let byte = bytes[at]!;
+    for (;;) {
+      while (byte === 32 || (byte === 9 && separatorByte !== 9)) byte = bytes[++at]!;
+      const blank = byte === 10 || byte === 13;
+      if (blank && (column === 0 || separatorByte === 32)) break;
+      if (column === columnCount) return -1;
+      if (blank || byte === separatorByte) {
+        row[column] = NaN;
+      } else {
+        if (roles[column] === ignore) return -1;
+        const next = scanner.scan(bytes, at);
+        if (next < 0) return -1;
+        row[column] = scanner.value;
+        if (roles[column] === time) {
+          this.timeDecimals = scanner.fractionDigits - scanner.exponent;
+          this.timeMantissa = scanner.mantissa;
+        }
+        if (scanner.mark === 44 && scanner.fractionDigits > 0) this.noteComma();
+        byte = bytes[next]!;
+        at = next;
+        while (byte === 32 || (byte === 9 && separatorByte !== 9)) byte = bytes[++at]!;
+      }
+      column += 1;
+      if (byte === 10 || byte === 13) break;
+      if (byte === separatorByte) byte = bytes[++at]!;
+      else if (separatorByte !== 32 || bytes[at - 1] !== 32) return -1;
+    }
+    this.columnsRead = column;
+    return column === columnCount || column === 0 ? at : -1;
   }
 
   /** Keeps the row gathered in `row`. */
@@ -164,9 +165,7 @@ export class RowReader {
       const role = roles[column]!;
       const value = row[column]!;
       if (role === samples) {
-        if (value > maxSampleMagnitude || value < -maxSampleMagnitude) {
-          refuseValue(value, maxSampleMagnitude, this.line);
-        }
+        if (value > sampleMax || value < -sampleMax) refuseValue(value, sampleMax, this.line);
         this.channels[channel]!.push(value);
         channel += 1;
       } else if (role === time) {
@@ -232,7 +231,7 @@ export class RowReader {
     let at = from;
     while (at < to && bytes[at] !== 10 && bytes[at] !== 13) at += 1;
     const end = endOfLine(bytes, at, to, final);
-    if (at - from > maxLineBytes) this.refuseLength();
+    if (at - from > lineBytesMax) this.refuseLength();
     if (end < 0) return -1;
     const isRow = readUnusualRow(bytes, from, at, {
       line: this.line,
@@ -249,7 +248,6 @@ export class RowReader {
     });
     if (isRow) this.commit();
     else this.pendingBlankLines += 1;
-    this.line += 1;
     return end;
   }
 
@@ -257,7 +255,7 @@ export class RowReader {
     throw new CsvError(
       'line-too-long',
       this.line,
-      `The line is longer than ${maxLineBytes} bytes; expected one row of numbers. ` +
+      `The line is longer than ${lineBytesMax} bytes; expected one row of numbers. ` +
         'Export the samples one row a line.',
     );
   }

@@ -14,9 +14,9 @@ const slowestUnnamedHz = 1;
  * Settles the sampling rate: the time column's where there is one, else as told, else the comment
  * line's.
  *
- * The rate of printed times is uncertain by their rounding. A told or noted rate within that
- * uncertainty is taken exactly as written, and so is a whole number of hertz within it; otherwise
- * the times decide. A told or noted rate more than 0.1 % off is a contradiction.
+ * The rate of printed times is uncertain by their rounding. A told or noted rate the times can't
+ * refute is taken exactly as written, and so is a whole number of hertz within their likely error;
+ * otherwise the times decide. A told or noted rate more than 0.1 % off is a contradiction.
  *
  * @param axis - what the time column says; null without one
  * @param unitNamed - whether the header or the mapping names the unit of the times
@@ -61,9 +61,7 @@ export function settleSampleRate(
     if (difference <= uncertainty) return { sampleRateHz: claimedHz, sampleRateSource: 'time' };
   }
   const whole = Math.round(byTimesHz);
-  const isWhole = whole > 0 && Math.abs(whole - byTimesHz) <= uncertainty * byTimesHz;
-  return {
-    sampleRateHz: isWhole && uncertainty < agreement ? whole : byTimesHz,
-    sampleRateSource: 'time',
-  };
+  const likely = Math.max(1e-9, Math.min(uncertainty, axis.likelyUncertainty));
+  const isWhole = whole > 0 && Math.abs(whole - byTimesHz) <= likely * byTimesHz;
+  return { sampleRateHz: isWhole ? whole : byTimesHz, sampleRateSource: 'time' };
 }

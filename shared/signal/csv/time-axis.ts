@@ -1,7 +1,8 @@
 import { CsvError } from './csv-error.ts';
 
 /** Times judged together; a longer file is judged block by block, so its times need not be kept. */
-const blockLength = 65_536;
+const blockLengthMax = 65_536;
+const blockLengthMin = 4096;
 
 /** Largest share of a step an interval may differ from the mean step. */
 const stepTolerance = 0.01;
@@ -11,8 +12,10 @@ const roundingShareMax = 0.2;
 
 export interface TimeAxisResult {
   sampleRateHz: number;
-  /** Largest relative error of the rate that the rounding of the printed times leaves. */
+  /** Largest relative error of the rate that the rounding of the printed times allows. */
   relativeUncertainty: number;
+  /** Relative error to expect (six standard deviations), the roundings being independent. */
+  likelyUncertainty: number;
   startTimeS: number;
   /** Whole numbers, each one more than the last: as likely a count of the samples as seconds. */
   isRunningNumber: boolean;
@@ -25,10 +28,13 @@ export interface TimeAxisResult {
  * unit of the last digit at each end, as the file prints them) is allowed for on top, since six
  * decimals at 25.6 kHz alone make 1.3 %. Intervals within 1 % may still add up: no time may stand
  * further from the even grid than half a step or 1e-4 of the block's length, whichever is more.
+ *
+ * The rate is that of the straight line through all times (least squares): the roundings of 16,384
+ * times average out to some 1e-8, while those of the two end times alone leave 1e-6.
  */
 export class TimeAxis {
-  private readonly times = new Float64Array(blockLength + 1);
-  private readonly lines = new Int32Array(blockLength + 1);
+  private readonly times: Float64Array;
+  private readonly lines: Int32Array;
   private used = 0;
   private count = 0;
   private first = 0;
@@ -37,9 +43,22 @@ export class TimeAxis {
   /** Most decimals any time was printed with, and the most digits, as the largest whole number of them. */
   private maxDecimals = 0;
   private maxMantissa = 0;
+  /** Sums over the rows of the deviation from an even grid, and of row number times deviation. */
+  private deviationSum = 0;
+  private momentSum = 0;
 
-  /** @param unitS - length of the written unit, s */
-  constructor(private readonly unitS: number) {}
+  /**
+   * @param unitS - length of the written unit, s
+   * @param expectedCount - times to expect, as far as known
+   */
+  constructor(
+    private readonly unitS: number,
+    expectedCount: number,
+  ) {
+    const length = Math.min(blockLengthMax, Math.max(blockLengthMin, expectedCount));
+    this.times = new Float64Array(length + 1);
+    this.lines = new Int32Array(length + 1);
+  }
 
   /**
    * @param decimals - digits behind the mark less the written exponent
@@ -54,7 +73,7 @@ export class TimeAxis {
     this.times[this.used] = time;
     this.lines[this.used] = line;
     this.used += 1;
-    if (this.used > blockLength) this.closeBlock();
+    if (this.used === this.times.length) this.closeBlock();
   }
 
   /**
@@ -62,12 +81,17 @@ export class TimeAxis {
    */
   finish(): TimeAxisResult {
     this.closeBlock();
-    const intervals = this.count - 1;
+    const { count } = this;
+    const intervals = count - 1;
     const span = this.last - this.first;
     const rounding = this.halfUnit(this.first) + this.halfUnit(this.last);
+    const spread = (count * (count * count - 1)) / 12;
+    const step = this.step + (this.momentSum - (intervals / 2) * this.deviationSum) / spread;
     return {
-      sampleRateHz: intervals / (span * this.unitS),
+      sampleRateHz: 1 / (step * this.unitS),
       relativeUncertainty: rounding / span + 1e-12,
+      // A rounding spreads evenly over ± half a unit: standard deviation half a unit over √3.
+      likelyUncertainty: (6 * rounding) / 2 / Math.sqrt(3 * spread) / step + 1e-12,
       startTimeS: this.first * this.unitS,
       isRunningNumber: Number.isInteger(this.first) && span === intervals,
     };
@@ -81,38 +105,64 @@ export class TimeAxis {
     for (let i = 1; i < n; i += 1) {
       if (!(times[i]! > times[i - 1]!)) this.refuseStanding(i);
     }
-    const first = times[0]!;
-    const blockStep = (times[n - 1]! - first) / (n - 1);
-    if (this.step === 0) this.step = this.typicalStep(n, blockStep);
-    const step = this.step;
-    const wander = Math.max(0.5 * step, 1e-4 * n * step);
-    for (let i = 1; i < n; i += 1) {
-      const halfUnits = this.halfUnit(times[i]!) + this.halfUnit(times[i - 1]!);
-      const rounding = halfUnits <= 2 * roundingShareMax * step ? halfUnits : 0;
-      const interval = times[i]! - times[i - 1]!;
-      const even = first + i * blockStep;
-      if (
-        Math.abs(interval - step) > stepTolerance * step + rounding ||
-        Math.abs(times[i]! - even) > wander
-      ) {
-        this.refuseUneven(lines[i]!, interval, step);
-      }
+    const meanStep = (times[n - 1]! - times[0]!) / (n - 1);
+    if (this.step === 0) this.step = meanStep;
+    if (this.firstUneven(n, this.step) > 0) {
+      const step = this.typicalStep(n);
+      const at = this.firstUneven(n, step);
+      const fault = at > 0 ? at : this.firstUneven(n, this.step);
+      this.refuseUneven(
+        lines[fault]!,
+        times[fault]! - times[fault - 1]!,
+        at > 0 ? step : this.step,
+      );
     }
+    this.addToLine(n);
     times[0] = times[n - 1]!;
     lines[0] = lines[n - 1]!;
     this.used = 1;
   }
 
+  /** Adds the block to the sums of the line through all times; its first time is in them already. */
+  private addToLine(n: number): void {
+    const rowOfFirst = this.count - n;
+    for (let i = 1; i < n; i += 1) {
+      const row = rowOfFirst + i;
+      const deviation = this.times[i]! - this.first - row * this.step;
+      this.deviationSum += deviation;
+      this.momentSum += row * deviation;
+    }
+  }
+
+  /** @returns index of the first time that breaks the step; 0 where none does */
+  private firstUneven(n: number, step: number): number {
+    const { times } = this;
+    const first = times[0]!;
+    const blockStep = (times[n - 1]! - first) / (n - 1);
+    const wander = Math.max(0.5, 1e-4 * n) * step;
+    const tolerance = stepTolerance * step;
+    for (let i = 1; i < n; i += 1) {
+      const time = times[i]!;
+      const off = Math.abs(time - times[i - 1]! - step);
+      if (off > tolerance) {
+        const rounding = this.halfUnit(time) + this.halfUnit(times[i - 1]!);
+        const allowed = rounding <= 2 * roundingShareMax * step ? rounding : 0;
+        if (off > tolerance + allowed) return i;
+      }
+      if (Math.abs(time - first - i * blockStep) > wander) return i;
+    }
+    return 0;
+  }
+
   /**
-   * Mean step where the times are even; the median where they aren't, so that the error names the
-   * line that breaks the step and not the first line of a mean that one gap has spoilt.
+   * Median step, for the error: it names the line that breaks the step and not the first line of a
+   * mean that one gap has spoilt.
    */
-  private typicalStep(n: number, meanStep: number): number {
+  private typicalStep(n: number): number {
     const intervals = new Float64Array(n - 1);
     for (let i = 1; i < n; i += 1) intervals[i - 1] = this.times[i]! - this.times[i - 1]!;
     intervals.sort();
-    const median = intervals[(n - 1) >> 1]!;
-    return Math.abs(median - meanStep) <= 0.2 * median ? meanStep : median;
+    return intervals[(n - 1) >> 1]!;
   }
 
   /** Half a unit of the last printed digit at a time, plus the rounding of a double. */

@@ -3,7 +3,7 @@ import { CsvError, quoteFound, type CsvErrorCode } from './csv-error.ts';
 import { isControl, refuseControl } from './encoding.ts';
 import { isGapText, type NumberScanner } from './number-scanner.ts';
 import { splitLine } from './split-line.ts';
-import { asciiForMessage, decodeUtf8, encodeUtf8 } from './utf8.ts';
+import { asciiForMessage, decodeUtf8 } from './utf8.ts';
 import type { Separator } from './waveform-csv.ts';
 
 export interface UnusualRow {
@@ -67,8 +67,7 @@ export function readUnusualRow(
       return;
     }
     if (isGapText(cell)) return;
-    const cellBytes = encodeUtf8(cell);
-    if (scanner.scan(cellBytes, 0, cellBytes.length) !== cellBytes.length) refuseCell(cell, into);
+    if (!scanner.scanText(cell)) refuseCell(cell, into);
     row[i] = scanner.value;
     if (scanner.mark === 44 && scanner.fractionDigits > 0) into.noteComma();
     if (column.role === 'time') {
