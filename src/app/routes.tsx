@@ -1,15 +1,35 @@
 import type { QueryClient } from '@tanstack/react-query';
 import type { RouteObject } from 'react-router-dom';
+import { homeLoader } from './home.ts';
+import { lazyPage } from './lazy-page.ts';
+import { siteRouteId } from './site-context.ts';
+import { siteIndexLoader, SiteLayout, siteLoader } from './site-layout.tsx';
 
 /**
- * The table of pages. A route module under `./routes/` exports `loader` and `Component` and is
- * loaded when it is gone to:
- *
- *     { path: '/machines', lazy: async () => {
- *         const { machinesLoader, MachinesPage } = await import('./routes/machines.tsx');
- *         return { loader: machinesLoader(queryClient), Component: MachinesPage };
- *     } }
+ * The table of pages. A route module under `./routes/` exports its loader and page and is loaded
+ * when it is gone to; `:siteId` pages find their site with `useSite()`.
  */
-export function routes(_queryClient: QueryClient): RouteObject[] {
+export function routes(queryClient: QueryClient): RouteObject[] {
+  return [
+    { path: '/', loader: homeLoader(queryClient) },
+    {
+      path: '/sign-in',
+      lazy: lazyPage(queryClient, async () => {
+        const { signInLoader, SignInPage } = await import('./routes/sign-in.tsx');
+        return { loader: signInLoader, Component: SignInPage };
+      }),
+    },
+    {
+      id: siteRouteId,
+      path: '/sites/:siteId',
+      loader: siteLoader(queryClient),
+      element: <SiteLayout />,
+      children: [{ index: true, loader: siteIndexLoader(queryClient) }, ...sitePages(queryClient)],
+    },
+  ];
+}
+
+/** The pages of a site, addresses below `/sites/:siteId`. */
+function sitePages(_queryClient: QueryClient): RouteObject[] {
   return [];
 }
