@@ -42,9 +42,20 @@ export const seatAssessment = z.object({
 });
 export type SeatAssessment = z.infer<typeof seatAssessment>;
 
+/** A seat of the next bearing positions, as far as it could explain the finding at hand. */
+export const neighbourSeat = z.object({
+  positionName: z.string(),
+  seat: seatName,
+  suspicionRank: z.int(),
+  suspicion: z.number().nullable(),
+  sentence: z.string(),
+});
+
 export const seatAssessmentsResponse = z.object({
   /** Empty for a plain bearing, which has no seats. */
   seats: z.array(seatAssessment),
+  /** Empty outside a finding. */
+  neighbours: z.array(neighbourSeat),
   /** Which seat fits the evidence, or which record is missing first. */
   conclusion: z.string(),
   cautions: z.array(z.string()),

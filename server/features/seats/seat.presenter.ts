@@ -1,0 +1,63 @@
+import type { SeatAssessment } from '#shared/contracts/seat-assessment.ts';
+import type { LimitsUm, SeatFit, SeatName } from '#shared/fits/fit-types.ts';
+import type { SeatRecord } from './seat-record.ts';
+
+/** Standard uncertainty of a diameter taken with a micrometer in the plant; see shared/fits/seat-fit. */
+const micrometerUncertaintyUm = 2;
+
+const pair = (limits: LimitsUm | undefined): [number, number] | null =>
+  limits === undefined ? null : [limits[0], limits[1]];
+
+const asDiameters = (limits: LimitsUm | undefined, nominalMm: number | null) =>
+  limits === undefined || nominalMm === null
+    ? null
+    : ([nominalMm + limits[0] / 1000, nominalMm + limits[1] / 1000] as [number, number]);
+
+function measured(fit: SeatFit, record: SeatRecord): SeatAssessment['measuredUm'] {
+  if (record.seatMeasuredMm === null || fit.interferenceUm === undefined) return null;
+  // With one part measured the other adds the spread of its tolerance, which the fit's range shows.
+  const uncertainty = Math.hypot(
+    micrometerUncertaintyUm,
+    record.ringMeasuredMm === null
+      ? (fit.interferenceUm.max - fit.interferenceUm.min) / 6
+      : micrometerUncertaintyUm,
+  );
+  return { value: fit.interferenceUm.mean, uncertainty };
+}
+
+export interface SeatFacts {
+  seat: SeatName;
+  nominalMm: number | null;
+  record: SeatRecord;
+  fit: SeatFit | undefined;
+  sentence: string;
+  suspicionRank: number | null;
+  suspicion: number | null;
+}
+
+/** One seat's records and what they mean. */
+export function presentSeat(facts: SeatFacts): SeatAssessment {
+  const { seat, nominalMm, record, fit } = facts;
+  return {
+    seat,
+    nominalMm,
+    toleranceClass: record.toleranceClass,
+    seatLimitsUm: pair(fit?.seatLimitsUm),
+    ringLimitsUm: pair(fit?.ringLimitsUm),
+    seatLimitsMm: asDiameters(fit?.seatLimitsUm, nominalMm),
+    interferenceUm: fit?.interferenceUm ?? null,
+    probableUm: fit?.probableUm ?? null,
+    measuredUm: fit === undefined ? null : measured(fit, record),
+    runningUm: fit?.runningUm ?? null,
+    recommendedClass: fit?.recommendedClass ?? null,
+    recommendationReason: fit?.reason ?? null,
+    verdict: fit?.verdict ?? 'not recorded',
+    outsideLimitsUm: fit?.outsideLimitsUm ?? null,
+    chanceOfClearance: fit?.chanceOfClearance ?? null,
+    lastCondition: record.condition,
+    lastRecordedOn: record.recordedOn,
+    suspicionRank: facts.suspicionRank,
+    suspicion: facts.suspicion,
+    sentence: facts.sentence,
+  };
+}
