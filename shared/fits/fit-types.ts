@@ -145,7 +145,8 @@ export interface SeatFit {
   neededUm?: number;
   recommendedClass?: string;
   reason?: string;
-  verdict: SeatVerdict;
+  /** Absent where a class is on record but nothing to compare it with (no load, no diameter). */
+  verdict?: SeatVerdict;
   /** By how much the seat lies outside its limits, µm, never negative; the verdict gives the side. */
   outsideLimitsUm?: number;
   /** Chance, 0–1, that the seat runs with more clearance than its class allows. */

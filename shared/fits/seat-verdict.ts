@@ -26,15 +26,17 @@ const toleranceUm = 1e-6;
  * - Not measured: the recorded class against the recommended one; it is "as recommended" where it
  *   lies wholly inside, otherwise the larger overhang decides.
  *
- * @returns verdict and amount ≥ 0 in µm; amount absent where there is nothing to compare
+ * @returns verdict and amount ≥ 0 in µm; absent where there is nothing to compare with
  */
 export function seatVerdict(seat: {
   recorded?: LimitsUm;
   recommended?: LimitsUm;
   measuredUm?: number;
-}): { verdict: SeatVerdict; outsideLimitsUm?: number } {
+}): { verdict?: SeatVerdict; outsideLimitsUm?: number } {
   const { recorded, recommended, measuredUm } = seat;
   if (recorded === undefined && measuredUm === undefined) return { verdict: 'not recorded' };
+  // A class on a drawing says nothing of itself while nothing is known of the load.
+  if (measuredUm === undefined && recommended === undefined) return {};
   const wanted = recommended ?? recorded;
   const fit: LimitsUm | undefined = measuredUm === undefined ? recorded : [measuredUm, measuredUm];
   if (!wanted || !fit) return { verdict: 'not recorded' };

@@ -1,4 +1,4 @@
-import type { SeatFit, SeatHistory, TaperedSeat } from './fit-types.ts';
+import type { SeatFit, SeatHistory, SeatVerdict, TaperedSeat } from './fit-types.ts';
 import { looseChance } from './loose-chance.ts';
 import { meanWearUm } from './seat-wear.ts';
 import { taperedMounting } from './tables/tapered-mounting.ts';
@@ -6,7 +6,7 @@ import { taperedMounting } from './tables/tapered-mounting.ts';
 /** Standard uncertainty of a clearance felt with a gauge, µm (assumption, no source). */
 const gaugeUncertaintyUm = 5;
 
-function judged(value: number, range: readonly [number, number]): SeatFit['verdict'] {
+function judged(value: number, range: readonly [number, number]): SeatVerdict {
   if (value < range[0]) return 'looser';
   return value > range[1] ? 'tighter' : 'as recommended';
 }
