@@ -106,7 +106,8 @@ function placeTime(
   const others = plan.slice(1).filter((column) => column.role === 'samples');
   const firstSays = said[0] ?? null;
   const mayBeTime =
-    first.role === 'samples' && (firstSays === null || firstSays.kind === 'unknown');
+    first.role === 'samples' &&
+    (firstSays === null || (firstSays.kind === 'unknown' && firstSays.unitText === null));
   const indexBefore = said.some((cell) => cell?.kind === 'index');
   if (times.length === 0 && mayBeTime && !firstIsMapped && !indexBefore && others.length > 0) {
     first.role = 'time';

@@ -18,6 +18,8 @@ const longestText = 200;
 /** Gathers the comment lines of one file and holds each against what was said before. */
 export class CommentLines {
   private readonly found = new Map<CommentKey, { value: string | number; line: number }>();
+  /** Comment lines taken, remarks without a key included. */
+  count = 0;
   private readonly other: { key: string; value: string; line: number }[] = [];
 
   /**
@@ -28,6 +30,7 @@ export class CommentLines {
    *   `contradictory-comments` where the key was there before with another value
    */
   add(text: string, line: number): void {
+    this.count += 1;
     // A spreadsheet pads comment lines to the width of the table.
     const content = text.slice(1).replace(/[,;\t ]+$/u, '');
     const colon = content.indexOf(':');

@@ -53,9 +53,11 @@ const quantityNames: readonly (readonly [RegExp, Quantity])[] = [
  * The last pair of brackets or parentheses is the unit where it names one; otherwise the last pair
  * at the end of the cell. A unit that is none of ours is kept as text and left to a person.
  *
- * @throws {CsvError} `contradictory-header` where name and unit say different quantities
+ * @throws {CsvError} `contradictory-header` where name and unit say different quantities, where a
+ *   time is in no unit of time, or where a bracket is left open: a unit half read is a wrong one
  */
 export function readHeaderCell(cell: string, line: number): HeaderCell {
+  refuseOpenBracket(cell, line);
   const { name, unitText } = splitUnit(cell);
   const timeUnitS = unitText === null ? undefined : timeUnits.get(unitText.trim().toLowerCase());
   const unit = unitText === null ? null : parseUnit(unitText);
@@ -64,7 +66,8 @@ export function readHeaderCell(cell: string, line: number): HeaderCell {
 
   if (nameQuantity === null && unit === null) {
     const isTime = timeName.test(name) || (timeUnitS !== undefined && !indexName.test(name));
-    if (isTime && (unitText === null || timeUnitS !== undefined)) {
+    if (isTime) {
+      if (unitText !== null && timeUnitS === undefined) refuseTimeUnit(cell, line);
       return {
         name,
         kind: 'time',
@@ -88,6 +91,26 @@ export function readHeaderCell(cell: string, line: number): HeaderCell {
   }
   const quantity = unit !== null ? quantityOfUnit[unit] : nameQuantity;
   return { name, kind: 'samples', quantity, unit, unitText, timeUnitS: 1 };
+}
+
+function refuseOpenBracket(cell: string, line: number): void {
+  const count = (mark: string) => cell.split(mark).length;
+  if (count('[') === count(']') && count('(') === count(')')) return;
+  throw new CsvError(
+    'contradictory-header',
+    line,
+    `The header ${quoteFound(cell)} has a bracket without its partner; expected the unit in ` +
+      'brackets or parentheses. Correct the header.',
+  );
+}
+
+function refuseTimeUnit(cell: string, line: number): never {
+  throw new CsvError(
+    'contradictory-header',
+    line,
+    `The header ${quoteFound(cell)} names no unit of time; expected s, ms, µs, ns or min. Correct ` +
+      'the header, or map the column as ignored and tell the sampling rate.',
+  );
 }
 
 function splitUnit(cell: string): { name: string; unitText: string | null } {

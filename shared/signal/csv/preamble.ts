@@ -156,8 +156,7 @@ function nextContent(cursor: LineCursor, comments: CommentLines): Line | null {
 }
 
 function refuseEmpty(comments: CommentLines): never {
-  const said = comments.finish();
-  const hasComments = said.other.length > 0 || Object.keys(said).length > 1;
+  const hasComments = comments.count > 0;
   throw new CsvError(
     hasComments ? 'no-data' : 'empty-file',
     null,

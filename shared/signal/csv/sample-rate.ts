@@ -8,7 +8,7 @@ import type { SampleRateSource } from './waveform-csv.ts';
 const agreement = 1e-3;
 
 /** Slowest rate believed of a time column whose unit isn't named: below it, it isn't in seconds. */
-const slowestUnnamedHz = 1;
+const slowestUnnamedHz = 10;
 
 /**
  * Settles the sampling rate: the time column's where there is one, else as told, else the comment
