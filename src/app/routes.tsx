@@ -3,10 +3,11 @@ import type { RouteObject } from 'react-router-dom';
 import { homeLoader } from './home.ts';
 import { lazyPage } from './lazy-page.ts';
 import { siteRouteId } from './site-context.ts';
+import { sitePages } from './site-pages.ts';
 import { siteIndexLoader, SiteLayout, siteLoader } from './site-layout.tsx';
 
 /**
- * The table of pages. A route module under `./routes/` exports its loader and page and is loaded
+ * The table of pages; those of a site stand in `site-pages.ts`. A route module under `./routes/` exports its loader and page and is loaded
  * when it is gone to; `:siteId` pages find their site with `useSite()`.
  */
 export function routes(queryClient: QueryClient): RouteObject[] {
@@ -27,9 +28,4 @@ export function routes(queryClient: QueryClient): RouteObject[] {
       children: [{ index: true, loader: siteIndexLoader(queryClient) }, ...sitePages(queryClient)],
     },
   ];
-}
-
-/** The pages of a site, addresses below `/sites/:siteId`. */
-function sitePages(_queryClient: QueryClient): RouteObject[] {
-  return [];
 }

@@ -1,0 +1,44 @@
+import type { QueryClient } from '@tanstack/react-query';
+import type { RouteObject } from 'react-router-dom';
+import { lazyPage } from './lazy-page.ts';
+
+type Load = Parameters<typeof lazyPage>[1];
+
+/** The pages of a site by their address below `/sites/:siteId`. */
+const pages: Readonly<Record<string, Load>> = {
+  machines: async () => {
+    const { machinesLoader, MachinesPage } = await import('./routes/machines.tsx');
+    return { loader: machinesLoader, Component: MachinesPage };
+  },
+  'machines/new': async () => {
+    const { machineEditLoader, MachineNewPage } = await import('./routes/machine-edit.tsx');
+    return { loader: machineEditLoader, Component: MachineNewPage };
+  },
+  'machines/:machineId': async () => {
+    const { machineLoader, MachinePage } = await import('./routes/machine.tsx');
+    return { loader: machineLoader, Component: MachinePage };
+  },
+  'machines/:machineId/edit': async () => {
+    const { machineEditLoader, MachineEditPage } = await import('./routes/machine-edit.tsx');
+    return { loader: machineEditLoader, Component: MachineEditPage };
+  },
+  routes: async () => {
+    const { routesLoader, RoutesPage } = await import('./routes/routes.tsx');
+    return { loader: routesLoader, Component: RoutesPage };
+  },
+  'routes/new': async () => {
+    const { routeEditLoader, RouteNewPage } = await import('./routes/route-edit.tsx');
+    return { loader: routeEditLoader, Component: RouteNewPage };
+  },
+  'routes/:routeId': async () => {
+    const { routeLoader, RoutePage } = await import('./routes/route.tsx');
+    return { loader: routeLoader, Component: RoutePage };
+  },
+  'routes/:routeId/edit': async () => {
+    const { routeEditLoader, RouteEditPage } = await import('./routes/route-edit.tsx');
+    return { loader: routeEditLoader, Component: RouteEditPage };
+  },
+};
+
+export const sitePages = (queryClient: QueryClient): RouteObject[] =>
+  Object.entries(pages).map(([path, load]) => ({ path, lazy: lazyPage(queryClient, load) }));
