@@ -11,6 +11,12 @@ import { Database } from './db/database.ts';
 import { administrationRoutes } from './features/administration/administration.routes.ts';
 import { AdministrationService } from './features/administration/administration.service.ts';
 import { demoMailboxRoutes } from './features/demo-mailbox/demo-mailbox.routes.ts';
+import { findingEvidence } from './features/findings/finding-evidence.ts';
+import { moveFinding } from './features/findings/finding-progress.ts';
+import { findingRoutes } from './features/findings/finding.routes.ts';
+import { FindingService } from './features/findings/finding.service.ts';
+import { inspectionRoutes } from './features/inspections/inspection.routes.ts';
+import { InspectionService } from './features/inspections/inspection.service.ts';
 import { memberRoutes } from './features/members/members.routes.ts';
 import { fitChecks } from './features/register/fit-checks.ts';
 import { machineRoutes, positionRoutes } from './features/register/machine.routes.ts';
@@ -18,10 +24,15 @@ import { MachineService } from './features/register/machine.service.ts';
 import { PositionService } from './features/register/position.service.ts';
 import { routeRoutes } from './features/register/route.routes.ts';
 import { RouteService } from './features/register/route.service.ts';
+import { reviewRoutes } from './features/review/review.routes.ts';
+import { ReviewService } from './features/review/review.service.ts';
+import { seatRoutes } from './features/seats/seat.routes.ts';
+import { SeatService } from './features/seats/seat.service.ts';
 import type { Route } from './http/route.ts';
 import type { RouteContext } from './http/run-route.ts';
 import { DemoMailRepository } from './mail/demo-mail.repository.ts';
 import { FakeSmtpServer } from './mail/fake-smtp-server.ts';
+import { OutboxRepository } from './mail/outbox.repository.ts';
 import { OutboxSender } from './mail/outbox-sender.ts';
 import type { ProductResponse } from '#shared/contracts/session.ts';
 
@@ -34,6 +45,9 @@ export interface Product {
     machines: MachineService;
     positions: PositionService;
     routes: RouteService;
+    review: ReviewService;
+    findings: FindingService;
+    inspections: InspectionService;
   };
   /** Starts what works in the background: screening, mail. */
   start: () => Promise<void>;
@@ -59,6 +73,21 @@ export function compose(
   const machines = new MachineService(database, accounts);
   const positions = new PositionService(database, fitChecks);
   const walkRoutes = new RouteService(database);
+  const seats = new SeatService(database);
+  const assessSeats = seats.assess.bind(seats);
+  const review = new ReviewService(database, findingEvidence);
+  const findings = new FindingService(database, {
+    assessSeats,
+    inspectionsOf: (findingId) => inspections.ofFinding(findingId),
+  });
+  const inspections: InspectionService = new InspectionService(database, {
+    findingBackground: findings.background.bind(findings),
+    moveFinding,
+    assessSeats,
+    membersOf: (siteId) => accounts.membersOf(siteId),
+    addMail: (db, mail, now) => new OutboxRepository(db).add(mail, now),
+    publicUrl: options.publicUrl,
+  });
   const demoMails = new DemoMailRepository(database.db);
 
   const routes = [
@@ -68,6 +97,10 @@ export function compose(
     ...machineRoutes(machines),
     ...positionRoutes(positions),
     ...routeRoutes(walkRoutes),
+    ...seatRoutes(seats),
+    ...reviewRoutes(review),
+    ...findingRoutes(findings),
+    ...inspectionRoutes(inspections),
     ...(config.demo ? demoMailboxRoutes(demoMails, options.publicUrl) : []),
   ];
 
@@ -75,7 +108,15 @@ export function compose(
   const background: { stop: () => Promise<void> }[] = [];
   return {
     routes,
-    services: { administration, machines, positions, routes: walkRoutes },
+    services: {
+      administration,
+      machines,
+      positions,
+      routes: walkRoutes,
+      review,
+      findings,
+      inspections,
+    },
     routeContext: {
       roleAt: (userId, siteId) => accounts.roleAt(userId, siteId),
       principalOf: async (req, res) => {

@@ -1,4 +1,4 @@
-import type { SeatFit, SeatName } from '#shared/fits/fit-types.ts';
+import type { SeatFit, SeatName, SeatVerdict } from '#shared/fits/fit-types.ts';
 import type { SeatRecord } from './seat-record.ts';
 
 const um = (value: number) => `${Math.round(Math.abs(value) * 10) / 10} µm`;
@@ -8,23 +8,20 @@ const fitWords = (value: number) =>
 function verdictWords(fit: SeatFit): string {
   const by = fit.outsideLimitsUm ? ` by ${um(fit.outsideLimitsUm)}` : '';
   const asked = fit.recommendedClass ?? 'the class on record';
-  switch (fit.verdict) {
-    case 'as recommended':
-      return `which agrees with ${asked}`;
-    case 'looser':
-      return `which is looser than ${asked}${by}`;
-    case 'tighter':
-      return `which is tighter than ${asked}${by}`;
-    case 'not recorded':
-      return 'and nothing tells whether that is right';
-  }
+  const words: Readonly<Record<SeatVerdict, string>> = {
+    'as recommended': `which agrees with ${asked}`,
+    looser: `which is looser than ${asked}${by}`,
+    tighter: `which is tighter than ${asked}${by}`,
+    'not recorded': 'and nothing tells whether that is right',
+  };
+  return words[fit.verdict ?? 'not recorded'];
 }
 
 /** What the records of one seat mean, in one sentence, outside any finding. */
 export function seatSentence(seat: SeatName, fit: SeatFit | undefined, record: SeatRecord): string {
   const name = seat === 'shaft' ? 'The shaft seat' : 'The housing seat';
   if (fit === undefined) return `${name} can't be judged: its nominal size is not on record.`;
-  if (fit.verdict === 'not recorded') {
+  if ((fit.verdict ?? 'not recorded') === 'not recorded') {
     return (
       fit.reason ??
       `${name} has neither class nor diameter on record; get the drawing, or measure it at the next opening.`
