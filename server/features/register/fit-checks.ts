@@ -1,32 +1,92 @@
+import { bearingByDesignation } from '#shared/fits/bearing-designation.ts';
+import { FitInputError } from '#shared/fits/fit-input-error.ts';
+import { measuredDeviationUm } from '#shared/fits/measured-diameter.ts';
+import { resolvePosition } from '#shared/fits/resolve-position.ts';
+import { seatClassLimitsUm } from '#shared/fits/seat-class-limits.ts';
 import type { FitChecks } from './position.service.ts';
 
-/** A seat's measured diameter further than this from its nominal size is a slip of the pen. */
-const plausibleShare = 0.02;
-const mmPerInch = 25.4;
+type Fault = { path: string; message: string };
 
-function diameterFault(measuredMm: number, nominalMm: number): string | null {
-  const near = (value: number) => Math.abs(value / nominalMm - 1) <= plausibleShare;
-  if (near(measuredMm)) return null;
-  const expected = `The nominal size is ${nominalMm} mm.`;
-  if (near(measuredMm * mmPerInch)) return `${measuredMm} looks like inches. ${expected}`;
-  for (const factor of [10, 100, 1000]) {
-    if (near(measuredMm * factor) || near(measuredMm / factor)) {
-      return `${measuredMm} mm looks a factor ${factor} off. ${expected}`;
-    }
+/** Fields of the register by the name the fit functions give them. */
+const fieldOf: Readonly<Record<string, string>> = {
+  d: 'boreMm',
+  D: 'outsideMm',
+  B: 'widthMm',
+  shaftClass: 'toleranceClass',
+  housingClass: 'toleranceClass',
+};
+
+/** Runs a check and turns what it throws into a fault of the form; other errors pass on. */
+function faultOf(check: () => unknown): Fault[] {
+  try {
+    check();
+    return [];
+  } catch (error) {
+    if (!(error instanceof FitInputError)) throw error;
+    return [{ path: fieldOf[error.field] ?? error.field, message: error.message }];
   }
-  return `${measuredMm} mm is not a size this seat can have. ${expected}`;
+}
+
+type Sizes = Parameters<FitChecks['recordFaults']>[0];
+
+/** The designation's own sizes where the tables know it; a maker's own designation tells nothing. */
+function knownDesignation(designation: string | null) {
+  if (designation === null) return undefined;
+  try {
+    return bearingByDesignation(designation);
+  } catch (error) {
+    if (error instanceof FitInputError) return undefined;
+    throw error;
+  }
+}
+
+function nominalOf(position: Sizes, seat: 'shaft' | 'housing'): number | null {
+  const bearing = knownDesignation(position.designation);
+  return seat === 'shaft'
+    ? (position.boreMm ?? bearing?.d ?? null)
+    : (position.outsideMm ?? bearing?.D ?? null);
 }
 
 /** Checks of fit data that the register makes before anything is written. */
 export const fitChecks: FitChecks = {
-  positionFaults: () => [],
+  positionFaults: (position) => {
+    const sized = position.boreMm !== null && position.outsideMm !== null;
+    const known = knownDesignation(position.designation) !== undefined;
+    // A designation outside the tables is as good as none, if the sizes are given by hand.
+    if (position.designation !== null && !known && !sized) {
+      return faultOf(() => bearingByDesignation(position.designation ?? ''));
+    }
+    if (!known && position.boreMm === null && position.outsideMm === null) return [];
+    return faultOf(() =>
+      resolvePosition({
+        ...(known && position.designation !== null ? { designation: position.designation } : {}),
+        ...(position.boreMm === null ? {} : { d: position.boreMm }),
+        ...(position.outsideMm === null ? {} : { D: position.outsideMm }),
+      }),
+    );
+  },
   recordFaults: (position, record) => {
-    const nominalMm = record.seat === 'shaft' ? position.boreMm : position.outsideMm;
-    if (nominalMm === null) return [];
-    return (['seatMeasuredMm', 'ringMeasuredMm'] as const).flatMap((path) => {
-      const measured = record[path];
-      const message = measured === null ? null : diameterFault(measured, nominalMm);
-      return message === null ? [] : [{ path, message }];
-    });
+    const nominalMm = nominalOf(position, record.seat);
+    const { toleranceClass } = record;
+    if (nominalMm === null) {
+      if (toleranceClass === null && record.seatMeasuredMm === null) return [];
+      return [
+        {
+          path: 'seat',
+          message: `The size of the ${record.seat} seat is not known: enter the bearing's designation or its ${record.seat === 'shaft' ? 'bore d' : 'outside diameter D'} first.`,
+        },
+      ];
+    }
+    return [
+      ...(toleranceClass === null
+        ? []
+        : faultOf(() => seatClassLimitsUm(record.seat, nominalMm, toleranceClass))),
+      ...(['seatMeasuredMm', 'ringMeasuredMm'] as const).flatMap((path) => {
+        const measured = record[path];
+        return measured === null
+          ? []
+          : faultOf(() => measuredDeviationUm(measured, nominalMm, path));
+      }),
+    ];
   },
 };
