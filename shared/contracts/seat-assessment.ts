@@ -28,7 +28,8 @@ export const seatAssessment = z.object({
   runningUm: spreadUm.nullable(),
   recommendedClass: z.string().nullable(),
   recommendationReason: z.string().nullable(),
-  verdict: z.enum(seatVerdicts),
+  /** Null where a class is on record and nothing to compare it with. */
+  verdict: z.enum(seatVerdicts).nullable(),
   outsideLimitsUm: z.number().nullable(),
   chanceOfClearance: z.number().nullable(),
   lastCondition: seatCondition.nullable(),

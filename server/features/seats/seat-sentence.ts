@@ -14,14 +14,16 @@ function verdictWords(fit: SeatFit): string {
     tighter: `which is tighter than ${asked}${by}`,
     'not recorded': 'and nothing tells whether that is right',
   };
-  return words[fit.verdict ?? 'not recorded'];
+  return fit.verdict === undefined
+    ? 'with nothing on record to compare it with'
+    : words[fit.verdict];
 }
 
 /** What the records of one seat mean, in one sentence, outside any finding. */
 export function seatSentence(seat: SeatName, fit: SeatFit | undefined, record: SeatRecord): string {
   const name = seat === 'shaft' ? 'The shaft seat' : 'The housing seat';
   if (fit === undefined) return `${name} can't be judged: its nominal size is not on record.`;
-  if ((fit.verdict ?? 'not recorded') === 'not recorded') {
+  if (fit.verdict === 'not recorded') {
     return (
       fit.reason ??
       `${name} has neither class nor diameter on record; get the drawing, or measure it at the next opening.`

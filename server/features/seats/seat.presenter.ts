@@ -51,7 +51,7 @@ export function presentSeat(facts: SeatFacts): SeatAssessment {
     runningUm: fit?.runningUm ?? null,
     recommendedClass: fit?.recommendedClass ?? null,
     recommendationReason: fit?.reason ?? null,
-    verdict: fit?.verdict ?? 'not recorded',
+    verdict: fit === undefined ? 'not recorded' : (fit.verdict ?? null),
     outsideLimitsUm: fit?.outsideLimitsUm ?? null,
     chanceOfClearance: fit?.chanceOfClearance ?? null,
     lastCondition: record.condition,

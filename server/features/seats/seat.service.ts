@@ -135,7 +135,7 @@ const faultSentence = (fault: string) =>
 
 function presentAlone(own: Assessed): SeatAssessmentsResponse {
   const missing = seats.filter(
-    (seat) => (own.fits[seat]?.verdict ?? 'not recorded') === 'not recorded',
+    (seat) => own.fits[seat] === undefined || own.fits[seat].verdict === 'not recorded',
   );
   const conclusion =
     own.fault !== null
