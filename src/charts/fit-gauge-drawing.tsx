@@ -1,0 +1,292 @@
+import { useId } from 'react';
+import {
+  drawnFitUm,
+  gaugeScale,
+  isLooserThanDrawn,
+  yOf,
+  type FitGaugeData,
+  type GaugeScale,
+  type RangeUm,
+} from './fit-gauge-geometry.ts';
+import { formatSigned } from '#src/lib/numbers.ts';
+
+const width = 430;
+const height = 232;
+const top = 20;
+const plotHeight = 192;
+const axisX = 46;
+/** Left of this the sizes of the two parts, right of it the fit they make. */
+const divideX = 236;
+const columns = { seat: 66, ring: 146, drawn: 270, measured: 326, running: 372 };
+const zoneWidth = 56;
+
+/** The picture alone; the words that say the same are FitGauge's. */
+export function FitGaugeDrawing({ data }: { data: FitGaugeData }) {
+  const hatchId = useId();
+  const scale = gaugeScale(data);
+  const y = (valueUm: number) => top + yOf(valueUm, scale, plotHeight);
+  const drawn = drawnFitUm(data) ?? data.interferenceUm ?? null;
+  return (
+    <svg
+      aria-hidden="true"
+      viewBox={`0 0 ${width} ${height}`}
+      className="figures w-full text-[11px]"
+    >
+      <defs>
+        <pattern
+          id={hatchId}
+          width="5"
+          height="5"
+          patternUnits="userSpaceOnUse"
+          patternTransform="rotate(45)"
+        >
+          <path d="M0 0v5" stroke="var(--tone-ink-soft)" strokeWidth="1.3" />
+        </pattern>
+      </defs>
+      <Axis scale={scale} y={y} />
+      {data.seatLimitsUm && (
+        <Zone
+          x={columns.seat}
+          limits={data.seatLimitsUm}
+          y={y}
+          fill="var(--tone-fit-wash)"
+          stroke="var(--tone-fit)"
+          name={data.seatClass ?? (data.seat === 'shaft' ? 'shaft' : 'housing')}
+        />
+      )}
+      {data.ringLimitsUm && (
+        <Zone
+          x={columns.ring}
+          limits={data.ringLimitsUm}
+          y={y}
+          fill={`url(#${hatchId})`}
+          stroke="var(--tone-ink-soft)"
+          name="ring"
+        />
+      )}
+      {drawn && (
+        <Dimension x={columns.drawn} min={drawn.min} mean={drawn.mean} max={drawn.max} y={y} />
+      )}
+      {data.measuredUm && (
+        <Measured
+          x={columns.measured}
+          value={data.measuredUm.value}
+          uncertainty={data.measuredUm.uncertainty}
+          loose={isLooserThanDrawn(data)}
+          y={y}
+        />
+      )}
+      {data.runningUm && (
+        <Running
+          x={columns.running}
+          range={[data.runningUm.min, data.runningUm.max]}
+          mean={data.runningUm.mean}
+          from={data.measuredUm?.value ?? drawn?.mean ?? null}
+          fromX={data.measuredUm ? columns.measured : columns.drawn}
+          y={y}
+        />
+      )}
+    </svg>
+  );
+}
+
+type Place = (valueUm: number) => number;
+
+function Axis({ scale, y }: { scale: GaugeScale; y: Place }) {
+  return (
+    <>
+      {scale.ticksUm.map((tick) => (
+        <g key={tick}>
+          <path
+            d={`M${axisX} ${y(tick)}H${width - 4}`}
+            stroke={tick === 0 ? 'var(--tone-ink)' : 'var(--tone-hairline)'}
+            strokeWidth={tick === 0 ? 1.6 : 0.8}
+          />
+          <text x={axisX - 6} y={y(tick) + 3.5} textAnchor="end" fill="var(--tone-ink-faint)">
+            {formatSigned(tick, 0)}
+          </text>
+        </g>
+      ))}
+      <text x={axisX - 6} y={10} textAnchor="end" fill="var(--tone-ink-faint)">
+        µm
+      </text>
+      <path
+        d={`M${divideX} ${top - 14}V${height - 4}`}
+        stroke="var(--tone-rule)"
+        strokeWidth="0.8"
+      />
+      <g className="font-sans" fill="var(--tone-ink-soft)">
+        <text x={axisX + 4} y={10}>
+          sizes against nominal
+        </text>
+        <text x={divideX + 8} y={10}>
+          ↑ interference
+        </text>
+        <text x={divideX + 8} y={height - 6}>
+          ↓ clearance
+        </text>
+      </g>
+    </>
+  );
+}
+
+function Zone({
+  x,
+  limits: [lower, upper],
+  y,
+  fill,
+  stroke,
+  name,
+}: {
+  x: number;
+  limits: RangeUm;
+  y: Place;
+  fill: string;
+  stroke: string;
+  name: string;
+}) {
+  const centre = x + zoneWidth / 2;
+  const zoneHeight = Math.max(1.5, y(lower) - y(upper));
+  return (
+    <g>
+      <rect x={x} y={y(upper)} width={zoneWidth} height={zoneHeight} fill="var(--tone-sheet)" />
+      <rect
+        x={x}
+        y={y(upper)}
+        width={zoneWidth}
+        height={zoneHeight}
+        fill={fill}
+        stroke={stroke}
+        strokeWidth="1.2"
+      />
+      <Label x={centre} y={y(upper) - 4} text={formatSigned(upper, 0)} />
+      <Label x={centre} y={y(upper) + zoneHeight + 11} text={formatSigned(lower, 0)} />
+      {zoneHeight > 17 && <Label x={centre} y={y(upper) + zoneHeight / 2 + 4} text={name} strong />}
+    </g>
+  );
+}
+
+/** Written on a patch of paper, so that a line behind it does not strike it through. */
+function Label({
+  x,
+  y,
+  text,
+  strong = false,
+}: {
+  x: number;
+  y: number;
+  text: string;
+  strong?: boolean;
+}) {
+  return (
+    <text
+      x={x}
+      y={y}
+      textAnchor="middle"
+      fill="var(--tone-ink)"
+      stroke="var(--tone-sheet)"
+      strokeWidth="3.5"
+      paintOrder="stroke"
+      fontWeight={strong ? 650 : undefined}
+    >
+      {text}
+    </text>
+  );
+}
+
+/** The allowed fit as a dimension line with its mean. */
+function Dimension({
+  x,
+  min,
+  mean,
+  max,
+  y,
+}: {
+  x: number;
+  min: number;
+  mean: number;
+  max: number;
+  y: Place;
+}) {
+  return (
+    <g stroke="var(--tone-fit)" strokeWidth="1.6" fill="none">
+      <path d={`M${x - 12} ${y(max)}h24M${x - 12} ${y(min)}h24M${x} ${y(max)}V${y(min)}`} />
+      <path d={`M${x - 6} ${y(mean)}h12`} strokeWidth="3" />
+      <g stroke="none">
+        <Label x={x} y={y(max) - 5} text={formatSigned(max, 0)} />
+        <Label x={x} y={y(min) + 13} text={formatSigned(min, 0)} />
+      </g>
+    </g>
+  );
+}
+
+function Measured({
+  x,
+  value,
+  uncertainty,
+  loose,
+  y,
+}: {
+  x: number;
+  value: number;
+  uncertainty: number | null;
+  loose: boolean;
+  y: Place;
+}) {
+  const colour = loose ? 'var(--tone-evidence)' : 'var(--tone-ink)';
+  const doubt = uncertainty === null ? 0 : 2 * uncertainty;
+  return (
+    <g stroke={colour} strokeWidth="1.4">
+      {doubt > 0 && (
+        <path
+          d={`M${x} ${y(value + doubt)}V${y(value - doubt)}M${x - 5} ${y(value + doubt)}h10M${x - 5} ${y(value - doubt)}h10`}
+        />
+      )}
+      <circle cx={x} cy={y(value)} r="5.5" fill={colour} />
+      {loose && <path d={`M${x - 9} ${y(value) + 9}L${x + 9} ${y(value) - 9}`} strokeWidth="2" />}
+      <g stroke="none">
+        <Label x={x} y={y(value + doubt) - (loose ? 8 : 6)} text={formatSigned(value, 0)} strong />
+      </g>
+    </g>
+  );
+}
+
+function Running({
+  x,
+  range: [min, max],
+  mean,
+  from,
+  fromX,
+  y,
+}: {
+  x: number;
+  range: RangeUm;
+  mean: number;
+  from: number | null;
+  fromX: number;
+  y: Place;
+}) {
+  return (
+    <g stroke="var(--tone-fit)" fill="none">
+      <rect
+        x={x - 9}
+        y={y(max)}
+        width={18}
+        height={Math.max(2, y(min) - y(max))}
+        strokeDasharray="4 2.5"
+        strokeWidth="1.3"
+      />
+      <path d={`M${x - 9} ${y(mean)}h18`} strokeWidth="2.4" />
+      {from !== null && (
+        <path
+          d={`M${fromX + 9} ${y(from)}L${x - 12} ${y(mean)}`}
+          strokeWidth="1"
+          strokeDasharray="1.5 2"
+        />
+      )}
+      <g stroke="none" className="font-sans">
+        <Label x={x + 2} y={y(min) + 13} text="warm" />
+      </g>
+    </g>
+  );
+}

@@ -1,0 +1,98 @@
+import { decimateMinMax } from './decimate-min-max.ts';
+import type { OrderMark } from './order-mark.ts';
+import { isWholeOrder } from './order-mark.ts';
+
+export interface Spectrum {
+  /** Frequency of line i is i × stepHz. */
+  stepHz: number;
+  amplitude: Float32Array;
+}
+
+/** Above this a plot keeps the extremes of buckets instead of every line. */
+export const spectrumMaxPoints = 12_000;
+
+export interface SpectrumSeries {
+  x: Float64Array;
+  y: Float64Array;
+  linesPerPoint: number;
+}
+
+/**
+ * A spectrum as the plot takes it.
+ *
+ * @param unitsPerHz - scale of the x axis (60 for 1/min, 1/speed for orders)
+ * @param floor - least value drawn; a logarithmic axis has no place for zero
+ */
+export function spectrumSeries(
+  { stepHz, amplitude }: Spectrum,
+  unitsPerHz: number,
+  floor: number | null,
+): SpectrumSeries {
+  const { index, value, samplesPerPoint } = decimateMinMax(
+    amplitude,
+    0,
+    amplitude.length,
+    spectrumMaxPoints,
+  );
+  const x = index.map((line) => line * stepHz * unitsPerHz);
+  const y = floor === null ? value : value.map((amplitudeAt) => Math.max(floor, amplitudeAt));
+  return { x, y, linesPerPoint: samplesPerPoint };
+}
+
+/** The lower end of a logarithmic axis: five decades below the greatest line. */
+export function logFloor(amplitude: Float32Array): number {
+  let max = 0;
+  for (const value of amplitude) if (value > max) max = value;
+  return max > 0 ? max * 1e-5 : 1e-6;
+}
+
+/** The greatest line within `halfWidthHz` of a frequency. */
+export function peakNear(
+  { stepHz, amplitude }: Spectrum,
+  frequencyHz: number,
+  halfWidthHz: number,
+): { frequencyHz: number; amplitude: number } | null {
+  const first = Math.max(0, Math.ceil((frequencyHz - halfWidthHz) / stepHz));
+  const last = Math.min(amplitude.length - 1, Math.floor((frequencyHz + halfWidthHz) / stepHz));
+  let best: { frequencyHz: number; amplitude: number } | null = null;
+  for (let line = first; line <= last; line += 1) {
+    const value = amplitude[line] ?? 0;
+    if (best === null || value > best.amplitude) {
+      best = { frequencyHz: line * stepHz, amplitude: value };
+    }
+  }
+  return best;
+}
+
+export interface SpectrumMark {
+  order: number;
+  frequencyHz: number;
+  amplitude: number;
+  kind: 'run' | 'standing' | 'explained';
+  explainedBy: string | null;
+}
+
+/** Which lines of the spectrum are marked, and as what; those that are only noise are not. */
+export function spectrumMarks(
+  spectrum: Spectrum,
+  speedHz: number | null,
+  orders: readonly OrderMark[],
+  run: { from: number; to: number; length: number } | null,
+): SpectrumMark[] {
+  if (speedHz === null || speedHz <= 0) return [];
+  const halfWidthHz = Math.max(1.5 * spectrum.stepHz, 0.01 * speedHz);
+  return orders
+    .filter((mark) => mark.significant)
+    .flatMap((mark) => {
+      const peak = peakNear(spectrum, mark.order * speedHz, halfWidthHz);
+      if (peak === null) return [];
+      const inRun =
+        run !== null &&
+        run.length > 0 &&
+        isWholeOrder(mark.order) &&
+        mark.order >= run.from &&
+        mark.order <= run.to;
+      const kind = mark.explainedBy !== null ? 'explained' : inRun ? 'run' : 'standing';
+      return [{ order: mark.order, ...peak, kind, explainedBy: mark.explainedBy } as const];
+    });
+}

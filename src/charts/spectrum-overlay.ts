@@ -1,0 +1,108 @@
+import type uPlot from 'uplot';
+import type { ChartPalette } from './chart-palette.ts';
+import { canvasFont, drawOverlay } from './draw-overlay.ts';
+import { labelsThatFit } from './label-lane.ts';
+import { orderName } from './order-mark.ts';
+import type { SpectrumMark } from './spectrum-data.ts';
+
+/**
+ * Marks lines of the spectrum: those of the run as stems from the axis with a head, their orders
+ * written above the plot; single standing orders with a head alone; explained ones with a broken
+ * grey line and what explains them.
+ */
+export function drawSpectrumMarks(
+  plot: uPlot,
+  marks: readonly SpectrumMark[],
+  unitsPerHz: number,
+  palette: ChartPalette,
+): void {
+  drawOverlay(plot, (context, pxRatio) => {
+    const { left, top, width, height } = plot.bbox;
+    const bottom = top + height;
+    const placed = marks
+      .map((mark) => ({
+        mark,
+        x: plot.valToPos(mark.frequencyHz * unitsPerHz, 'x', true),
+        y: Math.min(bottom, Math.max(top, plot.valToPos(mark.amplitude, 'y', true))),
+      }))
+      .filter(({ x }) => x >= left && x <= left + width);
+
+    for (const { mark, x, y } of placed) {
+      if (mark.kind === 'explained') drawExplained(context, x, top, bottom, palette, pxRatio);
+      else drawStanding(context, x, y, bottom, mark.kind === 'run', palette, pxRatio);
+    }
+
+    context.font = canvasFont(11, pxRatio, 'figures');
+    context.textAlign = 'center';
+    const labels = placed.map(({ mark, x }) => {
+      const text = `${orderName(mark.order)}×`;
+      return { mark, x, text, width: context.measureText(text).width };
+    });
+    // The run's labels come first: they are what one looks for.
+    const byWeight = [...labels].sort((a, b) => weightOf(a.mark) - weightOf(b.mark));
+    for (const { mark, x, text } of labelsThatFit(byWeight, 5 * pxRatio)) {
+      context.fillStyle = mark.kind === 'explained' ? palette.inkFaint : palette.evidence;
+      context.fillText(text, x, top - 5 * pxRatio);
+    }
+
+    context.font = canvasFont(11, pxRatio, 'text');
+    context.textAlign = 'right';
+    context.fillStyle = palette.inkSoft;
+    for (const { mark, x } of placed) {
+      if (mark.explainedBy === null) continue;
+      context.save();
+      context.translate(x + 4 * pxRatio, top + 5 * pxRatio);
+      context.rotate(-Math.PI / 2);
+      context.textBaseline = 'top';
+      context.lineWidth = 3 * pxRatio;
+      context.strokeStyle = palette.sheet;
+      context.strokeText(mark.explainedBy, 0, 0, height * 0.8);
+      context.fillText(mark.explainedBy, 0, 0, height * 0.8);
+      context.restore();
+    }
+  });
+}
+
+function weightOf(mark: SpectrumMark): number {
+  return (mark.kind === 'run' ? 0 : mark.kind === 'standing' ? 100 : 200) + mark.order;
+}
+
+function drawStanding(
+  context: CanvasRenderingContext2D,
+  x: number,
+  y: number,
+  bottom: number,
+  inRun: boolean,
+  palette: ChartPalette,
+  pxRatio: number,
+): void {
+  context.strokeStyle = palette.evidence;
+  context.fillStyle = palette.evidence;
+  if (inRun) {
+    context.lineWidth = 2 * pxRatio;
+    context.beginPath();
+    context.moveTo(x, bottom);
+    context.lineTo(x, y);
+    context.stroke();
+  }
+  const half = 3 * pxRatio;
+  context.fillRect(x - half, y - half, 2 * half, 2 * half);
+}
+
+function drawExplained(
+  context: CanvasRenderingContext2D,
+  x: number,
+  top: number,
+  bottom: number,
+  palette: ChartPalette,
+  pxRatio: number,
+): void {
+  context.strokeStyle = palette.explained;
+  context.lineWidth = 1.2 * pxRatio;
+  context.setLineDash([5 * pxRatio, 3 * pxRatio]);
+  context.beginPath();
+  context.moveTo(x, top);
+  context.lineTo(x, bottom);
+  context.stroke();
+  context.setLineDash([]);
+}

@@ -1,0 +1,63 @@
+import { formatFixed, formatSignificant } from '#src/lib/numbers.ts';
+import { ChartTable } from './chart-table.tsx';
+import { orderName, type OrderMark } from './order-mark.ts';
+import type { Spectrum, SpectrumMark } from './spectrum-data.ts';
+import { highestLines } from './highest-lines.ts';
+
+const linesMax = 25;
+
+/** The spectrum for who does not see it: its marked orders, or its highest lines where none are. */
+export function SpectrumTable({
+  spectrum,
+  marks,
+  orders,
+  speedHz,
+  amplitudeLabel,
+}: {
+  spectrum: Spectrum;
+  marks: readonly SpectrumMark[];
+  orders: readonly OrderMark[];
+  speedHz: number | null;
+  amplitudeLabel: string;
+}) {
+  const lineCount = spectrum.amplitude.length;
+  if (marks.length > 0) {
+    return (
+      <ChartTable
+        summary="Orders as a table"
+        caption={`The ${marks.length} orders that stand out, of ${orders.length} looked at in ${lineCount} lines.`}
+        columns={[
+          { header: 'Order', align: 'end' },
+          { header: 'Hz', align: 'end' },
+          { header: amplitudeLabel, align: 'end' },
+          { header: 'dB above floor', align: 'end' },
+          { header: 'Belongs to' },
+        ]}
+        rows={marks.map((mark) => [
+          orderName(mark.order),
+          formatFixed(mark.frequencyHz, 2),
+          formatSignificant(mark.amplitude),
+          formatFixed(orders.find((known) => known.order === mark.order)?.prominenceDb ?? 0, 0),
+          mark.explainedBy ?? (mark.kind === 'run' ? 'run of harmonics' : 'nothing known'),
+        ])}
+      />
+    );
+  }
+  const highest = highestLines(spectrum.amplitude, linesMax);
+  return (
+    <ChartTable
+      summary="Highest lines as a table"
+      caption={`The ${highest.length} highest of ${lineCount} lines.`}
+      columns={[
+        { header: 'Hz', align: 'end' },
+        ...(speedHz === null ? [] : [{ header: 'Order', align: 'end' as const }]),
+        { header: amplitudeLabel, align: 'end' },
+      ]}
+      rows={highest.map((line) => [
+        formatFixed(line * spectrum.stepHz, 2),
+        ...(speedHz === null ? [] : [formatFixed((line * spectrum.stepHz) / speedHz, 2)]),
+        formatSignificant(spectrum.amplitude[line] ?? 0),
+      ])}
+    />
+  );
+}

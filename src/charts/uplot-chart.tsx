@@ -1,0 +1,105 @@
+import { useEffect, useLayoutEffect, useRef, useState, type KeyboardEvent } from 'react';
+import uPlot from 'uplot';
+import { figuresFont, textFont } from './chart-palette.ts';
+import { moveCursor, zoomAboutCursor, resetZoom } from './plot-keys.ts';
+
+/** Everything but the size, which the page decides. */
+export type ChartOptions = Omit<uPlot.Options, 'width' | 'height'>;
+
+export interface UplotChartProps {
+  /** A new object rebuilds the chart: keep it in a memo. */
+  options: ChartOptions;
+  /** A new reference replaces the data; it is never compared deeply. */
+  data: uPlot.AlignedData;
+  heightPx: number;
+  /** What is drawn, in words; the figures stand in the table beside the chart. */
+  label: string;
+  /** Says how the keys work here, e.g. the id of a hint. */
+  describedBy?: string;
+}
+
+/** The one owner of uPlot instances. */
+export function UplotChart({ options, data, heightPx, label, describedBy }: UplotChartProps) {
+  const box = useRef<HTMLDivElement>(null);
+  const chart = useRef<uPlot | null>(null);
+  const drawnData = useRef(data);
+  const [widthPx, setWidthPx] = useState(0);
+  const drawable = widthPx > 0 && heightPx > 0 && (data[0]?.length ?? 0) > 0;
+
+  useLayoutEffect(() => {
+    const element = box.current;
+    if (element === null) return;
+    setWidthPx(Math.floor(element.clientWidth));
+    const observer = new ResizeObserver(([entry]) => {
+      if (entry) setWidthPx(Math.floor(entry.contentRect.width));
+    });
+    observer.observe(element);
+    return () => observer.disconnect();
+  }, []);
+
+  // Size and data at the moment of building; later changes have their own effects.
+  const atBuild = useRef({ data, widthPx, heightPx });
+  useLayoutEffect(() => {
+    atBuild.current = { data, widthPx, heightPx };
+  });
+
+  useEffect(() => {
+    const element = box.current;
+    if (element === null || !drawable) return;
+    const { data: first, widthPx: width, heightPx: height } = atBuild.current;
+    const built = new uPlot({ ...options, width, height }, first, element);
+    chart.current = built;
+    drawnData.current = first;
+    redrawWithFonts(built, () => chart.current === built);
+    return () => {
+      built.destroy();
+      chart.current = null;
+    };
+  }, [options, drawable]);
+
+  useEffect(() => {
+    if (chart.current === null || drawnData.current === data) return;
+    drawnData.current = data;
+    // Zoomed in, new data is the same record in finer steps: the view must stay.
+    chart.current.setData(data, false);
+    chart.current.redraw();
+  }, [data]);
+
+  useEffect(() => {
+    chart.current?.setSize({ width: widthPx, height: heightPx });
+  }, [widthPx, heightPx]);
+
+  const onKeyDown = (event: KeyboardEvent) => {
+    const plot = chart.current;
+    if (plot === null || event.ctrlKey || event.metaKey || event.altKey) return;
+    const step = event.shiftKey ? 10 : 1;
+    if (event.key === 'ArrowRight') moveCursor(plot, step);
+    else if (event.key === 'ArrowLeft') moveCursor(plot, -step);
+    else if (event.key === '+' || event.key === '=') zoomAboutCursor(plot, 0.5);
+    else if (event.key === '-') zoomAboutCursor(plot, 2);
+    else if (event.key === '0') resetZoom(plot);
+    else return;
+    event.preventDefault();
+  };
+
+  return (
+    <div
+      ref={box}
+      role="application"
+      aria-roledescription="plot"
+      aria-label={label}
+      aria-describedby={describedBy}
+      tabIndex={0}
+      onKeyDown={onKeyDown}
+      style={{ height: `${heightPx}px` }}
+      className="w-full overflow-hidden"
+    />
+  );
+}
+
+/** A canvas draws with whatever font is there: draw once more when the shipped ones have come. */
+function redrawWithFonts(chart: uPlot, alive: () => boolean): void {
+  void Promise.all([document.fonts.load(figuresFont), document.fonts.load(textFont)]).then(() => {
+    if (alive()) chart.redraw(false, true);
+  });
+}
