@@ -1,4 +1,4 @@
-import { normalBelow } from './normal-distribution.ts';
+import { normalBelow, scaledTail } from './normal-distribution.ts';
 
 /**
  * Chance that a seat runs with more clearance than it may: P(fit − wear < threshold).
@@ -26,8 +26,12 @@ export function looseChance(
   if (s === 0 && w === 0) return margin < 0 ? 1 : 0;
   if (s === 0) return margin < 0 ? 1 : Math.exp(-margin / w);
   const atOnce = normalBelow(-margin / s);
-  // Far below one deviation the wear is a shift; the closed form would overflow there.
-  if (w < s / 20) return normalBelow(-(margin - w) / s);
-  const later = Math.exp(s ** 2 / (2 * w ** 2) - margin / w) * normalBelow(margin / s - s / w);
+  if (w === 0) return atOnce;
+  const z = margin / s - s / w;
+  // Far out the exponential overflows while the tail vanishes: the two are joined there.
+  const later =
+    z < -6
+      ? Math.exp(-(margin ** 2) / (2 * s ** 2)) * scaledTail(z)
+      : Math.exp(s ** 2 / (2 * w ** 2) - margin / w) * normalBelow(z);
   return Math.min(1, Math.max(0, atOnce + later));
 }
