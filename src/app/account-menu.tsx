@@ -14,7 +14,8 @@ export const roleWords: Readonly<Record<SiteRole, string>> = {
 export function AccountMenu({ session, role }: { session: SessionResponse; role?: SiteRole }) {
   const navigate = useNavigate();
   const signOut = useSignOut();
-  const roleText = role === undefined ? 'Administrator' : roleWords[role];
+  const roleText =
+    role !== undefined ? roleWords[role] : session.isAdministrator ? 'Administrator' : 'No role';
   const items: MenuItem[] = [
     ...(session.isAdministrator && role !== undefined
       ? [{ label: 'Administration', onSelect: () => void navigate('/administration') }]

@@ -12,12 +12,27 @@ import { siteIndexLoader, SiteLayout, siteLoader } from './site-layout.tsx';
  */
 export function routes(queryClient: QueryClient): RouteObject[] {
   return [
-    { path: '/', loader: homeLoader(queryClient) },
+    { path: '/', loader: homeLoader(queryClient), element: <></> },
     {
       path: '/sign-in',
       lazy: lazyPage(queryClient, async () => {
         const { signInLoader, SignInPage } = await import('./routes/sign-in.tsx');
         return { loader: signInLoader, Component: SignInPage };
+      }),
+    },
+    {
+      path: '/administration',
+      lazy: lazyPage(queryClient, async () => {
+        const { administrationLoader, AdministrationPage } =
+          await import('./routes/administration.tsx');
+        return { loader: administrationLoader, Component: AdministrationPage };
+      }),
+    },
+    {
+      path: '/no-site',
+      lazy: lazyPage(queryClient, async () => {
+        const { noSiteLoader, NoSitePage } = await import('./routes/no-site.tsx');
+        return { loader: noSiteLoader, Component: NoSitePage };
       }),
     },
     {

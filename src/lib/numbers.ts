@@ -50,3 +50,13 @@ export function parseDecimal(text: unknown): number | undefined {
   const plain = text.trim().replace(minus, '-').replace(',', '.');
   return /^[+-]?(\d+\.?\d*|\.\d+)(e[+-]?\d+)?$/iu.test(plain) ? Number(plain) : Number.NaN;
 }
+
+/** A value somebody entered, as they entered it: up to six significant figures, no added zeros. */
+export function formatEntered(value: number): string {
+  return formatFixed(Number(value.toPrecision(6)), decimalsOf(Number(value.toPrecision(6))));
+}
+
+function decimalsOf(value: number): number {
+  const [, decimals = ''] = String(value).split('.');
+  return /e/.test(decimals) ? 6 : decimals.length;
+}

@@ -7,7 +7,7 @@ import { Figure } from '#src/components/figure.tsx';
 import { PageHeader } from '#src/components/page-header.tsx';
 import { routeQuery } from '#src/features/register/api/routes.ts';
 import { capital } from '#src/features/register/components/machine-words.ts';
-import { formatSignificant } from '#src/lib/numbers.ts';
+import { formatEntered, formatSignificant } from '#src/lib/numbers.ts';
 import { useSite } from '../site-context.ts';
 
 export const routeLoader =
@@ -48,7 +48,7 @@ const columns = (siteId: number, order: Map<number, number>): DataTableColumn<Po
     align: 'end',
     cell: (point) => (
       <Figure
-        value={point.nominalSpeedRpm === null ? null : formatSignificant(point.nominalSpeedRpm, 5)}
+        value={point.nominalSpeedRpm === null ? null : formatEntered(point.nominalSpeedRpm)}
         unit="r/min"
       />
     ),
@@ -75,9 +75,7 @@ export function RoutePage() {
             label: 'Top frequency',
             value: (
               <Figure
-                value={
-                  route.topFrequencyHz === null ? null : formatSignificant(route.topFrequencyHz, 4)
-                }
+                value={route.topFrequencyHz === null ? null : formatEntered(route.topFrequencyHz)}
                 unit="Hz"
               />
             ),

@@ -2,12 +2,12 @@ import type { MachineResponse } from '#shared/contracts/machine.ts';
 import { DescriptionList } from '#src/components/description-list.tsx';
 import { Figure } from '#src/components/figure.tsx';
 import { formatDay } from '#src/lib/dates.ts';
-import { formatSignificant } from '#src/lib/numbers.ts';
+import { formatEntered } from '#src/lib/numbers.ts';
 import { capital } from './machine-words.ts';
 
 const figure = (value: number | null, unit?: string) => (
   <Figure
-    value={value === null ? null : formatSignificant(value, 5)}
+    value={value === null ? null : formatEntered(value)}
     {...(unit === undefined ? {} : { unit })}
   />
 );

@@ -3,7 +3,7 @@ import type { MachineListResponse } from '#shared/contracts/machine.ts';
 import { DataTable, type DataTableColumn, type TableSort } from '#src/components/data-table.tsx';
 import { Figure } from '#src/components/figure.tsx';
 import { formatDay } from '#src/lib/dates.ts';
-import { formatSignificant } from '#src/lib/numbers.ts';
+import { formatEntered } from '#src/lib/numbers.ts';
 import { capital } from './machine-words.ts';
 
 type Row = MachineListResponse['items'][number];
@@ -29,7 +29,7 @@ const columns = (siteId: number): DataTableColumn<Row>[] => [
     align: 'end',
     cell: (row) => (
       <Figure
-        value={row.nominalSpeedRpm === null ? null : formatSignificant(row.nominalSpeedRpm, 5)}
+        value={row.nominalSpeedRpm === null ? null : formatEntered(row.nominalSpeedRpm)}
         unit="r/min"
       />
     ),

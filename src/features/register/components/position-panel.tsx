@@ -10,7 +10,7 @@ import { Menu } from '#src/components/menu.tsx';
 import { Panel } from '#src/components/panel.tsx';
 import { useToast } from '#src/components/toast.tsx';
 import { toApiError } from '#src/lib/api-error.ts';
-import { formatSignificant } from '#src/lib/numbers.ts';
+import { formatEntered } from '#src/lib/numbers.ts';
 import { useAddFitRecord, useAddPoint, useUpdatePosition } from '../api/machines.ts';
 import { FitRecordForm } from './fit-record-form.tsx';
 import { FitRecordTable } from './fit-record-table.tsx';
@@ -25,7 +25,7 @@ const sizeOf = (position: BearingPositionResponse): string | null =>
         .join(' × ');
 
 const figure = (value: number | null, unit: string) => (
-  <Figure value={value === null ? null : formatSignificant(value, 4)} unit={unit} />
+  <Figure value={value === null ? null : formatEntered(value)} unit={unit} />
 );
 
 function loadsInWords(position: BearingPositionResponse): string | null {
@@ -126,7 +126,7 @@ export function PositionPanel({
             { label: 'Load', value: loadsInWords(position) },
             {
               label: 'Shaft speed ratio',
-              value: <Figure value={formatSignificant(position.shaftRatio, 5)} />,
+              value: <Figure value={formatEntered(position.shaftRatio)} />,
             },
             {
               label: 'Materials',
@@ -142,12 +142,10 @@ export function PositionPanel({
             {
               label: 'Running temperatures',
               value: (
-                <span className="flex flex-wrap gap-x-3">
-                  <span>shaft {figure(position.shaftC, '°C')}</span>
-                  <span>rings {figure(position.innerRingC, '°C')}</span>
-                  <span>
-                    / {figure(position.outerRingC, '°C')}, housing {figure(position.housingC, '°C')}
-                  </span>
+                <span>
+                  shaft {figure(position.shaftC, '°C')}, inner ring{' '}
+                  {figure(position.innerRingC, '°C')}, outer ring{' '}
+                  {figure(position.outerRingC, '°C')}, housing {figure(position.housingC, '°C')}
                 </span>
               ),
             },
