@@ -58,7 +58,8 @@ export function readHeader(
       'not-a-number',
       line.number,
       `${quoteFound(texts[0]!)} stands in a row of numbers; expected numbers only, or a header row ` +
-        'of names only. Correct the cell, or map its column as ignored.',
+        'of names only. Correct the cell, map its column as ignored, or tell how many lines of an ' +
+        'instrument’s preamble to pass over.',
     );
   }
   return cells;

@@ -80,6 +80,17 @@ export interface WaveformChannel {
   gapCount: number;
 }
 
+/** One column of the file as it was taken. */
+export interface WaveformColumn {
+  columnIndex: number;
+  /** `blank`: behind a separator at the end of every row. */
+  role: ColumnRole | 'blank';
+  name: string;
+  quantity: Quantity | null;
+  unit: Unit | null;
+  unitText: string | null;
+}
+
 /** `time`: from the time column; `comment`: from the file's comment line; `told`: by a person. */
 export type SampleRateSource = 'time' | 'comment' | 'told';
 
@@ -98,6 +109,7 @@ export interface WaveformCsv {
   decimalMark: DecimalMark | null;
   /** Header cells as written; empty without a header row. */
   header: readonly string[];
+  columns: readonly WaveformColumn[];
   columnCount: number;
   rowCount: number;
   /** Physical line of the first row, counted from 1. */
