@@ -13,7 +13,11 @@ export function refreshSession(): Promise<boolean> {
     headers: { accept: 'application/json' },
   })
     .then(
-      (answer) => answer.ok,
+      async (answer) => {
+        // An unread body keeps the connection busy.
+        await answer.text();
+        return answer.ok;
+      },
       () => false,
     )
     .finally(() => {
