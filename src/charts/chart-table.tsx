@@ -20,7 +20,12 @@ export function ChartTable({
   return (
     <details className="text-sm">
       <summary className="ink-link w-fit cursor-pointer text-ink-soft">{summary}</summary>
-      <div className="mt-2 max-h-80 overflow-auto" tabIndex={0} role="region" aria-label={summary}>
+      <div
+        className="relative mt-2 max-h-80 overflow-auto"
+        tabIndex={0}
+        role="region"
+        aria-label={summary}
+      >
         <table className="border-separate border-spacing-0">
           <caption className="pb-1 text-left text-xs text-ink-faint">{caption}</caption>
           <thead>

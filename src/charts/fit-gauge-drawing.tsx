@@ -10,15 +10,15 @@ import {
 } from './fit-gauge-geometry.ts';
 import { formatSigned } from '#src/lib/numbers.ts';
 
-const width = 430;
+const width = 352;
 const height = 232;
 const top = 20;
 const plotHeight = 192;
-const axisX = 46;
+const axisX = 42;
 /** Left of this the sizes of the two parts, right of it the fit they make. */
-const divideX = 236;
-const columns = { seat: 66, ring: 146, drawn: 270, measured: 326, running: 372 };
-const zoneWidth = 56;
+const divideX = 184;
+const columns = { seat: 54, ring: 120, drawn: 216, measured: 268, running: 322 };
+const zoneWidth = 52;
 
 /** The picture alone; the words that say the same are FitGauge's. */
 export function FitGaugeDrawing({ data }: { data: FitGaugeData }) {
@@ -30,7 +30,7 @@ export function FitGaugeDrawing({ data }: { data: FitGaugeData }) {
     <svg
       aria-hidden="true"
       viewBox={`0 0 ${width} ${height}`}
-      className="figures w-full text-[11px]"
+      className="figures w-full text-[12px]"
     >
       <defs>
         <pattern
@@ -92,6 +92,24 @@ export function FitGaugeDrawing({ data }: { data: FitGaugeData }) {
 
 type Place = (valueUm: number) => number;
 
+function shortUm(valueUm: number): string {
+  return formatSigned(valueUm, Number.isInteger(valueUm) ? 0 : 1);
+}
+
+const textHeight = 11;
+
+/** Baseline of a text above an edge, lifted over the zero line where that would strike it through. */
+function above(edgeY: number, zeroY: number): number {
+  const baseline = edgeY - 4;
+  return zeroY < baseline + 2 && zeroY > baseline - textHeight ? zeroY - 4 : baseline;
+}
+
+/** Baseline of a text beneath an edge, likewise kept clear of the zero line. */
+function below(edgeY: number, zeroY: number): number {
+  const baseline = edgeY + textHeight + 1;
+  return zeroY < baseline + 2 && zeroY > baseline - textHeight ? zeroY + textHeight + 1 : baseline;
+}
+
 function Axis({ scale, y }: { scale: GaugeScale; y: Place }) {
   return (
     <>
@@ -117,7 +135,7 @@ function Axis({ scale, y }: { scale: GaugeScale; y: Place }) {
       />
       <g className="font-sans" fill="var(--tone-ink-soft)">
         <text x={axisX + 4} y={10}>
-          sizes against nominal
+          against nominal
         </text>
         <text x={divideX + 8} y={10}>
           ↑ interference
@@ -159,8 +177,8 @@ function Zone({
         stroke={stroke}
         strokeWidth="1.2"
       />
-      <Label x={centre} y={y(upper) - 4} text={formatSigned(upper, 0)} />
-      <Label x={centre} y={y(upper) + zoneHeight + 11} text={formatSigned(lower, 0)} />
+      <Label x={centre} y={above(y(upper), y(0))} text={shortUm(upper)} />
+      <Label x={centre} y={below(y(upper) + zoneHeight, y(0))} text={shortUm(lower)} />
       {zoneHeight > 17 && <Label x={centre} y={y(upper) + zoneHeight / 2 + 4} text={name} strong />}
     </g>
   );
@@ -213,8 +231,8 @@ function Dimension({
       <path d={`M${x - 12} ${y(max)}h24M${x - 12} ${y(min)}h24M${x} ${y(max)}V${y(min)}`} />
       <path d={`M${x - 6} ${y(mean)}h12`} strokeWidth="3" />
       <g stroke="none">
-        <Label x={x} y={y(max) - 5} text={formatSigned(max, 0)} />
-        <Label x={x} y={y(min) + 13} text={formatSigned(min, 0)} />
+        <Label x={x} y={above(y(max), y(0))} text={shortUm(max)} />
+        <Label x={x} y={below(y(min), y(0))} text={shortUm(min)} />
       </g>
     </g>
   );
@@ -245,7 +263,7 @@ function Measured({
       <circle cx={x} cy={y(value)} r="5.5" fill={colour} />
       {loose && <path d={`M${x - 9} ${y(value) + 9}L${x + 9} ${y(value) - 9}`} strokeWidth="2" />}
       <g stroke="none">
-        <Label x={x} y={y(value + doubt) - (loose ? 8 : 6)} text={formatSigned(value, 0)} strong />
+        <Label x={x} y={y(value + doubt) - (doubt > 0 ? 6 : 11)} text={shortUm(value)} strong />
       </g>
     </g>
   );

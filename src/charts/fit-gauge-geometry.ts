@@ -98,9 +98,9 @@ export function umText(valueUm: number): string {
   return `${formatSigned(valueUm, Number.isInteger(valueUm) ? 0 : 1)} µm`;
 }
 
-/** "+2 µm interference to −5 µm clearance" is said with both words, so that no sign is misread. */
+/** "2 µm interference", "5 µm clearance": the word instead of a sign that may be misread. */
 export function fitWord(valueUm: number): string {
-  if (Math.abs(valueUm) < 0.05) return 'line to line';
+  if (Math.abs(valueUm) < 0.05) return '0 µm';
   const size = Math.abs(valueUm).toFixed(Number.isInteger(valueUm) ? 0 : 1);
   return `${size} µm ${valueUm > 0 ? 'interference' : 'clearance'}`;
 }

@@ -1,5 +1,10 @@
 import { FitGaugeDrawing } from './fit-gauge-drawing.tsx';
-import { gaugeRows, type FitGaugeData, type GaugeRow } from './fit-gauge-geometry.ts';
+import {
+  gaugeRows,
+  isLooserThanDrawn,
+  type FitGaugeData,
+  type GaugeRow,
+} from './fit-gauge-geometry.ts';
 
 /** One seat's fit: the zones against the zero line, what was measured, what running makes of it. */
 export function FitGauge({ data, title }: { data: FitGaugeData; title: string }) {
@@ -22,7 +27,7 @@ export function FitGauge({ data, title }: { data: FitGaugeData; title: string })
         role="img"
         tabIndex={0}
         aria-label={`${title}. ${rows.map((row) => `${row.label}: ${row.text}`).join('. ')}.`}
-        className="w-full max-w-md"
+        className="w-full max-w-sm"
       >
         <FitGaugeDrawing data={data} />
       </div>
@@ -30,7 +35,7 @@ export function FitGauge({ data, title }: { data: FitGaugeData; title: string })
         {rows.map((row) => (
           <div key={row.key} className="border-b border-hairline py-1">
             <dt className="flex items-center gap-2 text-ink-soft">
-              <Swatch of={row.key} />
+              <Swatch of={row.key} loose={isLooserThanDrawn(data)} />
               {row.label}
             </dt>
             <dd className="figures pl-7">{row.text}</dd>
@@ -42,7 +47,7 @@ export function FitGauge({ data, title }: { data: FitGaugeData; title: string })
 }
 
 /** The key to the drawing, in the same strokes. */
-function Swatch({ of }: { of: GaugeRow['key'] }) {
+function Swatch({ of, loose }: { of: GaugeRow['key']; loose: boolean }) {
   return (
     <svg aria-hidden="true" width="20" height="12" viewBox="0 0 20 12" className="shrink-0">
       {of === 'seat' && (
@@ -64,7 +69,12 @@ function Swatch({ of }: { of: GaugeRow['key'] }) {
       {(of === 'drawn' || of === 'recorded') && (
         <path d="M1 1h18M1 11h18M10 1v10" stroke="var(--tone-fit)" strokeWidth="1.6" />
       )}
-      {of === 'measured' && <circle cx="10" cy="6" r="4.5" fill="var(--tone-ink)" />}
+      {of === 'measured' && (
+        <circle cx="10" cy="6" r="4.5" fill={loose ? 'var(--tone-evidence)' : 'var(--tone-ink)'} />
+      )}
+      {of === 'measured' && loose && (
+        <path d="M3 12L17 0" stroke="var(--tone-evidence)" strokeWidth="1.6" />
+      )}
       {of === 'running' && (
         <rect
           x="1"

@@ -9,7 +9,7 @@ export interface OrderMark {
   explainedBy: string | null;
 }
 
-const fractions: Readonly<Record<string, string>> = {
+const fractionNames: Readonly<Record<string, string>> = {
   '0.333': '1/3',
   '0.500': '1/2',
   '0.667': '2/3',
@@ -17,7 +17,7 @@ const fractions: Readonly<Record<string, string>> = {
 
 /** "1/3", "1/2", "4", "2.5": as an order is said. */
 export function orderName(order: number): string {
-  const fraction = fractions[order.toFixed(3)];
+  const fraction = fractionNames[order.toFixed(3)];
   if (fraction !== undefined) return fraction;
   return String(Math.round(order * 100) / 100);
 }
@@ -40,4 +40,40 @@ export function orderListText(orders: readonly number[]): string {
   );
   const others = sorted.filter((order) => !isWholeOrder(order)).map(orderName);
   return [...whole, ...others].join(', ');
+}
+
+const shortestRun = 3;
+
+/**
+ * The orders that speak for looseness: unexplained standing whole orders of the run, and standing
+ * fractions. Once per turn alone, which every machine shows, is none of them.
+ *
+ * @param run - the screening's run; without it (lists) whole orders count from three in a row, where
+ *   an explained order in between does not break the row
+ */
+export function evidenceOrders(
+  marks: readonly OrderMark[],
+  run?: { from: number; to: number; length: number } | null,
+): ReadonlySet<number> {
+  const standing = marks.filter((mark) => mark.significant);
+  const whole = standing.filter((mark) => isWholeOrder(mark.order));
+  const inRun = run
+    ? whole.filter(({ order }) => run.length > 0 && order >= run.from && order <= run.to)
+    : rowsOf(whole).flatMap((row) => (row.length >= shortestRun ? row : []));
+  const fractions = standing.filter((mark) => !isWholeOrder(mark.order));
+  return new Set(
+    [...inRun, ...fractions].filter((mark) => mark.explainedBy === null).map((mark) => mark.order),
+  );
+}
+
+/** Whole orders in rows without a missing one. */
+function rowsOf(whole: readonly OrderMark[]): OrderMark[][] {
+  const rows: OrderMark[][] = [];
+  for (const mark of [...whole].sort((a, b) => a.order - b.order)) {
+    const row = rows[rows.length - 1];
+    const last = row?.[row.length - 1];
+    if (row && last && mark.order - last.order < 1.01) row.push(mark);
+    else rows.push([mark]);
+  }
+  return rows;
 }

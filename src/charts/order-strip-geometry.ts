@@ -1,6 +1,13 @@
-import { isWholeOrder, orderListText, orderName, type OrderMark } from './order-mark.ts';
+import {
+  evidenceOrders,
+  isWholeOrder,
+  orderListText,
+  orderName,
+  type OrderMark,
+} from './order-mark.ts';
 
-export type StripFill = 'evidence' | 'explained' | 'floor';
+/** `standing`: out of its floor, but nothing that speaks for looseness, such as once per turn alone. */
+export type StripFill = 'evidence' | 'standing' | 'explained' | 'floor';
 
 export interface StripCell {
   order: number;
@@ -32,13 +39,14 @@ const partWeight = 2;
 
 /** The cells of a strip `width` units wide, whole orders broad and the others slivers. */
 export function evenStrip(marks: readonly OrderMark[], width: number, gap = 1): StripCell[] {
+  const evidence = evidenceOrders(marks);
   const weights = stripOrders.map((order) => (isWholeOrder(order) ? wholeWeight : partWeight));
   const total = weights.reduce((sum, weight) => sum + weight, 0);
   const scale = (width - gap * (stripOrders.length - 1)) / total;
   let x = 0;
   return stripOrders.map((order, index) => {
     const cellWidth = (weights[index] ?? partWeight) * scale;
-    const cell = cellOf(order, marks, x, cellWidth);
+    const cell = cellOf(order, marks, evidence, x, cellWidth);
     x += cellWidth + gap;
     return cell;
   });
@@ -47,8 +55,14 @@ export function evenStrip(marks: readonly OrderMark[], width: number, gap = 1): 
 /** The cells under a spectrum: each centred on its order's place, those out of view left out. */
 export function alignedStrip(
   marks: readonly OrderMark[],
-  view: { fromOrder: number; toOrder: number; width: number },
+  view: {
+    fromOrder: number;
+    toOrder: number;
+    width: number;
+    run?: { from: number; to: number; length: number } | null;
+  },
 ): StripCell[] {
+  const evidence = evidenceOrders(marks, view.run);
   const perOrder = view.width / (view.toOrder - view.fromOrder);
   if (!Number.isFinite(perOrder) || perOrder <= 0) return [];
   return stripOrders.flatMap((order) => {
@@ -58,26 +72,33 @@ export function alignedStrip(
       Math.max(2, perOrder * (isWholeOrder(order) ? 0.6 : 0.12)),
     );
     if (centre < 0 || centre > view.width) return [];
-    return [cellOf(order, marks, centre - cellWidth / 2, cellWidth)];
+    return [cellOf(order, marks, evidence, centre - cellWidth / 2, cellWidth)];
   });
 }
 
-function cellOf(order: number, marks: readonly OrderMark[], x: number, width: number): StripCell {
+function cellOf(
+  order: number,
+  marks: readonly OrderMark[],
+  evidence: ReadonlySet<number>,
+  x: number,
+  width: number,
+): StripCell {
   const mark = marks.find((candidate) => Math.abs(candidate.order - order) < 0.01) ?? null;
   return {
     order,
     x,
     width,
     share: mark === null ? 0 : Math.min(1, Math.max(0, mark.prominenceDb / fullCellDb)),
-    fill: fillOf(mark),
+    fill: fillOf(mark, evidence),
     known: mark !== null,
     mark,
   };
 }
 
-function fillOf(mark: OrderMark | null): StripFill {
+function fillOf(mark: OrderMark | null, evidence: ReadonlySet<number>): StripFill {
   if (mark === null || !mark.significant) return 'floor';
-  return mark.explainedBy === null ? 'evidence' : 'explained';
+  if (mark.explainedBy !== null) return 'explained';
+  return evidence.has(mark.order) ? 'evidence' : 'standing';
 }
 
 /** The strip in words, for who does not see it. */

@@ -1,5 +1,6 @@
 import { useId } from 'react';
 import { isWholeOrder, orderName, type OrderMark } from './order-mark.ts';
+import { useElementWidth } from './use-element-width.ts';
 import { alignedStrip, evenStrip, orderStripText, type StripCell } from './order-strip-geometry.ts';
 
 const smallWidth = 172;
@@ -15,17 +16,32 @@ export function OrderStrip({
   marks: readonly OrderMark[];
   size?: 'small' | 'large';
 }) {
-  const large = size === 'large';
-  const width = large ? largeWidth : smallWidth;
-  const height = large ? largeHeight : smallHeight;
+  if (size === 'large') return <LargeStrip marks={marks} />;
   return (
     <Strip
-      cells={evenStrip(marks, width, large ? 2 : 1)}
+      cells={evenStrip(marks, smallWidth)}
       label={orderStripText(marks)}
-      width={width}
-      height={height}
-      numbered={large}
+      width={smallWidth}
+      height={smallHeight}
+      numbered={false}
     />
+  );
+}
+
+/** As wide as there is room, so that its numbers can be read on a phone too. */
+function LargeStrip({ marks }: { marks: readonly OrderMark[] }) {
+  const [box, widthPx] = useElementWidth<HTMLDivElement>();
+  const width = Math.min(largeWidth, widthPx || largeWidth);
+  return (
+    <div ref={box}>
+      <Strip
+        cells={evenStrip(marks, width, width > 480 ? 2 : 1)}
+        label={orderStripText(marks)}
+        width={width}
+        height={largeHeight}
+        numbered
+      />
+    </div>
   );
 }
 
@@ -35,15 +51,17 @@ export function AlignedOrderStrip({
   fromOrder,
   toOrder,
   widthPx,
+  run,
 }: {
   marks: readonly OrderMark[];
   fromOrder: number;
   toOrder: number;
   widthPx: number;
+  run: { from: number; to: number; length: number } | null;
 }) {
   return (
     <Strip
-      cells={alignedStrip(marks, { fromOrder, toOrder, width: widthPx })}
+      cells={alignedStrip(marks, { fromOrder, toOrder, width: widthPx, run })}
       label={orderStripText(marks)}
       width={widthPx}
       height={26}
@@ -129,6 +147,7 @@ function Cell({ cell, height, hatchId }: { cell: StripCell; height: number; hatc
 
 const fills = {
   evidence: () => 'var(--tone-evidence)',
+  standing: () => 'var(--tone-ink-soft)',
   explained: (hatchId: string) => `url(#${hatchId})`,
   floor: () => 'var(--tone-hairline)',
 } as const;

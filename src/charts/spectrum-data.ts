@@ -1,6 +1,5 @@
 import { decimateMinMax } from './decimate-min-max.ts';
-import type { OrderMark } from './order-mark.ts';
-import { isWholeOrder } from './order-mark.ts';
+import { evidenceOrders, isWholeOrder, type OrderMark } from './order-mark.ts';
 
 export interface Spectrum {
   /** Frequency of line i is i × stepHz. */
@@ -68,7 +67,8 @@ export interface SpectrumMark {
   order: number;
   frequencyHz: number;
   amplitude: number;
-  kind: 'run' | 'standing' | 'explained';
+  /** `run`, `fraction`: evidence of looseness; `standing`: stands out without being evidence. */
+  kind: 'run' | 'fraction' | 'standing' | 'explained';
   explainedBy: string | null;
 }
 
@@ -80,19 +80,26 @@ export function spectrumMarks(
   run: { from: number; to: number; length: number } | null,
 ): SpectrumMark[] {
   if (speedHz === null || speedHz <= 0) return [];
+  const evidence = evidenceOrders(orders, run);
   const halfWidthHz = Math.max(1.5 * spectrum.stepHz, 0.01 * speedHz);
   return orders
     .filter((mark) => mark.significant)
     .flatMap((mark) => {
       const peak = peakNear(spectrum, mark.order * speedHz, halfWidthHz);
       if (peak === null) return [];
-      const inRun =
-        run !== null &&
-        run.length > 0 &&
-        isWholeOrder(mark.order) &&
-        mark.order >= run.from &&
-        mark.order <= run.to;
-      const kind = mark.explainedBy !== null ? 'explained' : inRun ? 'run' : 'standing';
-      return [{ order: mark.order, ...peak, kind, explainedBy: mark.explainedBy } as const];
+      return [
+        {
+          order: mark.order,
+          ...peak,
+          kind: kindOf(mark, evidence),
+          explainedBy: mark.explainedBy,
+        } as const,
+      ];
     });
+}
+
+function kindOf(mark: OrderMark, evidence: ReadonlySet<number>): SpectrumMark['kind'] {
+  if (mark.explainedBy !== null) return 'explained';
+  if (!evidence.has(mark.order)) return 'standing';
+  return isWholeOrder(mark.order) ? 'run' : 'fraction';
 }

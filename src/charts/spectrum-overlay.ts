@@ -7,7 +7,7 @@ import type { SpectrumMark } from './spectrum-data.ts';
 
 /**
  * Marks lines of the spectrum: those of the run as stems from the axis with a head, their orders
- * written above the plot; single standing orders with a head alone; explained ones with a broken
+ * written above the plot; standing fractions and single orders with a head alone; explained ones with a broken
  * grey line and what explains them.
  */
 export function drawSpectrumMarks(
@@ -29,7 +29,7 @@ export function drawSpectrumMarks(
 
     for (const { mark, x, y } of placed) {
       if (mark.kind === 'explained') drawExplained(context, x, top, bottom, palette, pxRatio);
-      else drawStanding(context, x, y, bottom, mark.kind === 'run', palette, pxRatio);
+      else drawStanding(context, x, y, bottom, mark.kind, palette, pxRatio);
     }
 
     context.font = canvasFont(11, pxRatio, 'figures');
@@ -41,7 +41,8 @@ export function drawSpectrumMarks(
     // The run's labels come first: they are what one looks for.
     const byWeight = [...labels].sort((a, b) => weightOf(a.mark) - weightOf(b.mark));
     for (const { mark, x, text } of labelsThatFit(byWeight, 5 * pxRatio)) {
-      context.fillStyle = mark.kind === 'explained' ? palette.inkFaint : palette.evidence;
+      const isEvidence = mark.kind === 'run' || mark.kind === 'fraction';
+      context.fillStyle = isEvidence ? palette.evidence : palette.inkFaint;
       context.fillText(text, x, top - 5 * pxRatio);
     }
 
@@ -63,8 +64,10 @@ export function drawSpectrumMarks(
   });
 }
 
+const labelWeights = { run: 0, standing: 100, fraction: 200, explained: 300 } as const;
+
 function weightOf(mark: SpectrumMark): number {
-  return (mark.kind === 'run' ? 0 : mark.kind === 'standing' ? 100 : 200) + mark.order;
+  return labelWeights[mark.kind] + mark.order;
 }
 
 function drawStanding(
@@ -72,13 +75,14 @@ function drawStanding(
   x: number,
   y: number,
   bottom: number,
-  inRun: boolean,
+  kind: SpectrumMark['kind'],
   palette: ChartPalette,
   pxRatio: number,
 ): void {
-  context.strokeStyle = palette.evidence;
-  context.fillStyle = palette.evidence;
-  if (inRun) {
+  const colour = kind === 'standing' ? palette.inkSoft : palette.evidence;
+  context.strokeStyle = colour;
+  context.fillStyle = colour;
+  if (kind === 'run') {
     context.lineWidth = 2 * pxRatio;
     context.beginPath();
     context.moveTo(x, bottom);

@@ -123,6 +123,7 @@ export function SpectrumPlot({
             fromOrder={view.min / unitsPerHz / speedHz}
             toOrder={view.max / unitsPerHz / speedHz}
             widthPx={view.widthPx}
+            run={run}
           />
         </div>
       )}

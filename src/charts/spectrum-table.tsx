@@ -6,6 +6,13 @@ import { highestLines } from './highest-lines.ts';
 
 const linesMax = 25;
 
+const belongsTo = {
+  run: 'run of harmonics',
+  fraction: 'fractions of the order',
+  standing: 'no run',
+  explained: 'something else',
+} as const;
+
 /** The spectrum for who does not see it: its marked orders, or its highest lines where none are. */
 export function SpectrumTable({
   spectrum,
@@ -38,7 +45,7 @@ export function SpectrumTable({
           formatFixed(mark.frequencyHz, 2),
           formatSignificant(mark.amplitude),
           formatFixed(orders.find((known) => known.order === mark.order)?.prominenceDb ?? 0, 0),
-          mark.explainedBy ?? (mark.kind === 'run' ? 'run of harmonics' : 'nothing known'),
+          mark.explainedBy ?? belongsTo[mark.kind],
         ])}
       />
     );

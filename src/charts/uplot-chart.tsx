@@ -1,6 +1,7 @@
-import { useEffect, useLayoutEffect, useRef, useState, type KeyboardEvent } from 'react';
+import { useEffect, useLayoutEffect, useRef, type KeyboardEvent } from 'react';
 import uPlot from 'uplot';
 import { figuresFont, textFont } from './chart-palette.ts';
+import { useElementWidth } from './use-element-width.ts';
 import { moveCursor, zoomAboutCursor, resetZoom } from './plot-keys.ts';
 
 /** Everything but the size, which the page decides. */
@@ -20,22 +21,10 @@ export interface UplotChartProps {
 
 /** The one owner of uPlot instances. */
 export function UplotChart({ options, data, heightPx, label, describedBy }: UplotChartProps) {
-  const box = useRef<HTMLDivElement>(null);
+  const [box, widthPx] = useElementWidth<HTMLDivElement>();
   const chart = useRef<uPlot | null>(null);
   const drawnData = useRef(data);
-  const [widthPx, setWidthPx] = useState(0);
   const drawable = widthPx > 0 && heightPx > 0 && (data[0]?.length ?? 0) > 0;
-
-  useLayoutEffect(() => {
-    const element = box.current;
-    if (element === null) return;
-    setWidthPx(Math.floor(element.clientWidth));
-    const observer = new ResizeObserver(([entry]) => {
-      if (entry) setWidthPx(Math.floor(entry.contentRect.width));
-    });
-    observer.observe(element);
-    return () => observer.disconnect();
-  }, []);
 
   // Size and data at the moment of building; later changes have their own effects.
   const atBuild = useRef({ data, widthPx, heightPx });
@@ -55,7 +44,7 @@ export function UplotChart({ options, data, heightPx, label, describedBy }: Uplo
       built.destroy();
       chart.current = null;
     };
-  }, [options, drawable]);
+  }, [options, drawable, box]);
 
   useEffect(() => {
     if (chart.current === null || drawnData.current === data) return;

@@ -23,7 +23,7 @@ export function DataTableHead<Row extends object>({ table, columns }: DataTableH
                   sorted === false ? undefined : sorted === 'asc' ? 'ascending' : 'descending'
                 }
                 style={{ width: column?.width }}
-                className={`lettering sticky top-0 z-10 border-b border-ink bg-sheet px-3 py-1 ${column?.align === 'end' ? 'text-right' : 'text-left'}`}
+                className={`lettering sticky top-0 z-10 border-b border-ink bg-sheet px-3 py-1 whitespace-nowrap ${column?.align === 'end' ? 'text-right' : 'text-left'}`}
               >
                 {header.column.getCanSort() ? (
                   <button

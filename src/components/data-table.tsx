@@ -68,6 +68,8 @@ export function DataTable<Row extends object>({
       columns.map((column): ColumnDef<DataTableFeatures, Row> => ({
         id: column.id,
         header: column.header,
+        // Only columns with an accessor can be sorted; the server sorts, so it is never read.
+        accessorFn: () => null,
         enableSorting: column.sortable ?? false,
         sortDescFirst: false,
         cell: ({ row }) => column.cell(row.original),
@@ -102,7 +104,7 @@ export function DataTable<Row extends object>({
       aria-label={label}
       tabIndex={0}
       aria-busy={fetching || undefined}
-      className="overflow-auto border border-hairline bg-sheet"
+      className="relative overflow-auto border border-hairline bg-sheet"
       style={virtual ? { maxHeight: `${virtual.heightPx}px` } : undefined}
     >
       <table

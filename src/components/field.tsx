@@ -24,7 +24,7 @@ export function useFieldLinks(own: { id?: string; 'aria-describedby'?: string })
 
 export interface FieldProps {
   label: ReactNode;
-  /** Written above the input: format, range, where to find the value. */
+  /** Written under the input: format, range, where to find the value. */
   hint?: ReactNode;
   error?: string | undefined;
   /** Most inputs are needed; the others say "optional". */
@@ -64,12 +64,13 @@ export function Field({ label, hint, error, optional, id, className, children }:
           {label}
           {optional && <span className="font-normal text-ink-faint"> (optional)</span>}
         </label>
+        {children}
+        {/* Beneath, so that inputs side by side stand in line. */}
         {hint && (
           <p id={hintId} className="text-xs text-ink-faint">
             {hint}
           </p>
         )}
-        {children}
         {error && <FieldError id={errorId}>{error}</FieldError>}
       </div>
     </FieldContext>

@@ -49,25 +49,27 @@ export function Pager({
             />
           </label>
         )}
-        <Button
-          size="small"
-          icon="chevron-left"
-          disabled={page <= 1}
-          onClick={() => onPage(page - 1)}
-        >
-          Previous
-        </Button>
-        <span>
-          Page <span className="figures">{page}</span> of <span className="figures">{pages}</span>
-        </span>
-        <Button
-          size="small"
-          icon="chevron-right"
-          disabled={page >= pages}
-          onClick={() => onPage(page + 1)}
-        >
-          Next
-        </Button>
+        <div className="flex items-center gap-3">
+          <Button
+            size="small"
+            icon="chevron-left"
+            disabled={page <= 1}
+            onClick={() => onPage(page - 1)}
+          >
+            Previous
+          </Button>
+          <span>
+            Page <span className="figures">{page}</span> of <span className="figures">{pages}</span>
+          </span>
+          <Button
+            size="small"
+            icon="chevron-right"
+            disabled={page >= pages}
+            onClick={() => onPage(page + 1)}
+          >
+            Next
+          </Button>
+        </div>
       </div>
     </nav>
   );
