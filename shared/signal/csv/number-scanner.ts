@@ -6,7 +6,7 @@ import { exactPowers, scaleWideDecimal } from './wide-decimal.ts';
  *
  * A number of up to 2^53 as integer digits and a power of ten up to 22 needs one exact division or
  * multiplication (W. D. Clinger, "How to read floating point numbers accurately", 1990). Numbers of
- * up to 30 digits are reckoned in twice the precision; everything else goes through `Number`.
+ * up to 24 digits are reckoned in twice the precision; everything else goes through `Number`.
  *
  * One object is used for a whole file, its fields are the results: a result object a number would
  * cost more than the scanning.
@@ -16,13 +16,13 @@ export class NumberScanner {
   mark = 0;
   /** May a comma be a decimal mark at all? Not where commas separate cells. */
   commaMayMark = true;
-  value = 0;
+  value = NaN;
   /** Digits before the mark, digits behind it, and the written exponent of the last number. */
   integerDigits = 0;
   fractionDigits = 0;
   exponent = 0;
   /** All digits as one whole number; inexact above 2^53. */
-  mantissa = 0;
+  mantissa = NaN;
 
   /**
    * Scans the number that starts at `from`: sign, digits with at most one mark, exponent.
@@ -101,32 +101,47 @@ export class NumberScanner {
 
   /** Magnitude of a number of many digits or with an exponent. */
   private scanWide(bytes: Uint8Array, from: number, to: number, end: number): number {
-    let high = 0;
+    let at = from;
+    // Leading zeros use up no precision. A mark is the only byte below 48 here.
+    while (at < to && bytes[at]! <= 48) at += 1;
+    // Digits 1 to 7, 8 to 15 and 16 to 24, each part a small whole number.
+    let first = 0;
+    let second = 0;
     let low = 0;
-    let highDigits = 0;
-    let lowDigits = 0;
-    for (let at = from; at < to; at += 1) {
+    let count = 0;
+    for (; at < to && count < 7; at += 1) {
       const digit = bytes[at]! - 48;
       if (digit < 0) continue;
-      if (highDigits < 15) {
-        high = high * 10 + digit;
-        // Leading zeros don't use up precision.
-        if (high > 0) highDigits += 1;
-      } else {
-        low = low * 10 + digit;
-        lowDigits += 1;
-      }
+      first = (Math.imul(first, 10) + digit) | 0;
+      count += 1;
     }
-    const power = this.exponent - this.fractionDigits;
-    const all = lowDigits === 0 ? high : high * 10 ** lowDigits + low;
+    let high = first;
+    if (at < to) {
+      for (; at < to && count < 15; at += 1) {
+        const digit = bytes[at]! - 48;
+        if (digit < 0) continue;
+        second = (Math.imul(second, 10) + digit) | 0;
+        count += 1;
+      }
+      high = count > 7 ? first * exactPowers[count - 7]! + second : first;
+    }
+    for (; at < to && count < 24; at += 1) {
+      const digit = bytes[at]! - 48;
+      if (digit < 0) continue;
+      low = (Math.imul(low, 10) + digit) | 0;
+      count += 1;
+    }
+    const lowDigits = count > 15 ? count - 15 : 0;
+    const all = lowDigits === 0 ? high : high * exactPowers[lowDigits]! + low;
     this.mantissa = all;
+    if (at < to) return toNumber(asciiForMessage(bytes, from, end));
     if (all === 0) return 0;
+    const power = this.exponent - this.fractionDigits;
     // Below 2^53 the sum is exact: so is each of its parts.
-    if (lowDigits <= 15 && all < 9007199254740992 && power >= -22 && power <= 22) {
+    if (all < 9007199254740992 && power >= -22 && power <= 22) {
       return power < 0 ? all / exactPowers[-power]! : all * exactPowers[power]!;
     }
-    const wide =
-      lowDigits > 0 && lowDigits <= 15 ? scaleWideDecimal(high, low, lowDigits, power) : NaN;
+    const wide = lowDigits > 0 ? scaleWideDecimal(high, low, lowDigits, power) : NaN;
     return Number.isNaN(wide) ? toNumber(asciiForMessage(bytes, from, end)) : wide;
   }
 
