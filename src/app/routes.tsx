@@ -36,6 +36,13 @@ export function routes(queryClient: QueryClient): RouteObject[] {
       }),
     },
     {
+      path: '/demo/mailbox',
+      lazy: lazyPage(queryClient, async () => {
+        const { demoMailboxLoader, DemoMailboxPage } = await import('./routes/demo-mailbox.tsx');
+        return { loader: demoMailboxLoader, Component: DemoMailboxPage };
+      }),
+    },
+    {
       id: siteRouteId,
       path: '/sites/:siteId',
       loader: siteLoader(queryClient),
