@@ -25,7 +25,7 @@ export const palettes = {
   dark: {
     paper: '#191a18',
     sheet: '#21221f',
-    well: '#2c2d29',
+    well: '#32332e',
     ink: '#ece5d4',
     'ink-soft': '#c4bcaa',
     'ink-faint': '#a39c8c',

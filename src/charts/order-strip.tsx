@@ -103,7 +103,12 @@ function Strip({ cells, label, width, height, numbered }: StripProps) {
           <path d="M0 0v3.2" stroke="var(--tone-ink-soft)" strokeWidth="1.8" />
         </pattern>
       </defs>
-      <path d={`M0 ${height - 0.5}H${width}`} stroke="var(--tone-rule)" />
+      {/* Broken where nothing is known: an empty strip must not read as a quiet machine. */}
+      <path
+        d={`M0 ${height - 0.5}H${width}`}
+        stroke="var(--tone-rule)"
+        strokeDasharray={cells.some((cell) => cell.known) ? undefined : '2 4'}
+      />
       {cells.map((cell) => (
         <Cell key={cell.order} cell={cell} height={height} hatchId={hatchId} />
       ))}

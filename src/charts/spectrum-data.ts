@@ -70,6 +70,8 @@ export interface SpectrumMark {
   /** `run`, `fraction`: evidence of looseness; `standing`: stands out without being evidence. */
   kind: 'run' | 'fraction' | 'standing' | 'explained';
   explainedBy: string | null;
+  /** The same line at the survey before, where it is known. */
+  previousAmplitude: number | null;
 }
 
 /** Which lines of the spectrum are marked, and as what; those that are only noise are not. */
@@ -78,6 +80,7 @@ export function spectrumMarks(
   speedHz: number | null,
   orders: readonly OrderMark[],
   run: { from: number; to: number; length: number } | null,
+  previous: Spectrum | null = null,
 ): SpectrumMark[] {
   if (speedHz === null || speedHz <= 0) return [];
   const evidence = evidenceOrders(orders, run);
@@ -93,6 +96,10 @@ export function spectrumMarks(
           ...peak,
           kind: kindOf(mark, evidence),
           explainedBy: mark.explainedBy,
+          previousAmplitude:
+            previous === null
+              ? null
+              : (peakNear(previous, mark.order * speedHz, halfWidthHz)?.amplitude ?? null),
         } as const,
       ];
     });

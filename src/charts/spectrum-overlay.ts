@@ -32,6 +32,12 @@ export function drawSpectrumMarks(
       else drawStanding(context, x, y, bottom, mark.kind, palette, pxRatio);
     }
 
+    for (const { mark, x } of placed) {
+      if (mark.previousAmplitude === null || mark.kind === 'explained') continue;
+      const y = plot.valToPos(mark.previousAmplitude, 'y', true);
+      if (y >= top && y <= bottom) drawPrevious(context, x, y, palette, pxRatio);
+    }
+
     context.font = canvasFont(11, pxRatio, 'figures');
     context.textAlign = 'center';
     const labels = placed.map(({ mark, x }) => {
@@ -91,6 +97,26 @@ function drawStanding(
   }
   const half = 3 * pxRatio;
   context.fillRect(x - half, y - half, 2 * half, 2 * half);
+}
+
+/** A bar across the stem where the line stood before: the line itself is hidden behind the stem. */
+function drawPrevious(
+  context: CanvasRenderingContext2D,
+  x: number,
+  y: number,
+  palette: ChartPalette,
+  pxRatio: number,
+): void {
+  const half = 5 * pxRatio;
+  context.lineWidth = 4 * pxRatio;
+  context.strokeStyle = palette.sheet;
+  context.beginPath();
+  context.moveTo(x - half, y);
+  context.lineTo(x + half, y);
+  context.stroke();
+  context.lineWidth = 2 * pxRatio;
+  context.strokeStyle = palette.inkSoft;
+  context.stroke();
 }
 
 function drawExplained(

@@ -51,8 +51,8 @@ export function SpectrumPlot({
   const unitsPerHz = perHz(xUnit, speedHz);
 
   const marks = useMemo(
-    () => spectrumMarks(spectrum, speedHz, orders, run),
-    [spectrum, speedHz, orders, run],
+    () => spectrumMarks(spectrum, speedHz, orders, run, previous),
+    [spectrum, speedHz, orders, run, previous],
   );
   const floor = useMemo(
     () => (amplitudeScale === 'log' ? logFloor(spectrum.amplitude) : null),
@@ -94,7 +94,7 @@ export function SpectrumPlot({
       }
       caption={
         <>
-          {hasPrevious && 'Broken line: the survey before. '}
+          {hasPrevious && 'Broken line and cross bars: the survey before. '}
           {series.linesPerPoint > 1 &&
             `Drawn from ${spectrum.amplitude.length} lines, least and greatest of each ${(series.linesPerPoint * 2).toFixed(0)}: no peak is lost.`}
         </>

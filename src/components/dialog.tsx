@@ -31,11 +31,8 @@ export function Dialog({
           {...(description ? {} : { 'aria-describedby': undefined })}
           className={`fixed top-[8vh] left-1/2 z-50 flex max-h-[84vh] w-[calc(100vw-2rem)] -translate-x-1/2 flex-col border border-ink bg-sheet shadow-sheet ${wide ? 'max-w-3xl' : 'max-w-lg'}`}
         >
-          <header className="flex items-start justify-between gap-3 border-b border-ink py-2 pr-2 pl-4">
-            <Primitive.Title className="pt-1 text-lg">{title}</Primitive.Title>
-            <Primitive.Close asChild>
-              <IconButton icon="close" label="Close" />
-            </Primitive.Close>
+          <header className="border-b border-ink py-2.5 pr-14 pl-4">
+            <Primitive.Title className="text-lg">{title}</Primitive.Title>
           </header>
           <div className="flex flex-col gap-3 overflow-y-auto p-4">
             {description && (
@@ -50,6 +47,12 @@ export function Dialog({
               {actions}
             </footer>
           )}
+          {/* Last in the order of focus: the dialog opens on its first field or action. */}
+          <div className="absolute top-1.5 right-1.5">
+            <Primitive.Close asChild>
+              <IconButton icon="close" label="Close" />
+            </Primitive.Close>
+          </div>
         </Primitive.Content>
       </Primitive.Portal>
     </Primitive.Root>
