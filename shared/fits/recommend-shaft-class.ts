@@ -55,14 +55,22 @@ const heavyFromMm = 50;
 /** "Large" for a sliding inner ring: f6 instead of g6 above this (project's choice, no source). */
 const slidingLargeMm = 250;
 
-function stepsFor(type: BearingType, level: LoadLevel, d: number): Steps {
-  if (type === 'ball') return level === 'light' ? ballLight : ballNormal;
-  if (level === 'heavy' && d >= heavyFromMm) {
-    return type === 'roller' ? rollerHeavy : sphericalHeavy;
+/**
+ * The row of a bearing type and load level. Where the table has none (balls under heavy load,
+ * spherical rollers under light load, heavy load on a small shaft) the type's normal row is taken.
+ */
+function rowFor(
+  type: BearingType,
+  level: LoadLevel,
+  d: number,
+): { steps: Steps; level: LoadLevel } {
+  const isHeavy = level === 'heavy' && type !== 'ball' && d >= heavyFromMm;
+  if (isHeavy) return { steps: type === 'roller' ? rollerHeavy : sphericalHeavy, level };
+  if (level === 'light' && type !== 'spherical roller') {
+    return { steps: type === 'ball' ? ballLight : rollerLight, level };
   }
-  // The table has no light row for spherical rollers; they take that of the other rollers.
-  if (level === 'light') return rollerLight;
-  return type === 'roller' ? rollerNormal : sphericalNormal;
+  const normal = { ball: ballNormal, roller: rollerNormal, 'spherical roller': sphericalNormal };
+  return { steps: normal[type], level: 'normal' };
 }
 
 function stationary(demand: ShaftDemand): Recommendation {
@@ -83,16 +91,21 @@ function stationary(demand: ShaftDemand): Recommendation {
 
 function turning(demand: ShaftDemand): Recommendation | undefined {
   const level = demand.level ?? 'normal';
-  const row = stepsFor(demand.type, level, demand.d).find(([upTo]) => demand.d <= upTo);
-  if (!row) return undefined;
-  const assumed = demand.level === undefined ? ' (load level not recorded, normal assumed)' : '';
-  const isHeavyRow = level === 'heavy' && demand.type !== 'ball' && demand.d >= heavyFromMm;
+  const row = rowFor(demand.type, level, demand.d);
+  const step = row.steps.find(([upTo]) => demand.d <= upTo);
+  if (!step) return undefined;
+  const load =
+    demand.load === 'rotating'
+      ? 'The load rotates relative to the inner ring'
+      : 'The load on the inner ring is indeterminate';
+  let note = demand.level === undefined ? ' (not recorded, normal assumed)' : '';
+  if (row.level !== level) note = ' (the table has no row for it here; the normal row is taken)';
   return {
-    toleranceClass: row[1],
-    reason: `The load ${demand.load === 'rotating' ? 'rotates relative to' : 'on'} the inner ring${demand.load === 'rotating' ? '' : ' is indeterminate'}; ${typeName(demand.type)}, ${level} load${assumed}, shaft ${demand.d} mm (row up to ${row[0]} mm): ${row[1]}.`,
+    toleranceClass: step[1],
+    reason: `${load}; ${typeName(demand.type)}, ${level} load${note}, shaft ${demand.d} mm (row up to ${step[0]} mm): ${step[1]}.`,
     cautions:
-      isHeavyRow && !demand.clearanceAboveNormal
-        ? [`${row[1]} on the shaft asks for an internal clearance above CN.`]
+      row.level === 'heavy' && !demand.clearanceAboveNormal
+        ? [`${step[1]} on the shaft asks for an internal clearance above CN.`]
         : [],
   };
 }

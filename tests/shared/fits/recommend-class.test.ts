@@ -57,6 +57,7 @@ describe('shaft class', () => {
     ['roller', 'heavy', 140, 'n6'],
     ['roller', 'heavy', 200, 'p6'],
     ['roller', 'heavy', 260, 'r6'],
+    ['spherical roller', 'light', 60, 'm5'],
     ['spherical roller', 'normal', 40, 'k5'],
     ['spherical roller', 'normal', 65, 'm5'],
     ['spherical roller', 'normal', 100, 'm6'],
