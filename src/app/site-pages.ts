@@ -22,6 +22,26 @@ const pages: Readonly<Record<string, Load>> = {
     const { machineEditLoader, MachineEditPage } = await import('./routes/machine-edit.tsx');
     return { loader: machineEditLoader, Component: MachineEditPage };
   },
+  review: async () => {
+    const { reviewLoader, ReviewPage } = await import('./routes/review.tsx');
+    return { loader: reviewLoader, Component: ReviewPage };
+  },
+  findings: async () => {
+    const { findingsLoader, FindingsPage } = await import('./routes/findings.tsx');
+    return { loader: findingsLoader, Component: FindingsPage };
+  },
+  'findings/:findingId': async () => {
+    const { findingLoader, FindingPage } = await import('./routes/finding.tsx');
+    return { loader: findingLoader, Component: FindingPage };
+  },
+  inspections: async () => {
+    const { inspectionsLoader, InspectionsPage } = await import('./routes/inspections.tsx');
+    return { loader: inspectionsLoader, Component: InspectionsPage };
+  },
+  'inspections/:inspectionId': async () => {
+    const { inspectionLoader, InspectionPage } = await import('./routes/inspection.tsx');
+    return { loader: inspectionLoader, Component: InspectionPage };
+  },
   routes: async () => {
     const { routesLoader, RoutesPage } = await import('./routes/routes.tsx');
     return { loader: routesLoader, Component: RoutesPage };

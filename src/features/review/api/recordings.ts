@@ -1,0 +1,50 @@
+import { queryOptions, type QueryClient } from '@tanstack/react-query';
+import { screeningResponse } from '#shared/contracts/screening.ts';
+import { waveformResponse } from '#shared/contracts/waveform.ts';
+import { downloadFloat32, request } from '#src/lib/api-client.ts';
+
+/** Samples and spectra: large, and the same for ever. */
+const recordingsKey = (siteId: number) => ['sites', siteId, 'recordings'] as const;
+export const isRecording = (queryKey: readonly unknown[]) => queryKey[2] === 'recordings';
+
+export const screeningQuery = (siteId: number, screeningId: number) =>
+  queryOptions({
+    queryKey: ['sites', siteId, 'review', 'screening', screeningId],
+    queryFn: ({ signal }) =>
+      request(`/api/sites/${siteId}/screenings/${screeningId}`, screeningResponse, { signal }),
+  });
+
+export const waveformQuery = (siteId: number, waveformId: number) =>
+  queryOptions({
+    queryKey: ['sites', siteId, 'review', 'waveform', waveformId],
+    queryFn: ({ signal }) =>
+      request(`/api/sites/${siteId}/waveforms/${waveformId}`, waveformResponse, { signal }),
+  });
+
+export const samplesQuery = (siteId: number, waveformId: number) =>
+  queryOptions({
+    queryKey: [...recordingsKey(siteId), 'samples', waveformId],
+    staleTime: Infinity,
+    queryFn: ({ signal }) =>
+      downloadFloat32(`/api/sites/${siteId}/waveforms/${waveformId}/samples`, { signal }),
+  });
+
+export const spectrumQuery = (siteId: number, screeningId: number) =>
+  queryOptions({
+    queryKey: [...recordingsKey(siteId), 'spectrum', screeningId],
+    staleTime: Infinity,
+    queryFn: ({ signal }) =>
+      downloadFloat32(`/api/sites/${siteId}/screenings/${screeningId}/spectrum`, { signal }),
+  });
+
+/** Fetches what an item of the queue shows before it is gone to. */
+export function prefetchItem(
+  client: QueryClient,
+  siteId: number,
+  item: { screeningId: number; waveformId: number },
+): void {
+  void client.prefetchQuery(screeningQuery(siteId, item.screeningId));
+  void client.prefetchQuery(waveformQuery(siteId, item.waveformId));
+  void client.prefetchQuery(samplesQuery(siteId, item.waveformId));
+  void client.prefetchQuery(spectrumQuery(siteId, item.screeningId));
+}

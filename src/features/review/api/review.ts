@@ -1,0 +1,50 @@
+import { keepPreviousData, queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
+import {
+  decideResponse,
+  reviewQueueResponse,
+  type DecideRequest,
+  type ReviewQueueQuery,
+} from '#shared/contracts/review.ts';
+import { request, requestNothing } from '#src/lib/api-client.ts';
+import { isRecording } from './recordings.ts';
+
+export const reviewQueueQuery = (siteId: number, query: Partial<ReviewQueueQuery>) =>
+  queryOptions({
+    queryKey: ['sites', siteId, 'review', 'queue', query],
+    placeholderData: keepPreviousData,
+    queryFn: ({ signal }) =>
+      request(`/api/sites/${siteId}/review-queue`, reviewQueueResponse, { query, signal }),
+  });
+
+/** What a decision can change is asked for again; samples and spectra never change. */
+function useForgetAfterDecision(siteId: number) {
+  const client = useQueryClient();
+  return () =>
+    client.invalidateQueries({
+      queryKey: ['sites', siteId],
+      predicate: ({ queryKey }) => !isRecording(queryKey),
+    });
+}
+
+export function useDecide(siteId: number) {
+  const forget = useForgetAfterDecision(siteId);
+  return useMutation({
+    mutationFn: ({ screeningId, ...body }: DecideRequest & { screeningId: number }) =>
+      request(`/api/sites/${siteId}/screenings/${screeningId}/decision`, decideResponse, {
+        method: 'POST',
+        body,
+      }),
+    onSettled: forget,
+  });
+}
+
+export function useUndoDecision(siteId: number) {
+  const forget = useForgetAfterDecision(siteId);
+  return useMutation({
+    mutationFn: (screeningId: number) =>
+      requestNothing(`/api/sites/${siteId}/screenings/${screeningId}/decision`, {
+        method: 'DELETE',
+      }),
+    onSettled: forget,
+  });
+}

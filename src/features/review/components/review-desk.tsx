@@ -1,0 +1,119 @@
+import { useQueryClient } from '@tanstack/react-query';
+import { useEffect, useState } from 'react';
+import type { ReviewDecision, ReviewQueueItem } from '#shared/contracts/review.ts';
+import { Button } from '#src/components/button.tsx';
+import { prefetchItem } from '../api/recordings.ts';
+import { DecisionBar } from './decision-bar.tsx';
+import type { PlotSettingsValue } from './plot-settings.tsx';
+import { QueueList } from './queue-list.tsx';
+import { ReasonDialog } from './reason-dialog.tsx';
+import { decisionWords } from './review-words.ts';
+import { ScreeningView } from './screening-view.tsx';
+import { Shortcuts, useShortcutsOn } from './shortcuts.tsx';
+import { useReviewDecisions } from './use-review-decisions.ts';
+import { useReviewKeys } from './use-review-keys.ts';
+
+export interface ReviewDeskProps {
+  siteId: number;
+  items: readonly ReviewQueueItem[];
+  /** The screening the address names; else the first of the queue is open. */
+  screeningId: number | undefined;
+  plotSettings: PlotSettingsValue;
+  onSelect: (screeningId: number | undefined) => void;
+  onPlotSettings: (changes: { axis?: string; scale?: string }) => void;
+}
+
+/** The queue on one side, the flag on the other; everything by keys as well. */
+export function ReviewDesk(props: ReviewDeskProps) {
+  const { siteId, items, plotSettings, onSelect, onPlotSettings } = props;
+  const client = useQueryClient();
+  const [asking, setAsking] = useState<'rejected' | 'retake' | null>(null);
+  const [showsKeys, setShowsKeys] = useState(false);
+  const [keysOn, setKeysOn] = useShortcutsOn();
+  const screeningId = props.screeningId ?? items[0]?.screeningId;
+  const place = items.findIndex((item) => item.screeningId === screeningId);
+  const item = items[place];
+  const next = items[place + 1];
+  const decisions = useReviewDecisions(siteId, onSelect);
+
+  useEffect(() => {
+    if (next !== undefined) prefetchItem(client, siteId, next);
+  }, [client, siteId, next]);
+
+  const isOpen = item !== undefined && item.decision === null;
+  const go = (step: number) => {
+    const target = items[place + step];
+    if (target !== undefined) onSelect(target.screeningId);
+  };
+  const send = (decision: ReviewDecision, reason: string) => {
+    if (item === undefined || decisions.busy) return;
+    // The flag leaves the queue: what comes after it moves up, the last one gives way to the one before.
+    const following = next ?? items[place - 1];
+    decisions.decide(item, decision, reason, () => onSelect(following?.screeningId));
+  };
+  const choose = (decision: ReviewDecision) => {
+    if (!isOpen) return;
+    if (decision === 'accepted') send(decision, '');
+    else setAsking(decision);
+  };
+  useReviewKeys(
+    {
+      j: () => go(1),
+      k: () => go(-1),
+      a: () => choose('accepted'),
+      r: () => choose('rejected'),
+      t: () => choose('retake'),
+      u: decisions.undoLast,
+      '?': () => setShowsKeys(true),
+    },
+    keysOn,
+  );
+
+  return (
+    <div className="grid items-start gap-4 xl:grid-cols-[17.5rem_minmax(0,1fr)]">
+      <div className="flex flex-col gap-2">
+        <QueueList items={items} selectedId={screeningId} onSelect={onSelect} />
+        <Button size="small" variant="quiet" icon="help" onClick={() => setShowsKeys(true)}>
+          Keys
+        </Button>
+      </div>
+      {screeningId !== undefined && (
+        <ScreeningView
+          siteId={siteId}
+          screeningId={screeningId}
+          waveformId={item?.waveformId}
+          plotSettings={plotSettings}
+          onPlotSettings={onPlotSettings}
+          decision={
+            isOpen ? (
+              <DecisionBar busy={decisions.busy} keysOn={keysOn} onDecide={choose} />
+            ) : item?.decision ? (
+              <div className="flex flex-wrap items-center gap-3 text-sm">
+                <span>
+                  {decisionWords[item.decision]} by {item.decidedByName}
+                </span>
+                <Button size="small" onClick={() => decisions.takeBack(item.screeningId)}>
+                  Take back
+                </Button>
+              </div>
+            ) : null
+          }
+        />
+      )}
+      {asking !== null && item !== undefined && (
+        <ReasonDialog
+          decision={asking}
+          pointLabel={item.pointLabel}
+          onClose={() => setAsking(null)}
+          onDecide={(reason) => {
+            setAsking(null);
+            send(asking, reason);
+          }}
+        />
+      )}
+      {showsKeys && (
+        <Shortcuts isOn={keysOn} onChoose={setKeysOn} onClose={() => setShowsKeys(false)} />
+      )}
+    </div>
+  );
+}

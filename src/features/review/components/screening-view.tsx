@@ -1,0 +1,103 @@
+import { useQuery } from '@tanstack/react-query';
+import type { ReactNode } from 'react';
+import { ErrorState } from '#src/components/error-state.tsx';
+import { Figure } from '#src/components/figure.tsx';
+import { Panel } from '#src/components/panel.tsx';
+import { Skeleton } from '#src/components/skeleton.tsx';
+import { VerdictMark } from '#src/components/verdict-mark.tsx';
+import { toApiError } from '#src/lib/api-error.ts';
+import { formatDay } from '#src/lib/dates.ts';
+import { formatFixed } from '#src/lib/numbers.ts';
+import { screeningQuery, waveformQuery } from '../api/recordings.ts';
+import { Evidence } from './evidence.tsx';
+import { PlotSettings, type PlotSettingsValue } from './plot-settings.tsx';
+import { ScreeningFacts } from './screening-facts.tsx';
+import { ScreeningPlots } from './screening-plots.tsx';
+
+/** One screening whole: verdict and decision on top, plots, figures, evidence. */
+export function ScreeningView({
+  siteId,
+  screeningId,
+  waveformId,
+  plotSettings,
+  onPlotSettings,
+  decision,
+}: {
+  siteId: number;
+  screeningId: number;
+  /** Where the queue knows it, the waveform is fetched at once and not after the screening. */
+  waveformId: number | undefined;
+  plotSettings: PlotSettingsValue;
+  onPlotSettings: (changes: { axis?: string; scale?: string }) => void;
+  /** Buttons, or what was decided. */
+  decision: ReactNode;
+}) {
+  const screening = useQuery(screeningQuery(siteId, screeningId));
+  const knownWaveformId = waveformId ?? screening.data?.waveformId;
+  const waveform = useQuery({
+    ...waveformQuery(siteId, knownWaveformId ?? 0),
+    enabled: knownWaveformId !== undefined,
+  });
+  const failed = screening.error ?? waveform.error;
+  if (failed !== null) {
+    const error = toApiError(failed);
+    return (
+      <ErrorState
+        title={error.message}
+        safe="No decision was lost."
+        advice="Choose another flag from the queue, or reload the page."
+        errorId={error.id}
+      />
+    );
+  }
+  const result = screening.data?.result;
+  return (
+    <div className="flex min-w-0 flex-col gap-4">
+      <header className="flex flex-wrap items-center justify-between gap-x-5 gap-y-2 border-y border-ink bg-sheet px-4 py-2 phone:border-x">
+        <div>
+          <h2 className="figures text-lg">{waveform.data?.pointLabel ?? '…'}</h2>
+          <p className="text-sm text-ink-soft">
+            {waveform.data &&
+              `${waveform.data.machineName}, ${waveform.data.positionName}, ${formatDay(waveform.data.surveyedOn)}`}
+          </p>
+        </div>
+        {result && (
+          <div className="flex items-center gap-4">
+            <VerdictMark verdict={result.verdict} />
+            <span className="text-sm">
+              Score <Figure value={result.score === null ? null : formatFixed(result.score, 2)} />
+            </span>
+          </div>
+        )}
+        {decision}
+      </header>
+      {screening.data && waveform.data ? (
+        <>
+          <div className="border border-hairline bg-sheet p-4">
+            <div className="mb-2 flex justify-end">
+              <PlotSettings value={plotSettings} onChange={onPlotSettings} />
+            </div>
+            <ScreeningPlots
+              siteId={siteId}
+              screening={screening.data}
+              waveform={waveform.data}
+              {...plotSettings}
+            />
+          </div>
+          <Panel title="Evidence">
+            <Evidence result={screening.data.result} />
+          </Panel>
+          <Panel title="Figures">
+            <ScreeningFacts result={screening.data.result} waveform={waveform.data} />
+          </Panel>
+          <p className="text-xs text-ink-faint">
+            Method {screening.data.result.methodVersion}, run {screening.data.run}. A screening is a
+            hint for a qualified analyst, not a diagnosis.
+          </p>
+        </>
+      ) : (
+        <Skeleton lines={8} label="Loading the screening…" />
+      )}
+    </div>
+  );
+}
