@@ -25,8 +25,8 @@ export interface TimeAxisResult {
  * Checks a time column while it is read and yields its sampling rate.
  *
  * Every interval must be within 1 % of the mean step; the rounding of the printed times (half a
- * unit of the last digit at each end, as the file prints them) is allowed for on top, since six
- * decimals at 25.6 kHz alone make 1.3 %. Intervals within 1 % may still add up: no time may stand
+ * unit of the last digit at each end, as the file prints them) is allowed for on top where the step
+ * is no whole count of that digit, since six decimals at 25.6 kHz alone make 1.3 %. Intervals within 1 % may still add up: no time may stand
  * further from the even grid than half a step or 1e-4 of the block's length, whichever is more.
  *
  * The rate is that of the straight line through all times (least squares): the roundings of 16,384
@@ -141,10 +141,12 @@ export class TimeAxis {
     const blockStep = (times[n - 1]! - first) / (n - 1);
     const wander = Math.max(0.5, 1e-4 * n) * step;
     const tolerance = stepTolerance * step;
+    const rounded = this.isRounded(n, blockStep);
     for (let i = 1; i < n; i += 1) {
       const time = times[i]!;
       const off = Math.abs(time - times[i - 1]! - step);
       if (off > tolerance) {
+        if (!rounded) return i;
         const rounding = this.halfUnit(time) + this.halfUnit(times[i - 1]!);
         const allowed = rounding <= 2 * roundingShareMax * step ? rounding : 0;
         if (off > tolerance + allowed) return i;
@@ -152,6 +154,13 @@ export class TimeAxis {
       if (Math.abs(time - first - i * blockStep) > wander) return i;
     }
     return 0;
+  }
+
+  /** Steps of a whole count of the last printed digit need no rounding, and get no allowance for it. */
+  private isRounded(n: number, blockStep: number): boolean {
+    const largest = Math.max(Math.abs(this.times[0]!), Math.abs(this.times[n - 1]!));
+    const digits = blockStep / (2 * this.halfUnit(largest));
+    return Math.abs(digits - Math.round(digits)) > 2 / n;
   }
 
   /**
