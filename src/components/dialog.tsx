@@ -1,5 +1,5 @@
 import { Dialog as Primitive } from 'radix-ui';
-import type { ReactNode } from 'react';
+import { useRef, type ReactNode } from 'react';
 import { IconButton } from './icon-button.tsx';
 
 export interface DialogProps {
@@ -23,11 +23,20 @@ export function Dialog({
   actions,
   wide = false,
 }: DialogProps) {
+  const openedFrom = useRef<Element | null>(null);
   return (
     <Primitive.Root open={open} onOpenChange={onOpenChange}>
       <Primitive.Portal>
         <Primitive.Overlay className="fixed inset-0 z-40 bg-[color-mix(in_srgb,var(--tone-well)_70%,transparent)]" />
         <Primitive.Content
+          // The primitive gives the focus back to its own trigger only; ours stands anywhere.
+          onOpenAutoFocus={() => {
+            openedFrom.current = document.activeElement;
+          }}
+          onCloseAutoFocus={(event) => {
+            event.preventDefault();
+            if (openedFrom.current instanceof HTMLElement) openedFrom.current.focus();
+          }}
           {...(description ? {} : { 'aria-describedby': undefined })}
           className={`fixed top-[8vh] left-1/2 z-50 flex max-h-[84vh] w-[calc(100vw-2rem)] -translate-x-1/2 flex-col border border-ink bg-sheet shadow-sheet ${wide ? 'max-w-3xl' : 'max-w-lg'}`}
         >

@@ -62,7 +62,13 @@ export function Field({ label, hint, error, optional, id, className, children }:
       >
         <label htmlFor={inputId} className="text-sm font-medium">
           {label}
-          {optional && <span className="font-normal text-ink-faint"> (optional)</span>}
+          {/* The blank stands outside, or the label is read as one word with it. */}
+          {optional && (
+            <>
+              {' '}
+              <span className="font-normal text-ink-faint">(optional)</span>
+            </>
+          )}
         </label>
         {children}
         {/* Beneath, so that inputs side by side stand in line. */}
