@@ -107,6 +107,13 @@ describe('chance that a recorded seat runs loose', () => {
     );
   });
 
+  it('counts marks seen at once on a seat that was not measured, not on one that was', () => {
+    const marks = { shaftHistory: { condition: 'creep marks' } };
+    const measured = { shaftMeasuredMm: 60.01, boreMeasuredMm: 59.995 };
+    expect(shaft(marks)).toBeGreaterThan(shaft({}) + 0.2);
+    expect(shaft({ ...measured, ...marks })).toBe(shaft(measured));
+  });
+
   it('is absent where nothing is recorded and where the seat is bonded on purpose', () => {
     expect(assessSeats(turning).shaftSeat?.chanceOfClearance).toBeUndefined();
     const bonded = assessSeats({ ...turning, shaftClass: 'h6', shaftBonded: true });
