@@ -28,12 +28,22 @@ import { reviewRoutes } from './features/review/review.routes.ts';
 import { ReviewService } from './features/review/review.service.ts';
 import { seatRoutes } from './features/seats/seat.routes.ts';
 import { SeatService } from './features/seats/seat.service.ts';
+import { surveyRoutes } from './features/surveys/survey.routes.ts';
+import { SurveyService } from './features/surveys/survey.service.ts';
+import { UploadService } from './features/waveforms/upload.service.ts';
+import { presentListItem } from './features/waveforms/waveform.presenter.ts';
+import { WaveformRepository } from './features/waveforms/waveform.repository.ts';
+import { uploadRoutes, waveformRoutes } from './features/waveforms/waveform.routes.ts';
+import { WaveformService } from './features/waveforms/waveform.service.ts';
 import type { Route } from './http/route.ts';
 import type { RouteContext } from './http/run-route.ts';
 import { DemoMailRepository } from './mail/demo-mail.repository.ts';
 import { FakeSmtpServer } from './mail/fake-smtp-server.ts';
 import { OutboxRepository } from './mail/outbox.repository.ts';
 import { OutboxSender } from './mail/outbox-sender.ts';
+import { InProcessScreeningQueue, type ScreeningQueue } from './screening/screening-queue.ts';
+import { WorkerPool } from './screening/worker-pool.ts';
+import { FileStore } from './storage/file-store.ts';
 import type { ProductResponse } from '#shared/contracts/session.ts';
 
 export interface Product {
@@ -48,7 +58,11 @@ export interface Product {
     review: ReviewService;
     findings: FindingService;
     inspections: InspectionService;
+    surveys: SurveyService;
+    uploads: UploadService;
   };
+  files: FileStore;
+  queue: ScreeningQueue;
   /** Starts what works in the background: screening, mail. */
   start: () => Promise<void>;
   /** Takes nothing new, finishes or hands back what runs. */
@@ -88,6 +102,21 @@ export function compose(
     addMail: (db, mail, now) => new OutboxRepository(db).add(mail, now),
     publicUrl: options.publicUrl,
   });
+  const files = new FileStore(config.dataDirectory);
+  const workers = new WorkerPool(config.screeningWorkerCount);
+  const queue = new InProcessScreeningQueue({ database, files, workers, logger });
+  const wakeQueue = () => queue.wake();
+  const uploads = new UploadService({
+    database,
+    files,
+    readCsv: (path, readOptions) => workers.read(path, readOptions),
+    wakeQueue,
+  });
+  const waveforms = new WaveformService(database, files, wakeQueue);
+  const surveys = new SurveyService(database, {
+    waveformsOf: async (surveyId) =>
+      (await new WaveformRepository(database.db).ofSurvey(surveyId)).map(presentListItem),
+  });
   const demoMails = new DemoMailRepository(database.db);
 
   const routes = [
@@ -97,6 +126,12 @@ export function compose(
     ...machineRoutes(machines),
     ...positionRoutes(positions),
     ...routeRoutes(walkRoutes),
+    ...surveyRoutes(surveys),
+    ...uploadRoutes(uploads, {
+      directory: () => files.incomingDirectory(),
+      fileMaxBytes: config.uploadMaxBytes,
+    }),
+    ...waveformRoutes(waveforms),
     ...seatRoutes(seats),
     ...reviewRoutes(review),
     ...findingRoutes(findings),
@@ -116,7 +151,11 @@ export function compose(
       review,
       findings,
       inspections,
+      surveys,
+      uploads,
     },
+    files,
+    queue,
     routeContext: {
       roleAt: (userId, siteId) => accounts.roleAt(userId, siteId),
       principalOf: async (req, res) => {
@@ -132,6 +171,9 @@ export function compose(
       },
     },
     start: async () => {
+      await files.clearIncoming();
+      await queue.start();
+      background.push(queue);
       let smtpUrl = config.smtpUrl;
       if (smtpUrl === undefined) {
         const fake = new FakeSmtpServer((mail) => demoMails.add(mail), logger);

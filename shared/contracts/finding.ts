@@ -3,7 +3,8 @@ import { id, isoDate, line, paragraph } from './fields.ts';
 import { inspectionListItem } from './inspection.ts';
 import { listQuery, listResponse } from './list.ts';
 import { direction } from './measuring-point.ts';
-import { orderCell, verdict } from './screening.ts';
+import { orderCell } from './order-cells.ts';
+import { verdict } from './screening.ts';
 import { seatAssessmentsResponse } from './seat-assessment.ts';
 
 export const findingStates = [

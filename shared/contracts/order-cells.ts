@@ -1,5 +1,14 @@
+import { z } from 'zod';
 import type { OrderLine } from '../signal/screening-types.ts';
-import type { OrderCell } from './screening.ts';
+
+/** The strip's cells alone, for lists: order, prominence in dB and whether something else explains it. */
+export const orderCell = z.object({
+  order: z.number(),
+  prominenceDb: z.number(),
+  significant: z.boolean(),
+  explainedBy: z.string().nullable(),
+});
+export type OrderCell = z.infer<typeof orderCell>;
 
 /**
  * A line counts as standing out where noise alone gives as much less than once in a hundred: with

@@ -2,7 +2,8 @@ import { z } from 'zod';
 import { id, paragraph } from './fields.ts';
 import { listResponse } from './list.ts';
 import { direction } from './measuring-point.ts';
-import { orderCell, verdict } from './screening.ts';
+import { orderCell } from './order-cells.ts';
+import { verdict } from './screening.ts';
 
 export const reviewDecisions = ['accepted', 'rejected', 'retake'] as const;
 export const reviewDecision = z.enum(reviewDecisions);

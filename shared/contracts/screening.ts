@@ -79,15 +79,6 @@ export const screeningResult = z.object({
   }),
 }) satisfies z.ZodType<ScreeningResult>;
 
-/** The strip's cells alone, for lists: order, prominence in dB and whether something else explains it. */
-export const orderCell = z.object({
-  order: z.number(),
-  prominenceDb: z.number(),
-  significant: z.boolean(),
-  explainedBy: z.string().nullable(),
-});
-export type OrderCell = z.infer<typeof orderCell>;
-
 export const screeningResponse = z.object({
   id: z.int(),
   waveformId: z.int(),

@@ -52,6 +52,8 @@ export const rejectedFileResponse = z.object({
 });
 
 export const surveyResponse = surveyListItem.extend({
+  /** Every point of the route, in the order of the walk. */
+  points: z.array(pointChoice),
   waveforms: z.array(waveformListItem),
   /** Points of the route for which this survey has no waveform, in the order of the walk. */
   missingPoints: z.array(pointChoice),

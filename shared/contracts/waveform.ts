@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { quantities, units } from '../quantities/quantity.ts';
 import { id, isoDateTime, numberBetween } from './fields.ts';
 import { direction } from './measuring-point.ts';
+import { orderCell } from './order-cells.ts';
 
 /** Where the screening of a waveform stands. */
 export const screeningStates = ['queued', 'running', 'done', 'failed'] as const;
@@ -69,6 +70,10 @@ export const waveformListItem = z.object({
   verdict: z.string().nullable(),
   score: z.number().nullable(),
   decision: z.string().nullable(),
+  /** Speed of the position's shaft, as found by the latest screening. */
+  speedRpm: z.number().nullable(),
+  /** The order strip of the latest screening; empty before there is one. */
+  orders: z.array(orderCell),
 });
 export type WaveformListItem = z.infer<typeof waveformListItem>;
 
@@ -98,3 +103,10 @@ export const waveformResponse = waveformListItem.extend({
   can: z.object({ decide: z.boolean(), screenAgain: z.boolean() }),
 });
 export type WaveformResponse = z.infer<typeof waveformResponse>;
+
+/** Screens again: with another told speed or unit, or as it was (a failed screening). */
+export const screenAgainRequest = z.strictObject({
+  toldSpeedRpm: numberBetween(1, 200_000, 'r/min').nullable().optional(),
+  unit: unit.optional(),
+});
+export type ScreenAgainRequest = z.infer<typeof screenAgainRequest>;

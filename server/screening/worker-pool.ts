@@ -1,0 +1,61 @@
+import { fileURLToPath } from 'node:url';
+import { Piscina } from 'piscina';
+import type { ReadWaveformCsvOptions } from '#shared/signal/csv/waveform-csv.ts';
+import type { ScreeningInput } from '#shared/signal/screening-types.ts';
+import type { ReadAnswer, ScreenAnswer, WorkerTask } from './worker-tasks.ts';
+
+/** Longest time one waveform may take; a hundred times what the longest admitted record needs. */
+const taskLimitMs = 5 * 60_000;
+
+/** A task took longer than it may; its worker was ended. */
+export class TaskTimeout extends Error {}
+
+/** The threads that read and screen; the event loop stays free for people. */
+export class WorkerPool {
+  private readonly pool: Piscina;
+
+  constructor(threads: number) {
+    this.pool = new Piscina({
+      filename: fileURLToPath(new URL('./screening-worker.ts', import.meta.url)),
+      name: 'runTask',
+      minThreads: 1,
+      maxThreads: threads,
+      idleTimeout: 30_000,
+      // Node reads TypeScript through the same loader as the server itself.
+      execArgv: ['--import', 'tsx'],
+    });
+  }
+
+  get threads(): number {
+    return this.pool.options.maxThreads;
+  }
+
+  /** Reads a CSV; a file that isn't one comes back as an error with its line. */
+  read(path: string, options: ReadWaveformCsvOptions): Promise<ReadAnswer> {
+    return this.run<ReadAnswer>({ task: 'read', path, options }, []);
+  }
+
+  /** Screens a waveform. Its samples are handed over and empty here afterwards. */
+  screen(input: ScreeningInput & { samples: Float64Array<ArrayBuffer> }): Promise<ScreenAnswer> {
+    return this.run<ScreenAnswer>({ task: 'screen', input }, [input.samples.buffer]);
+  }
+
+  private async run<Answer>(task: WorkerTask, transferList: ArrayBuffer[]): Promise<Answer> {
+    const limit = AbortSignal.timeout(taskLimitMs);
+    try {
+      return (await this.pool.run(task, { transferList, signal: limit })) as Answer;
+    } catch (error) {
+      if (limit.aborted) {
+        throw new TaskTimeout(`It took longer than ${taskLimitMs / 60_000} minutes.`, {
+          cause: error,
+        });
+      }
+      throw error;
+    }
+  }
+
+  /** Ends the threads; what runs is broken off. */
+  async close(): Promise<void> {
+    await this.pool.destroy();
+  }
+}
