@@ -2,7 +2,7 @@ import type { ReactTable, Row as TableRow } from '@tanstack/react-table';
 import { useVirtualizer } from '@tanstack/react-virtual';
 import type { RefObject } from 'react';
 import { classNames } from './class-names.ts';
-import type { DataTableColumn, DataTableFeatures } from './data-table.tsx';
+import type { DataTableColumn, DataTableFeatures } from './data-table-column.ts';
 
 interface DataTableBodyProps<Row extends object> {
   table: ReactTable<DataTableFeatures, Row>;

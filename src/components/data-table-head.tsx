@@ -1,5 +1,5 @@
 import type { ReactTable } from '@tanstack/react-table';
-import type { DataTableColumn, DataTableFeatures } from './data-table.tsx';
+import type { DataTableColumn, DataTableFeatures } from './data-table-column.ts';
 import { Icon } from './icon.tsx';
 
 interface DataTableHeadProps<Row extends object> {

@@ -1,27 +1,15 @@
-import {
-  rowSortingFeature,
-  tableFeatures,
-  useTable,
-  type ColumnDef,
-  type SortingState,
-} from '@tanstack/react-table';
+import { useTable, type ColumnDef, type SortingState } from '@tanstack/react-table';
 import { useMemo, useRef, type ReactNode } from 'react';
+import {
+  dataTableFeatures,
+  type DataTableColumn,
+  type DataTableFeatures,
+} from './data-table-column.ts';
 import { DataTableBody } from './data-table-body.tsx';
 import { DataTableHead } from './data-table-head.tsx';
 
-export interface DataTableColumn<Row> {
-  /** The server's name of the column, given back when it is sorted by. */
-  id: string;
-  header: string;
-  cell: (row: Row) => ReactNode;
-  sortable?: boolean;
-  /** Figures stand at the end, so that their digits align. */
-  align?: 'start' | 'end';
-  /** CSS width, e.g. "9rem". */
-  width?: string;
-  /** The cell that names the row; usually the one that holds the row's link. */
-  rowHeader?: boolean;
-}
+// Pages import the table and its column type together.
+export type { DataTableColumn };
 
 export interface TableSort {
   column: string;
@@ -46,9 +34,6 @@ export interface DataTableProps<Row> {
   /** Renders only the rows in sight; for lists of thousands. */
   virtual?: { heightPx: number; rowHeightPx?: number };
 }
-
-export const dataTableFeatures = tableFeatures({ rowSortingFeature });
-export type DataTableFeatures = typeof dataTableFeatures;
 
 /** A dense list whose sorting, filters and pages are the server's. */
 export function DataTable<Row extends object>({
