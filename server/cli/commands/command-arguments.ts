@@ -1,6 +1,7 @@
 import { parseArgs, type ParseArgsConfig } from 'node:util';
 import { parseUnit } from '#shared/quantities/parse-unit.ts';
 import { units, type Unit } from '#shared/quantities/quantity.ts';
+import { decimalMarks, type DecimalMark } from '#shared/signal/csv/waveform-csv.ts';
 
 /** A fault of the command line itself: told on standard error, exit status 2. */
 export class ArgumentFault extends Error {}
@@ -41,6 +42,14 @@ export class CommandOptions {
       );
     }
     return value;
+  }
+
+  decimalMark(name: string): DecimalMark | undefined {
+    const text = this.text(name);
+    if (text === undefined) return undefined;
+    const mark = decimalMarks.find((known) => known === text);
+    if (mark === undefined) throw new ArgumentFault(`--${name} is "${text}"; expected . or ,`);
+    return mark;
   }
 
   unit(name: string): Unit | undefined {

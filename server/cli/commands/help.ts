@@ -6,6 +6,7 @@ screen FILE_OR_FOLDER… [options]
   --speed-rpm N          told speed of the machine, r/min (instead of the file's speed_rpm)
   --sample-rate-hz N     sampling rate of files without a time column, Hz
   --unit U               unit of columns whose header names none: g, m/s2, mm/s, in/s, um, mil
+  --decimal-mark M       . or , in files whose commas can be read both ways
   --line-frequency-hz N  frequency of the electric supply, Hz
   --machine FILE.json    what is known of the machine
 

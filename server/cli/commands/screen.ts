@@ -6,7 +6,14 @@ import { ArgumentFault, readArguments, tellArgumentFaults } from './command-argu
 import { screeningLine } from './screening-line.ts';
 import { findWaveformFiles, readWaveformFile, type FileFault } from './waveform-files.ts';
 
-const optionNames = ['speed-rpm', 'sample-rate-hz', 'unit', 'line-frequency-hz', 'machine'];
+const optionNames = [
+  'speed-rpm',
+  'sample-rate-hz',
+  'unit',
+  'decimal-mark',
+  'line-frequency-hz',
+  'machine',
+];
 
 /**
  * `screen FILE_OR_FOLDER…`: screens waveforms without a database, one JSON object a line for each
@@ -24,6 +31,7 @@ async function screenFiles(args: string[]): Promise<number> {
     speedRpm: values.positive('speed-rpm', maxSpeedRpm),
     sampleRateHz: values.positive('sample-rate-hz', maxSampleRateHz),
     unit: values.unit('unit'),
+    decimalMark: values.decimalMark('decimal-mark'),
   };
   const lineFrequencyHz = values.positive('line-frequency-hz', 1000);
   const machineFile = values.text('machine');

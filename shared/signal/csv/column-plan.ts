@@ -108,8 +108,7 @@ function placeTime(
   const mayBeTime =
     first.role === 'samples' &&
     (firstSays === null || (firstSays.kind === 'unknown' && firstSays.unitText === null));
-  const indexBefore = said.some((cell) => cell?.kind === 'index');
-  if (times.length === 0 && mayBeTime && !firstIsMapped && !indexBefore && others.length > 0) {
+  if (times.length === 0 && mayBeTime && !firstIsMapped && others.length > 0) {
     first.role = 'time';
     first.timeBy = 'place';
   }
