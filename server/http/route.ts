@@ -4,7 +4,7 @@ import type { Access } from '#server/auth/access.ts';
 import type { Principal, SitePrincipal } from '#server/auth/principal.ts';
 
 /** A handler's answer that isn't JSON: the handler has written the response itself. */
-export const handled = 'handled';
+export const handled = 'handled' as const;
 
 type Output<S, Otherwise> = S extends z.ZodType ? z.output<S> : Otherwise;
 type PrincipalOf<A extends Access> = A extends { kind: 'anyone' }
