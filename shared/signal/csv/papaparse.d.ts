@@ -13,5 +13,5 @@ declare module 'papaparse/papaparse.min.js' {
       config: { delimiter?: string; delimitersToGuess?: readonly string[]; preview?: number },
     ): ParseResult;
   };
-  export default papa;
+  export { papa as default };
 }

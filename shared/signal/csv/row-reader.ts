@@ -3,7 +3,7 @@ import { maxLineBytes, maxSampleMagnitude, maxTimeMagnitude } from './csv-limits
 import type { PlannedColumn } from './column-plan.ts';
 import { endOfLine } from './line-end.ts';
 import { GrowingSamples } from './growing-samples.ts';
-import { NumberScanner } from './number-scanner.ts';
+import { type NumberScanner } from './number-scanner.ts';
 import { readUnusualRow, refuseValue } from './unusual-row.ts';
 import { TimeAxis } from './time-axis.ts';
 import type { Separator } from './waveform-csv.ts';
