@@ -1,6 +1,6 @@
 import type uPlot from 'uplot';
 
-interface Window {
+export interface Window {
   min: number;
   max: number;
 }
@@ -40,9 +40,9 @@ export function moveCursor(plot: uPlot, steps: number): void {
   plot.setCursor({ left: plot.valToPos(x, 'x'), top: plot.over.clientHeight / 2 });
 }
 
-export function zoomAboutCursor(plot: uPlot, factor: number): void {
+/** @param whole - the ends of x; the data's own where it is all there (a thinned record's is not) */
+export function zoomAboutCursor(plot: uPlot, factor: number, whole = wholeOf(plot)): void {
   const view = viewOf(plot);
-  const whole = wholeOf(plot);
   if (view === null || whole === null) return;
   const left = plot.cursor.left ?? -1;
   const about = left >= 0 ? plot.posToVal(left, 'x') : (view.min + view.max) / 2;
@@ -50,8 +50,7 @@ export function zoomAboutCursor(plot: uPlot, factor: number): void {
   if (next) plot.setScale('x', next);
 }
 
-export function resetZoom(plot: uPlot): void {
-  const whole = wholeOf(plot);
+export function resetZoom(plot: uPlot, whole = wholeOf(plot)): void {
   if (whole) plot.setScale('x', whole);
 }
 

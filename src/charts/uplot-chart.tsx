@@ -2,7 +2,7 @@ import { useEffect, useLayoutEffect, useRef, type KeyboardEvent } from 'react';
 import uPlot from 'uplot';
 import { figuresFont, textFont } from './chart-palette.ts';
 import { useElementWidth } from './use-element-width.ts';
-import { moveCursor, zoomAboutCursor, resetZoom } from './plot-keys.ts';
+import { moveCursor, resetZoom, zoomAboutCursor, type Window } from './plot-keys.ts';
 
 /** Everything but the size, which the page decides. */
 export type ChartOptions = Omit<uPlot.Options, 'width' | 'height'>;
@@ -15,12 +15,21 @@ export interface UplotChartProps {
   heightPx: number;
   /** What is drawn, in words; the figures stand in the table beside the chart. */
   label: string;
+  /** The ends of x, where the data may be a part of the record only. */
+  wholeX?: Window;
   /** Says how the keys work here, e.g. the id of a hint. */
   describedBy?: string;
 }
 
 /** The one owner of uPlot instances. */
-export function UplotChart({ options, data, heightPx, label, describedBy }: UplotChartProps) {
+export function UplotChart({
+  options,
+  data,
+  heightPx,
+  label,
+  wholeX,
+  describedBy,
+}: UplotChartProps) {
   const [box, widthPx] = useElementWidth<HTMLDivElement>();
   const chart = useRef<uPlot | null>(null);
   const drawnData = useRef(data);
@@ -64,9 +73,9 @@ export function UplotChart({ options, data, heightPx, label, describedBy }: Uplo
     const step = event.shiftKey ? 10 : 1;
     if (event.key === 'ArrowRight') moveCursor(plot, step);
     else if (event.key === 'ArrowLeft') moveCursor(plot, -step);
-    else if (event.key === '+' || event.key === '=') zoomAboutCursor(plot, 0.5);
-    else if (event.key === '-') zoomAboutCursor(plot, 2);
-    else if (event.key === '0') resetZoom(plot);
+    else if (event.key === '+' || event.key === '=') zoomAboutCursor(plot, 0.5, wholeX);
+    else if (event.key === '-') zoomAboutCursor(plot, 2, wholeX);
+    else if (event.key === '0') resetZoom(plot, wholeX);
     else return;
     event.preventDefault();
   };
@@ -80,6 +89,8 @@ export function UplotChart({ options, data, heightPx, label, describedBy }: Uplo
       aria-describedby={describedBy}
       tabIndex={0}
       onKeyDown={onKeyDown}
+      // After uPlot's own answer to it, which knows only the data at hand.
+      onDoubleClick={() => chart.current && resetZoom(chart.current, wholeX)}
       style={{ height: `${heightPx}px` }}
       className="w-full overflow-hidden"
     />

@@ -95,6 +95,7 @@ export function WaveformPlot({
         options={options}
         data={data}
         heightPx={heightPx}
+        wholeX={{ min: 0, max: durationS }}
         label={`${title}, ${unit}, ${formatSignificant(durationS)} s`}
         describedBy={keysHintId}
       />

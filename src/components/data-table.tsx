@@ -71,7 +71,6 @@ export function DataTable<Row extends object>({
     data: rows,
     getRowId: (row) => String(rowId(row)),
     state: { sorting },
-    manualSorting: true,
     enableSortingRemoval: false,
     onSortingChange: (change) => {
       const [next] = typeof change === 'function' ? change(sorting) : change;
