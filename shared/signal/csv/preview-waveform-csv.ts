@@ -1,8 +1,8 @@
 import papa from 'papaparse/papaparse.min.js';
 import { CsvError, type CsvErrorCode } from './csv-error.ts';
-import { readWaveformCsv } from './read-waveform-csv.ts';
 import { splitLine } from './split-line.ts';
 import { asciiForMessage, decodeUtf8 } from './utf8.ts';
+import { WaveformCsvParser } from './waveform-csv-parser.ts';
 import {
   separators,
   type ReadWaveformCsvOptions,
@@ -44,7 +44,7 @@ export function previewWaveformCsv(
   const isWhole = head.length >= totalBytes;
   const bytes = isWhole ? head : head.subarray(0, wholeLines(head));
   const lines = contentLines(bytes, options.skipLines ?? 0);
-  const read = tryRead(bytes, options);
+  const read = tryRead(bytes, isWhole, options);
   if (read instanceof CsvError) {
     const separator = guessSeparator(lines.map(({ text }) => text));
     const rows = splitRows(lines, separator);
@@ -74,9 +74,14 @@ export function previewWaveformCsv(
   };
 }
 
-function tryRead(bytes: Uint8Array, options: ReadWaveformCsvOptions): WaveformCsv | CsvError {
+function tryRead(
+  bytes: Uint8Array,
+  isWhole: boolean,
+  options: ReadWaveformCsvOptions,
+): WaveformCsv | CsvError {
   try {
-    return readWaveformCsv(bytes, options);
+    const parser = new WaveformCsvParser(options);
+    return isWhole ? parser.readAll(bytes) : parser.readHead(bytes);
   } catch (error) {
     if (error instanceof CsvError) return error;
     throw error;

@@ -67,6 +67,16 @@ export class WaveformCsvParser {
     return this.result();
   }
 
+  /**
+   * Reads the first rows of a file, cut behind a line end: what only the whole file can show (too
+   * few samples, gaps only, an ambiguous comma) is left open.
+   */
+  readHead(bytes: Uint8Array): WaveformCsv {
+    this.advance(bytes, true);
+    this.finished = true;
+    return this.result(false);
+  }
+
   /** @returns number of bytes used */
   private advance(bytes: Uint8Array, final: boolean): number {
     let from = 0;
@@ -105,13 +115,14 @@ export class WaveformCsvParser {
     return preamble.dataFrom;
   }
 
-  private result(): WaveformCsv {
+  private result(isWhole = true): WaveformCsv {
     const rows = this.rows!;
     const preamble = this.preamble!;
-    checkRows(rows, preamble, this.options, this.scanner);
+    if (isWhole) checkRows(rows, preamble, this.options, this.scanner);
     const comments = this.comments.finish();
     const rate = this.settleRate(rows, comments.sampleRateHz);
     const channels = this.channels(rows);
+    if (isWhole) checkGaps(channels);
     const mark = this.decimalMark(rows);
     const told = this.options.speedRpm;
     const speedRpm = told ?? comments.speedRpm ?? null;
@@ -141,7 +152,7 @@ export class WaveformCsvParser {
   }
 
   private settleRate(rows: RowReader, notedHz: number | undefined) {
-    const axis = rows.axis?.finish() ?? null;
+    const axis = rows.rowCount < 2 ? null : (rows.axis?.finish() ?? null);
     const column = this.plan.find(({ role }) => role === 'time');
     // Known by its place alone and rising by exactly 1: a running number, not seconds.
     const isIndex = axis !== null && column!.timeBy === 'place' && axis.isRunningNumber;
@@ -161,19 +172,22 @@ export class WaveformCsvParser {
       const gapCount = countGaps(samples);
       channels.push({ name, columnIndex, quantity, unit, unitText, samples, gapCount });
     });
-    if (channels.every((channel) => channel.gapCount === channel.samples.length)) {
-      throw new CsvError(
-        'only-gaps',
-        null,
-        'Every sample is blank or not finite; expected numbers. Check the export.',
-      );
-    }
     return channels;
   }
 
   private decimalMark(rows: RowReader): DecimalMark | null {
     if (this.scanner.mark === 44) return rows.commaCells > 0 ? ',' : null;
     return this.scanner.mark === 46 ? '.' : null;
+  }
+}
+
+function checkGaps(channels: readonly WaveformChannel[]): void {
+  if (channels.every((channel) => channel.gapCount === channel.samples.length)) {
+    throw new CsvError(
+      'only-gaps',
+      null,
+      'Every sample is blank or not finite; expected numbers. Check the export.',
+    );
   }
 }
 

@@ -31,6 +31,15 @@ describe('previewWaveformCsv', () => {
     expect(half.estimatedRowCount).toBeLessThan(20_100);
   });
 
+  it('leaves open what only the whole file can show', () => {
+    const settling = `# sample_rate_hz: 5120\n${rowsOf(30, () => 'NaN')}`;
+    expect(preview(settling, 100_000).fault).toBeNull();
+    expect(preview(settling).fault).toMatchObject({ code: 'only-gaps' });
+    expect(preview('1.5\n2.5\n', 100_000).fault).toBeNull();
+    expect(preview('1.5\n2.5\n').fault).toMatchObject({ code: 'too-few-samples' });
+    expect(preview('0.1;2\n', 100_000).csv).toMatchObject({ rowCount: 1, sampleRateHz: null });
+  });
+
   it('shows why a file can’t be read and still its cells, for the mapping', () => {
     const text = `Recorder;17\nSerial;A-9\nclock;1H\n${rowsOf(30, (i) => `10:00:${10 + i};${i}.5`)}`;
     const shown = preview(text);
