@@ -13,8 +13,16 @@ const authSecret = 'a secret of the tests, long enough to sign with';
 type Method = 'get' | 'post' | 'put' | 'patch' | 'delete';
 type Caller = Record<Method, (path: string, body?: object) => Test>;
 
-/** The whole application over a test database, without its background work. */
+const apps = new WeakMap<DataSource, ReturnType<typeof wireTestApp>>();
+
+/** The whole application over a test database, without its background work; one for each file of tests. */
 export function buildTestApp(dataSource: DataSource) {
+  const known = apps.get(dataSource) ?? wireTestApp(dataSource);
+  apps.set(dataSource, known);
+  return known;
+}
+
+function wireTestApp(dataSource: DataSource) {
   const config = readConfig({
     DATABASE_URL: 'mysql://unused@localhost/unused',
     DATA_DIR: tmpdir(),

@@ -1,6 +1,7 @@
 import { queryOptions, type QueryClient } from '@tanstack/react-query';
 import { screeningResponse } from '#shared/contracts/screening.ts';
 import { waveformResponse } from '#shared/contracts/waveform.ts';
+import type { Spectrum } from '#src/charts/spectrum-data.ts';
 import { downloadFloat32, request } from '#src/lib/api-client.ts';
 
 /** Samples and spectra: large, and the same for ever. */
@@ -29,12 +30,26 @@ export const samplesQuery = (siteId: number, waveformId: number) =>
       downloadFloat32(`/api/sites/${siteId}/waveforms/${waveformId}/samples`, { signal }),
   });
 
+/** The first value is the step in Hz, the rest are the lines. */
 export const spectrumQuery = (siteId: number, screeningId: number) =>
   queryOptions({
     queryKey: [...recordingsKey(siteId), 'spectrum', screeningId],
     staleTime: Infinity,
+    queryFn: async ({ signal }): Promise<Spectrum> => {
+      const path = `/api/sites/${siteId}/screenings/${screeningId}/spectrum`;
+      const values = await downloadFloat32(path, { signal });
+      return { stepHz: values[0] ?? 0, amplitude: values.subarray(1) };
+    },
+  });
+
+export const averagedRevolutionQuery = (siteId: number, screeningId: number) =>
+  queryOptions({
+    queryKey: [...recordingsKey(siteId), 'averaged-revolution', screeningId],
+    staleTime: Infinity,
     queryFn: ({ signal }) =>
-      downloadFloat32(`/api/sites/${siteId}/screenings/${screeningId}/spectrum`, { signal }),
+      downloadFloat32(`/api/sites/${siteId}/screenings/${screeningId}/averaged-revolution`, {
+        signal,
+      }),
   });
 
 /** Fetches what an item of the queue shows before it is gone to. */

@@ -5,6 +5,7 @@ import {
   type DecideRequest,
   type ReviewQueueQuery,
 } from '#shared/contracts/review.ts';
+import { waveformListItem, type ScreenAgainRequest } from '#shared/contracts/waveform.ts';
 import { request, requestNothing } from '#src/lib/api-client.ts';
 import { isRecording } from './recordings.ts';
 
@@ -44,6 +45,19 @@ export function useUndoDecision(siteId: number) {
     mutationFn: (screeningId: number) =>
       requestNothing(`/api/sites/${siteId}/screenings/${screeningId}/decision`, {
         method: 'DELETE',
+      }),
+    onSettled: forget,
+  });
+}
+
+/** Screens a waveform again with corrected facts; the earlier screening is kept. */
+export function useScreenAgain(siteId: number) {
+  const forget = useForgetAfterDecision(siteId);
+  return useMutation({
+    mutationFn: ({ waveformId, ...body }: ScreenAgainRequest & { waveformId: number }) =>
+      request(`/api/sites/${siteId}/waveforms/${waveformId}/screen-again`, waveformListItem, {
+        method: 'POST',
+        body,
       }),
     onSettled: forget,
   });

@@ -3,6 +3,7 @@ import { useMemo } from 'react';
 import { orderCellsOf } from '#shared/contracts/order-cells.ts';
 import type { ScreeningResponse } from '#shared/contracts/screening.ts';
 import type { WaveformResponse } from '#shared/contracts/waveform.ts';
+import { AveragedRevolutionPlot } from '#src/charts/averaged-revolution-plot.tsx';
 import type { FrequencyUnit } from '#src/charts/frequency-axis.ts';
 import type { Spectrum } from '#src/charts/spectrum-data.ts';
 import type { AmplitudeScale } from '#src/charts/spectrum-options.ts';
@@ -11,38 +12,29 @@ import { WaveformPlot } from '#src/charts/waveform-plot.tsx';
 import { ErrorState } from '#src/components/error-state.tsx';
 import { PlotSkeleton } from '#src/components/skeleton.tsx';
 import { toApiError } from '#src/lib/api-error.ts';
-import { samplesQuery, spectrumQuery, waveformQuery } from '../api/recordings.ts';
+import {
+  averagedRevolutionQuery,
+  samplesQuery,
+  spectrumQuery,
+  waveformQuery,
+} from '../api/recordings.ts';
 
 const spectrumHeightPx = 300;
 const waveformHeightPx = 200;
 
-/** A single-sided spectrum ends at half the sampling rate. */
-const asSpectrum = (
-  amplitude: Float32Array | undefined,
-  sampleRateHz: number | undefined,
-): Spectrum | null =>
-  amplitude === undefined || sampleRateHz === undefined || amplitude.length < 2
-    ? null
-    : { stepHz: sampleRateHz / 2 / (amplitude.length - 1), amplitude };
-
 /** The point's spectrum at the survey before, where it was recorded in the same unit. */
 function usePreviousSpectrum(siteId: number, waveform: WaveformResponse): Spectrum | null {
   const { previous } = waveform;
+  const isThere = previous !== null;
   const before = useQuery({
     ...waveformQuery(siteId, previous?.waveformId ?? 0),
-    enabled: previous !== null,
+    enabled: isThere,
   });
-  const amplitude = useQuery({
+  const spectrum = useQuery({
     ...spectrumQuery(siteId, previous?.screeningId ?? 0),
-    enabled: previous !== null,
+    enabled: isThere,
   });
-  return useMemo(
-    () =>
-      before.data?.unit === waveform.unit
-        ? asSpectrum(amplitude.data, before.data.sampleRateHz)
-        : null,
-    [amplitude.data, before.data, waveform.unit],
-  );
+  return before.data?.unit === waveform.unit ? (spectrum.data ?? null) : null;
 }
 
 /** Spectrum with its strip, and the waveform, of one screening. */
@@ -61,14 +53,14 @@ export function ScreeningPlots({
 }) {
   const { result } = screening;
   const samples = useQuery(samplesQuery(siteId, waveform.id));
-  const amplitude = useQuery(spectrumQuery(siteId, screening.id));
+  const spectrum = useQuery(spectrumQuery(siteId, screening.id));
+  const turn = useQuery({
+    ...averagedRevolutionQuery(siteId, screening.id),
+    enabled: result.speed.speedHz !== null,
+  });
   const previous = usePreviousSpectrum(siteId, waveform);
-  const spectrum = useMemo(
-    () => asSpectrum(amplitude.data, waveform.sampleRateHz),
-    [amplitude.data, waveform.sampleRateHz],
-  );
   const orders = useMemo(() => orderCellsOf(result.orders), [result.orders]);
-  const failed = samples.error ?? amplitude.error;
+  const failed = samples.error ?? spectrum.error;
   if (failed !== null) {
     const error = toApiError(failed);
     return (
@@ -82,11 +74,11 @@ export function ScreeningPlots({
   }
   return (
     <div className="flex flex-col gap-5">
-      {spectrum === null ? (
+      {spectrum.data === undefined ? (
         <PlotSkeleton heightPx={spectrumHeightPx} label="Loading the spectrum…" />
       ) : (
         <SpectrumPlot
-          spectrum={spectrum}
+          spectrum={spectrum.data}
           unit={waveform.unit}
           speedHz={result.speed.speedHz}
           orders={orders}
@@ -97,18 +89,23 @@ export function ScreeningPlots({
           heightPx={spectrumHeightPx}
         />
       )}
-      {samples.data === undefined ? (
-        <PlotSkeleton heightPx={waveformHeightPx} label="Loading the waveform…" />
-      ) : (
-        <WaveformPlot
-          samples={samples.data}
-          sampleRateHz={waveform.sampleRateHz}
-          unit={waveform.unit}
-          speedHz={result.speed.speedHz}
-          truncation={result.truncation}
-          heightPx={waveformHeightPx}
-        />
-      )}
+      <div className="grid items-start gap-5 2xl:grid-cols-[2fr_1fr]">
+        {samples.data === undefined ? (
+          <PlotSkeleton heightPx={waveformHeightPx} label="Loading the waveform…" />
+        ) : (
+          <WaveformPlot
+            samples={samples.data}
+            sampleRateHz={waveform.sampleRateHz}
+            unit={waveform.unit}
+            speedHz={result.speed.speedHz}
+            truncation={result.truncation}
+            heightPx={waveformHeightPx}
+          />
+        )}
+        {turn.data !== undefined && turn.data.length > 0 && (
+          <AveragedRevolutionPlot turn={turn.data} heightPx={waveformHeightPx} />
+        )}
+      </div>
     </div>
   );
 }

@@ -9,6 +9,7 @@ import { toApiError } from '#src/lib/api-error.ts';
 import { formatDay } from '#src/lib/dates.ts';
 import { formatFixed } from '#src/lib/numbers.ts';
 import { screeningQuery, waveformQuery } from '../api/recordings.ts';
+import { CorrectSpeed } from './correct-speed.tsx';
 import { Evidence } from './evidence.tsx';
 import { PlotSettings, type PlotSettingsValue } from './plot-settings.tsx';
 import { ScreeningFacts } from './screening-facts.tsx';
@@ -74,7 +75,8 @@ export function ScreeningView({
       {screening.data && waveform.data ? (
         <>
           <div className="border border-hairline bg-sheet p-4">
-            <div className="mb-2 flex justify-end">
+            <div className="mb-2 flex flex-wrap items-center justify-between gap-2">
+              <CorrectSpeed siteId={siteId} waveform={waveform.data} />
               <PlotSettings value={plotSettings} onChange={onPlotSettings} />
             </div>
             <ScreeningPlots
