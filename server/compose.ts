@@ -74,8 +74,14 @@ export function compose(
   config: Config,
   dataSource: DataSource,
   logger: Logger,
-  options: { demoAccounts?: ProductResponse['demoAccounts']; publicUrl: () => string },
+  options: {
+    demoAccounts?: ProductResponse['demoAccounts'];
+    publicUrl: () => string;
+    /** The clock; the demo loader lives through the months before today. */
+    now?: () => Date;
+  },
 ): Product {
+  const { now } = options;
   const database = new Database(dataSource);
   const accounts = new AccountRepository(dataSource);
   const sessions = new SessionService(
@@ -85,38 +91,51 @@ export function compose(
   );
   const administration = new AdministrationService(database);
   const machines = new MachineService(database, accounts);
-  const positions = new PositionService(database, fitChecks);
+  const positions = new PositionService(database, fitChecks, now);
   const walkRoutes = new RouteService(database);
   const seats = new SeatService(database);
   const assessSeats = seats.assess.bind(seats);
-  const review = new ReviewService(database, findingEvidence);
-  const findings = new FindingService(database, {
-    assessSeats,
-    inspectionsOf: (findingId) => inspections.ofFinding(findingId),
-  });
-  const inspections: InspectionService = new InspectionService(database, {
-    findingBackground: findings.background.bind(findings),
-    moveFinding,
-    assessSeats,
-    membersOf: (siteId) => accounts.membersOf(siteId),
-    addMail: (db, mail, now) => new OutboxRepository(db).add(mail, now),
-    publicUrl: options.publicUrl,
-  });
+  const review = new ReviewService(database, findingEvidence, now);
+  const findings = new FindingService(
+    database,
+    {
+      assessSeats,
+      inspectionsOf: (findingId) => inspections.ofFinding(findingId),
+    },
+    now,
+  );
+  const inspections: InspectionService = new InspectionService(
+    database,
+    {
+      findingBackground: findings.background.bind(findings),
+      moveFinding,
+      assessSeats,
+      membersOf: (siteId) => accounts.membersOf(siteId),
+      addMail: (db, mail, now) => new OutboxRepository(db).add(mail, now),
+      publicUrl: options.publicUrl,
+    },
+    now,
+  );
   const files = new FileStore(config.dataDirectory);
   const workers = new WorkerPool(config.screeningWorkerCount);
-  const queue = new InProcessScreeningQueue({ database, files, workers, logger });
+  const queue = new InProcessScreeningQueue({ database, files, workers, logger, now });
   const wakeQueue = () => queue.wake();
   const uploads = new UploadService({
     database,
     files,
     readCsv: (path, readOptions) => workers.read(path, readOptions),
     wakeQueue,
+    now,
   });
   const waveforms = new WaveformService(database, files, wakeQueue);
-  const surveys = new SurveyService(database, {
-    waveformsOf: async (surveyId) =>
-      (await new WaveformRepository(database.db).ofSurvey(surveyId)).map(presentListItem),
-  });
+  const surveys = new SurveyService(
+    database,
+    {
+      waveformsOf: async (surveyId) =>
+        (await new WaveformRepository(database.db).ofSurvey(surveyId)).map(presentListItem),
+    },
+    now,
+  );
   const demoMails = new DemoMailRepository(database.db);
 
   const routes = [

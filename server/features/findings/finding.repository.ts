@@ -3,6 +3,7 @@ import type { Db } from '#server/db/database.ts';
 import { FindingScreening } from '#server/db/entities/finding-screening.entity.ts';
 import { Finding } from '#server/db/entities/finding.entity.ts';
 import { StateChange } from '#server/db/entities/state-change.entity.ts';
+import { likePattern } from '#server/db/like-pattern.ts';
 import type { FindingListQuery, FindingState } from '#shared/contracts/finding.ts';
 import { finishedFindingStates } from './finding-transitions.ts';
 
@@ -14,8 +15,6 @@ const sortColumns: Record<FindingListQuery['sort'], string> = {
   score:
     '(SELECT MAX(s.score) FROM finding_screening fs JOIN screening s ON s.id = fs.screening_id WHERE fs.finding_id = finding.id)',
 };
-
-const likePattern = (text: string) => `%${text.replace(/[\\%_]/g, '\\$&')}%`;
 
 /** Findings, the screenings that show them and the record of their states. */
 export class FindingRepository {

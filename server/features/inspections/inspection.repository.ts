@@ -3,6 +3,7 @@ import type { Db } from '#server/db/database.ts';
 import { FitRecord } from '#server/db/entities/fit-record.entity.ts';
 import { Inspection } from '#server/db/entities/inspection.entity.ts';
 import { StateChange } from '#server/db/entities/state-change.entity.ts';
+import { likePattern } from '#server/db/like-pattern.ts';
 import type { InspectionListQuery } from '#shared/contracts/inspection.ts';
 
 const sortColumns: Record<InspectionListQuery['sort'], string> = {
@@ -10,8 +11,6 @@ const sortColumns: Record<InspectionListQuery['sort'], string> = {
   state: "FIELD(inspection.state, 'assigned', 'accepted', 'reported', 'closed', 'cancelled')",
   machineTag: 'machine.tag',
 };
-
-const likePattern = (text: string) => `%${text.replace(/[\\%_]/g, '\\$&')}%`;
 
 export type NewInspection = Omit<
   Inspection,

@@ -1,5 +1,6 @@
 import type { Db } from '#server/db/database.ts';
 import { Machine } from '#server/db/entities/machine.entity.ts';
+import { likePattern } from '#server/db/like-pattern.ts';
 import type { MachineListQuery } from '#shared/contracts/machine.ts';
 
 export interface MachineListRow {
@@ -24,9 +25,6 @@ const sortColumns: Record<MachineListQuery['sort'], string> = {
   criticality: "FIELD(machine.criticality, 'low', 'medium', 'high')",
   nextPlannedStopOn: 'machine.next_planned_stop_on',
 };
-
-/** A search text as a LIKE pattern: its own wildcards mean themselves. */
-export const likePattern = (text: string) => `%${text.replace(/[\\%_]/g, '\\$&')}%`;
 
 /** Machines of a site. */
 export class MachineRepository {

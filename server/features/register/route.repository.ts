@@ -3,10 +3,10 @@ import type { Db } from '#server/db/database.ts';
 import { MeasuringPoint } from '#server/db/entities/measuring-point.entity.ts';
 import { RoutePoint } from '#server/db/entities/route-point.entity.ts';
 import { Route } from '#server/db/entities/route.entity.ts';
+import { likePattern } from '#server/db/like-pattern.ts';
 import type { PointChoice } from '#shared/contracts/measuring-point.ts';
 import { pointLabel } from '#shared/contracts/measuring-point.ts';
 import type { RouteListQuery } from '#shared/contracts/route.ts';
-import { likePattern } from './machine.repository.ts';
 
 export interface RouteListRow {
   id: number;

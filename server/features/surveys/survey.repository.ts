@@ -4,6 +4,7 @@ import { Route } from '#server/db/entities/route.entity.ts';
 import { RoutePoint } from '#server/db/entities/route-point.entity.ts';
 import { Survey } from '#server/db/entities/survey.entity.ts';
 import type { MeasuringPoint } from '#server/db/entities/measuring-point.entity.ts';
+import { likePattern } from '#server/db/like-pattern.ts';
 import type { SurveyCounts, SurveyListQuery } from '#shared/contracts/survey.ts';
 
 const noCounts: SurveyCounts = {
@@ -40,9 +41,7 @@ export class SurveyRepository {
       builder.andWhere('survey.routeId = :routeId', { routeId: query.routeId });
     }
     if (query.search) {
-      builder.andWhere('route.name LIKE :pattern', {
-        pattern: `%${query.search.replace(/[\\%_]/g, '\\$&')}%`,
-      });
+      builder.andWhere('route.name LIKE :pattern', { pattern: likePattern(query.search) });
     }
     const direction = query.direction === 'asc' ? 'ASC' : 'DESC';
     const [surveys, total] = await builder
