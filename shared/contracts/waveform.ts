@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { quantities, units } from '../quantities/quantity.ts';
 import { id, isoDateTime, numberBetween } from './fields.ts';
 import { direction } from './measuring-point.ts';
+import { verdicts } from '../signal/screening-types.ts';
 import { orderCell } from './order-cells.ts';
 
 /** Where the screening of a waveform stands. */
@@ -67,7 +68,7 @@ export const waveformListItem = z.object({
   screeningFailure: z.string().nullable(),
   /** Latest screening, where there is one. */
   screeningId: z.int().nullable(),
-  verdict: z.string().nullable(),
+  verdict: z.enum(verdicts).nullable(),
   score: z.number().nullable(),
   decision: z.string().nullable(),
   /** Speed of the position's shaft, as found by the latest screening. */

@@ -26,6 +26,18 @@ const pages: Readonly<Record<string, Load>> = {
     const { reviewLoader, ReviewPage } = await import('./routes/review.tsx');
     return { loader: reviewLoader, Component: ReviewPage };
   },
+  surveys: async () => {
+    const { surveysLoader, SurveysPage } = await import('./routes/surveys.tsx');
+    return { loader: surveysLoader, Component: SurveysPage };
+  },
+  'surveys/new': async () => {
+    const { surveyNewLoader, SurveyNewPage } = await import('./routes/survey-new.tsx');
+    return { loader: surveyNewLoader, Component: SurveyNewPage };
+  },
+  'surveys/:surveyId': async () => {
+    const { surveyLoader, SurveyPage } = await import('./routes/survey.tsx');
+    return { loader: surveyLoader, Component: SurveyPage };
+  },
   findings: async () => {
     const { findingsLoader, FindingsPage } = await import('./routes/findings.tsx');
     return { loader: findingsLoader, Component: FindingsPage };

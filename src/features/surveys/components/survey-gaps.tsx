@@ -1,0 +1,75 @@
+import type { SurveyResponse } from '#shared/contracts/survey.ts';
+import { IconButton } from '#src/components/icon-button.tsx';
+import { Panel } from '#src/components/panel.tsx';
+import { toApiError } from '#src/lib/api-error.ts';
+import { useDismissRejectedFile } from '../api/surveys.ts';
+
+/** The points nobody has a waveform of yet. */
+export function MissingPoints({ points }: { points: SurveyResponse['missingPoints'] }) {
+  if (points.length === 0) return null;
+  const title =
+    points.length === 1
+      ? '1 point without a waveform'
+      : `${points.length} points without a waveform`;
+  return (
+    <Panel title={title}>
+      <ul className="grid gap-x-6 text-sm phone:grid-cols-2 xl:grid-cols-3">
+        {points.map((point) => (
+          <li key={point.id} className="flex gap-3 border-b border-hairline py-1">
+            <span className="figures">{point.label}</span>
+            <span className="text-ink-soft">{point.machineName}</span>
+          </li>
+        ))}
+      </ul>
+    </Panel>
+  );
+}
+
+/** Files the server could not read, until they are mended and sent again, or put away. */
+export function RejectedFiles({
+  siteId,
+  surveyId,
+  files,
+}: {
+  siteId: number;
+  surveyId: number;
+  files: SurveyResponse['rejectedFiles'];
+}) {
+  const dismiss = useDismissRejectedFile(siteId, surveyId);
+  if (files.length === 0) return null;
+  const title =
+    files.length === 1 ? '1 file could not be read' : `${files.length} files could not be read`;
+  return (
+    <Panel title={title}>
+      <p className="mb-2 text-sm text-ink-soft">
+        Mend the file and send it again under the same name, or put it away here.
+      </p>
+      <ul>
+        {files.map((file) => (
+          <li
+            key={file.id}
+            className="flex flex-wrap items-center gap-x-4 border-b border-hairline py-1 text-sm"
+          >
+            <span className="figures font-medium">{file.fileName}</span>
+            <span className="grow">
+              {file.errorLine !== null && (
+                <span className="figures font-medium">Line {file.errorLine}: </span>
+              )}
+              {file.errorMessage}
+            </span>
+            <IconButton
+              icon="close"
+              label={`Put ${file.fileName} away`}
+              onClick={() => dismiss.mutate(file.id)}
+            />
+          </li>
+        ))}
+      </ul>
+      {dismiss.isError && (
+        <p role="alert" className="mt-2 text-sm">
+          {toApiError(dismiss.error).message}
+        </p>
+      )}
+    </Panel>
+  );
+}
