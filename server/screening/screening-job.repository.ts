@@ -1,4 +1,4 @@
-import { In } from 'typeorm';
+import { In, MoreThanOrEqual, Not } from 'typeorm';
 import type { Db } from '#server/db/database.ts';
 import { MeasuringPoint } from '#server/db/entities/measuring-point.entity.ts';
 import { Screening } from '#server/db/entities/screening.entity.ts';
@@ -24,9 +24,26 @@ export class ScreeningJobRepository {
     this.db = db;
   }
 
-  /** After a start: what was running when the process died is waiting again. */
-  async requeueRunning(): Promise<void> {
-    await this.db.update(Waveform, { screeningState: 'running' }, { screeningState: 'queued' });
+  /**
+   * What is marked as running but runs nowhere (the process died, the database was away) waits
+   * again. What was running at every one of several deaths is their likely cause and ends as failed.
+   *
+   * @param exceptIds - what does run
+   */
+  async takeUpRunning(attemptsMax: number, exceptIds: number[]): Promise<void> {
+    const abandoned = {
+      screeningState: 'running' as const,
+      ...(exceptIds.length === 0 ? {} : { id: Not(In(exceptIds)) }),
+    };
+    await this.db.update(
+      Waveform,
+      { ...abandoned, screeningAttempts: MoreThanOrEqual(attemptsMax) },
+      {
+        screeningState: 'failed',
+        screeningFailure: `The server stopped ${attemptsMax} times while this waveform was being screened.`,
+      },
+    );
+    await this.db.update(Waveform, abandoned, { screeningState: 'queued' });
   }
 
   async queuedIds(limit: number): Promise<number[]> {
@@ -89,13 +106,16 @@ export class ScreeningJobRepository {
     );
   }
 
-  /** Hands back what was taken but not finished, when the process stops. */
+  /** Hands back what was taken but not finished, when the process stops: that was no attempt. */
   async handBack(ids: number[]): Promise<void> {
     if (ids.length === 0) return;
     await this.db.update(
       Waveform,
       { id: In(ids), screeningState: 'running' },
-      { screeningState: 'queued' },
+      {
+        screeningState: 'queued',
+        screeningAttempts: () => 'GREATEST(screening_attempts - 1, 0)',
+      },
     );
   }
 

@@ -1,3 +1,4 @@
+import { setTimeout as sleep } from 'node:timers/promises';
 import type { Logger } from 'pino';
 import type { Database } from '#server/db/database.ts';
 import type { FileStore } from '#server/storage/file-store.ts';
@@ -28,6 +29,7 @@ interface Dependencies {
 /** A worker that dies or hangs is tried again this often; a plain fault of the method is not. */
 const attemptsMax = 3;
 const batch = 50;
+const restMs = 5_000;
 
 /** The queue in this process: nothing to install, and nothing lost when the process dies. */
 export class InProcessScreeningQueue implements ScreeningQueue {
@@ -37,21 +39,31 @@ export class InProcessScreeningQueue implements ScreeningQueue {
   private pumping: Promise<void> | null = null;
   private woken = false;
   private waiting: (() => void)[] = [];
+  private tellStopped: () => void = () => undefined;
+  private readonly stopped = new Promise<void>((resolve) => (this.tellStopped = resolve));
 
   constructor(dependencies: Dependencies) {
     this.deps = dependencies;
   }
 
   async start(): Promise<void> {
-    await new ScreeningJobRepository(this.deps.database.db).requeueRunning();
+    await this.takeUp();
     this.wake();
+  }
+
+  private takeUp(): Promise<void> {
+    const jobs = new ScreeningJobRepository(this.deps.database.db);
+    return jobs.takeUpRunning(attemptsMax, [...this.running.keys()]);
   }
 
   wake(): void {
     this.woken = true;
     if (this.stopping || this.pumping !== null) return;
     this.pumping = this.pump()
-      .catch((error: unknown) => this.deps.logger.error({ err: error }, 'the screening queue'))
+      .catch(async (error: unknown) => {
+        this.deps.logger.error({ err: error }, 'the screening queue rests after a fault');
+        await this.rest();
+      })
       .finally(() => {
         this.pumping = null;
         if (this.woken && !this.stopping) this.wake();
@@ -66,11 +78,22 @@ export class InProcessScreeningQueue implements ScreeningQueue {
 
   async stop(): Promise<void> {
     this.stopping = true;
+    this.tellStopped();
     const ids = [...this.running.keys()];
     await this.deps.workers.close();
     await Promise.allSettled(this.running.values());
     await this.pumping;
     await new ScreeningJobRepository(this.deps.database.db).handBack(ids);
+  }
+
+  /** Most likely the database is away: waits, and takes up what its absence left half done. */
+  private async rest(): Promise<void> {
+    await Promise.race([sleep(restMs, undefined, { ref: false }), this.stopped]);
+    if (this.stopping) return;
+    this.woken = true;
+    await this.takeUp().catch((error: unknown) =>
+      this.deps.logger.error({ err: error }, 'the screening queue'),
+    );
   }
 
   private tellIdle(): void {
@@ -90,6 +113,8 @@ export class InProcessScreeningQueue implements ScreeningQueue {
           await Promise.race(this.running.values());
         }
         const work = this.screenOne(id).finally(() => this.running.delete(id));
+        // A fault of several at once would else be one that nobody looks at.
+        work.catch(() => undefined);
         this.running.set(id, work);
       }
       if (this.running.size > 0) await Promise.race(this.running.values());

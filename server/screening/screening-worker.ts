@@ -2,7 +2,6 @@ import { open } from 'node:fs/promises';
 import { move, transferableSymbol, valueSymbol } from 'piscina';
 import { CsvError } from '#shared/signal/csv/csv-error.ts';
 import { WaveformCsvParser } from '#shared/signal/csv/waveform-csv-parser.ts';
-import { screenWaveform } from '#shared/signal/screen-waveform.ts';
 import type { ReadAnswer, ReadTask, ScreenAnswer, ScreenTask, WorkerTask } from './worker-tasks.ts';
 
 const chunkBytes = 1024 * 1024;
@@ -41,7 +40,9 @@ async function read({ path, options }: ReadTask): Promise<ReadAnswer> {
   }
 }
 
-function screen({ input }: ScreenTask): ScreenAnswer {
+/** The method is loaded with the first screening: a thread that only reads needn't wait for it. */
+async function screen({ input }: ScreenTask): Promise<ScreenAnswer> {
+  const { screenWaveform } = await import('#shared/signal/screen-waveform.ts');
   const { result, plots } = screenWaveform(input);
   return {
     result,

@@ -18,12 +18,16 @@ export class WorkerPool {
     this.pool = new Piscina({
       filename: fileURLToPath(new URL('./screening-worker.ts', import.meta.url)),
       name: 'runTask',
-      minThreads: 1,
+      // Threads come with the first task; a server that only answers pages needs none.
+      minThreads: 0,
       maxThreads: threads,
       idleTimeout: 30_000,
       // Node reads TypeScript through the same loader as the server itself.
       execArgv: ['--import', 'tsx'],
     });
+    // The task that a dying worker held is rejected by itself; without a listener the event would
+    // end the whole server.
+    this.pool.on('error', () => undefined);
   }
 
   get threads(): number {
