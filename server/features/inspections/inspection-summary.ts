@@ -13,6 +13,19 @@ const kindWords = {
   undetermined: 'The signs do not tell which joint is loose.',
 } as const;
 
+/** From how many multiples in a row the sentence speaks of a run. */
+const runFrom = 3;
+
+function seenSentence(positionName: string, { speedHz, result, waveform }: Screening): string {
+  const on = waveform?.survey ? `On ${waveform.survey.surveyedOn} the` : 'The';
+  const direction = waveform?.measuringPoint?.direction;
+  const what = `${on} vibration of ${positionName}${direction ? ` (${direction})` : ''}`;
+  const { length } = result.harmonicRun;
+  if (length < runFrom) return `${what} was screened.`;
+  const speed = speedHz === null ? '' : ` (${Math.round(speedHz * 60)} r/min)`;
+  return `${what} showed ${length} multiples of the running speed${speed} in a row: a part with play knocks in every turn of the shaft.`;
+}
+
 /** What was seen, for somebody who reads no spectra. */
 export function inspectionSummary(
   positionName: string,
@@ -20,18 +33,11 @@ export function inspectionSummary(
   screeningCount: number,
 ): string {
   if (clearest === null) return `The fit of ${positionName} is to be checked.`;
-  const { result, waveform } = clearest;
-  const on = waveform?.survey ? ` on ${waveform.survey.surveyedOn}` : '';
-  const direction = waveform?.measuringPoint?.direction;
-  const where = direction ? `, measured in the ${direction} direction` : '';
-  const run = result.harmonicRun.length;
-  const speed = clearest.speedHz === null ? '' : ` at ${Math.round(clearest.speedHz * 60)} r/min`;
-  const seen =
-    run >= 2
-      ? `The vibration of ${positionName}${on}${where}, repeats in every turn of the shaft${speed} with knocks: ${run} multiples of the running speed in a row stand out, as when a part with play strikes its neighbour.`
-      : `The vibration of ${positionName}${on}${where}, was judged: ${verdictWords[clearest.verdict]}.`;
-  const verdict = `Verdict of the screening: ${verdictWords[clearest.verdict]}.`;
-  const often = screeningCount > 1 ? ` The same was seen in ${screeningCount} measurements.` : '';
-  const kind = result.kind === null ? '' : ` ${kindWords[result.kind]}`;
-  return `${seen}${run >= 2 ? ` ${verdict}` : ''}${kind}${often}`;
+  const { kind } = clearest.result;
+  return [
+    seenSentence(positionName, clearest),
+    `Verdict of the screening: ${verdictWords[clearest.verdict]}.`,
+    ...(kind === null ? [] : [kindWords[kind]]),
+    ...(screeningCount > 1 ? [`Signs were seen in ${screeningCount} measurements.`] : []),
+  ].join(' ');
 }

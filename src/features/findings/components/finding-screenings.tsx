@@ -18,12 +18,9 @@ export function FindingScreenings({
 }) {
   const newestFirst = [...screenings].reverse();
   return (
-    <ul className="flex flex-col">
+    <ul className="grid gap-x-8 gap-y-5 xl:grid-cols-2">
       {newestFirst.map((screening) => (
-        <li
-          key={screening.screeningId}
-          className="flex flex-col gap-1.5 border-b border-hairline py-3 first:pt-0 last:border-b-0 last:pb-0"
-        >
+        <li key={screening.screeningId} className="flex min-w-0 flex-col gap-1.5">
           <div className="flex flex-wrap items-center gap-x-5 gap-y-1">
             <span className="figures font-medium">{formatDay(screening.surveyedOn)}</span>
             {mayReview ? (
@@ -79,7 +76,7 @@ function EvidenceSentences({ screening }: { screening: FindingScreeningResponse 
       <summary className="cursor-pointer text-ink-soft">
         Evidence ({screening.evidence.length})
       </summary>
-      <div className="mt-1 grid gap-4 lg:grid-cols-2">
+      <div className="mt-1 flex flex-col gap-3">
         {sides.map(({ title, sentences }) => (
           <div key={title}>
             <p className="font-medium">{title}</p>

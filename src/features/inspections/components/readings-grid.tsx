@@ -38,30 +38,27 @@ export function ReadingsGrid({
       <legend className="mb-1 text-sm font-medium">
         {title}, <span className="figures">{unit}</span>
       </legend>
-      <table className="w-full table-fixed border-separate border-spacing-x-1 border-spacing-y-1 text-sm">
+      {/* Planes side by side, directions beneath: two columns leave room for six figures on a phone. */}
+      <table className="w-full max-w-md table-fixed border-separate border-spacing-x-1 border-spacing-y-1 text-sm">
         <thead>
           <tr>
             <th scope="col" className="w-14 text-left text-xs font-normal text-ink-faint">
-              Plane
+              Angle
             </th>
-            {readingDirectionsDeg.map((directionDeg) => (
-              <th
-                key={directionDeg}
-                scope="col"
-                className="figures text-right text-xs font-normal text-ink-faint"
-              >
-                {directionDeg}°
+            {planes.map((plane) => (
+              <th key={plane} scope="col" className="text-right text-xs font-normal text-ink-faint">
+                Plane <span className="figures">{plane}</span>
               </th>
             ))}
           </tr>
         </thead>
         <tbody>
-          {planes.map((plane) => (
-            <tr key={plane}>
+          {readingDirectionsDeg.map((directionDeg) => (
+            <tr key={directionDeg}>
               <th scope="row" className="figures text-left font-normal">
-                {plane}
+                {directionDeg}°
               </th>
-              {readingDirectionsDeg.map((directionDeg) => {
+              {planes.map((plane) => {
                 const key = placeKey(part, plane, directionDeg);
                 const isAsked = questions.some((question) => question.key === key);
                 return (

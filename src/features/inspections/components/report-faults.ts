@@ -16,7 +16,12 @@ export function reportFaults(report: Draft): FormFault[] {
     const key = fault.inputId ?? fault.message;
     if (!faults.has(key)) faults.set(key, fault);
   }
-  return [...faults.values()];
+  // The result is the form's last question, though the contract's first.
+  const inOrder = [...faults.values()];
+  return [
+    ...inOrder.filter((fault) => fault.inputId !== 'outcome'),
+    ...inOrder.filter((fault) => fault.inputId === 'outcome'),
+  ];
 }
 
 function faultOf(report: Draft, path: readonly PropertyKey[], message: string): FormFault {

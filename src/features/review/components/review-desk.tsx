@@ -2,6 +2,7 @@ import { useQueryClient } from '@tanstack/react-query';
 import { useEffect, useState } from 'react';
 import type { ReviewDecision, ReviewQueueItem } from '#shared/contracts/review.ts';
 import { Button } from '#src/components/button.tsx';
+import { KeyHint } from '#src/components/key-hint.tsx';
 import { prefetchItem } from '../api/recordings.ts';
 import { DecisionBar } from './decision-bar.tsx';
 import type { PlotSettingsValue } from './plot-settings.tsx';
@@ -73,6 +74,16 @@ export function ReviewDesk(props: ReviewDeskProps) {
     <div className="grid items-start gap-4 xl:grid-cols-[17.5rem_minmax(0,1fr)]">
       <div className="flex flex-col gap-2">
         <QueueList items={items} selectedId={screeningId} onSelect={onSelect} />
+        <div role="status" className="text-sm">
+          {decisions.last !== null && (
+            <p className="flex items-center justify-between gap-2 border-l border-rule pl-2">
+              <span>{decisions.last.text}</span>
+              <Button size="small" aria-keyshortcuts="u" onClick={decisions.undoLast}>
+                Undo {keysOn && <KeyHint keys={['u']} />}
+              </Button>
+            </p>
+          )}
+        </div>
         <Button size="small" variant="quiet" icon="help" onClick={() => setShowsKeys(true)}>
           Keys
         </Button>

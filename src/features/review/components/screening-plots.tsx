@@ -19,8 +19,8 @@ import {
   waveformQuery,
 } from '../api/recordings.ts';
 
-const spectrumHeightPx = 300;
-const waveformHeightPx = 200;
+const spectrumHeightPx = 230;
+const waveformHeightPx = 190;
 
 /** The point's spectrum at the survey before, where it was recorded in the same unit. */
 function usePreviousSpectrum(siteId: number, waveform: WaveformResponse): Spectrum | null {
@@ -37,75 +37,81 @@ function usePreviousSpectrum(siteId: number, waveform: WaveformResponse): Spectr
   return before.data?.unit === waveform.unit ? (spectrum.data ?? null) : null;
 }
 
-/** Spectrum with its strip, and the waveform, of one screening. */
-export function ScreeningPlots({
+interface PlotProps {
+  siteId: number;
+  screening: ScreeningResponse;
+  waveform: WaveformResponse;
+}
+
+function PlotFailure({ error }: { error: Error }) {
+  const failure = toApiError(error);
+  return (
+    <ErrorState
+      title={failure.message}
+      safe="The verdict and its evidence do not need this plot."
+      advice="Go to another flag and back, or reload the page."
+      errorId={failure.id}
+    />
+  );
+}
+
+/** The spectrum with its run marked, the survey before behind it and the strip beneath. */
+export function ScreeningSpectrum({
   siteId,
   screening,
   waveform,
   frequencyUnit,
   amplitudeScale,
-}: {
-  siteId: number;
-  screening: ScreeningResponse;
-  waveform: WaveformResponse;
-  frequencyUnit: FrequencyUnit;
-  amplitudeScale: AmplitudeScale;
-}) {
+}: PlotProps & { frequencyUnit: FrequencyUnit; amplitudeScale: AmplitudeScale }) {
+  const { result } = screening;
+  const spectrum = useQuery(spectrumQuery(siteId, screening.id));
+  const previous = usePreviousSpectrum(siteId, waveform);
+  const orders = useMemo(() => orderCellsOf(result.orders), [result.orders]);
+  if (spectrum.isError) return <PlotFailure error={spectrum.error} />;
+  if (spectrum.data === undefined) {
+    return <PlotSkeleton heightPx={spectrumHeightPx} label="Loading the spectrum…" />;
+  }
+  return (
+    <SpectrumPlot
+      spectrum={spectrum.data}
+      unit={waveform.unit}
+      speedHz={result.speed.speedHz}
+      orders={orders}
+      run={result.harmonicRun}
+      frequencyUnit={frequencyUnit}
+      amplitudeScale={amplitudeScale}
+      previous={previous}
+      heightPx={spectrumHeightPx}
+    />
+  );
+}
+
+/** The waveform, and one averaged revolution where a speed is known. */
+export function ScreeningWaveform({ siteId, screening, waveform }: PlotProps) {
   const { result } = screening;
   const samples = useQuery(samplesQuery(siteId, waveform.id));
-  const spectrum = useQuery(spectrumQuery(siteId, screening.id));
   const turn = useQuery({
     ...averagedRevolutionQuery(siteId, screening.id),
     enabled: result.speed.speedHz !== null,
   });
-  const previous = usePreviousSpectrum(siteId, waveform);
-  const orders = useMemo(() => orderCellsOf(result.orders), [result.orders]);
-  const failed = samples.error ?? spectrum.error;
-  if (failed !== null) {
-    const error = toApiError(failed);
-    return (
-      <ErrorState
-        title={error.message}
-        safe="The verdict and its evidence below do not need the plots."
-        advice="Go to another flag and back, or reload the page."
-        errorId={error.id}
-      />
-    );
-  }
+  if (samples.isError) return <PlotFailure error={samples.error} />;
   return (
-    <div className="flex flex-col gap-5">
-      {spectrum.data === undefined ? (
-        <PlotSkeleton heightPx={spectrumHeightPx} label="Loading the spectrum…" />
+    <div className="grid items-start gap-5 xl:grid-cols-[2fr_1fr]">
+      {samples.data === undefined ? (
+        <PlotSkeleton heightPx={waveformHeightPx} label="Loading the waveform…" />
       ) : (
-        <SpectrumPlot
-          spectrum={spectrum.data}
+        <WaveformPlot
+          samples={samples.data}
+          sampleRateHz={waveform.sampleRateHz}
           unit={waveform.unit}
           speedHz={result.speed.speedHz}
-          orders={orders}
-          run={result.harmonicRun}
-          frequencyUnit={frequencyUnit}
-          amplitudeScale={amplitudeScale}
-          previous={previous}
-          heightPx={spectrumHeightPx}
+          truncation={result.truncation}
+          heightPx={waveformHeightPx}
         />
       )}
-      <div className="grid items-start gap-5 2xl:grid-cols-[2fr_1fr]">
-        {samples.data === undefined ? (
-          <PlotSkeleton heightPx={waveformHeightPx} label="Loading the waveform…" />
-        ) : (
-          <WaveformPlot
-            samples={samples.data}
-            sampleRateHz={waveform.sampleRateHz}
-            unit={waveform.unit}
-            speedHz={result.speed.speedHz}
-            truncation={result.truncation}
-            heightPx={waveformHeightPx}
-          />
-        )}
-        {turn.data !== undefined && turn.data.length > 0 && (
-          <AveragedRevolutionPlot turn={turn.data} heightPx={waveformHeightPx} />
-        )}
-      </div>
+      {turn.data !== undefined && turn.data.length > 0 && (
+        <AveragedRevolutionPlot turn={turn.data} heightPx={waveformHeightPx} />
+      )}
     </div>
   );
 }

@@ -13,7 +13,7 @@ import { CorrectSpeed } from './correct-speed.tsx';
 import { Evidence } from './evidence.tsx';
 import { PlotSettings, type PlotSettingsValue } from './plot-settings.tsx';
 import { ScreeningFacts } from './screening-facts.tsx';
-import { ScreeningPlots } from './screening-plots.tsx';
+import { ScreeningSpectrum, ScreeningWaveform } from './screening-plots.tsx';
 
 /** One screening whole: verdict and decision on top, plots, figures, evidence. */
 export function ScreeningView({
@@ -54,7 +54,7 @@ export function ScreeningView({
   const result = screening.data?.result;
   return (
     <div className="flex min-w-0 flex-col gap-4">
-      <header className="flex flex-wrap items-center justify-between gap-x-5 gap-y-2 border-y border-ink bg-sheet px-4 py-2 phone:border-x">
+      <header className="flex flex-wrap items-center justify-between gap-x-5 gap-y-2 border-y border-ink bg-sheet px-4 py-2 phone:border-x lg:sticky lg:top-0 lg:z-20">
         <div>
           <h2 className="figures text-lg">{waveform.data?.pointLabel ?? '…'}</h2>
           <p className="text-sm text-ink-soft">
@@ -79,7 +79,7 @@ export function ScreeningView({
               <CorrectSpeed siteId={siteId} waveform={waveform.data} />
               <PlotSettings value={plotSettings} onChange={onPlotSettings} />
             </div>
-            <ScreeningPlots
+            <ScreeningSpectrum
               siteId={siteId}
               screening={screening.data}
               waveform={waveform.data}
@@ -89,6 +89,13 @@ export function ScreeningView({
           <Panel title="Evidence">
             <Evidence result={screening.data.result} />
           </Panel>
+          <div className="border border-hairline bg-sheet p-4">
+            <ScreeningWaveform
+              siteId={siteId}
+              screening={screening.data}
+              waveform={waveform.data}
+            />
+          </div>
           <Panel title="Figures">
             <ScreeningFacts result={screening.data.result} waveform={waveform.data} />
           </Panel>

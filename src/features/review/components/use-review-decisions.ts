@@ -5,25 +5,33 @@ import { toApiError } from '#src/lib/api-error.ts';
 import { useDecide, useUndoDecision } from '../api/review.ts';
 import { decisionWords } from './review-words.ts';
 
-/** Deciding and taking back, with what is told about it. */
+export interface LastDecision {
+  screeningId: number;
+  /** What was done, in words. */
+  text: string;
+}
+
+/** Deciding and taking back, with the last decision at hand for undoing. */
 export function useReviewDecisions(siteId: number, onUndone: (screeningId: number) => void) {
   const decide = useDecide(siteId);
   const undo = useUndoDecision(siteId);
   const notify = useToast();
-  const [lastId, setLastId] = useState<number | null>(null);
+  const [last, setLast] = useState<LastDecision | null>(null);
+  const tellFailure = (error: unknown) => notify({ failed: true, text: toApiError(error).message });
   const takeBack = (screeningId: number) =>
     undo.mutate(screeningId, {
       onSuccess: () => {
-        setLastId(null);
+        setLast(null);
         onUndone(screeningId);
         notify({ text: 'The decision is taken back; the flag waits again.' });
       },
-      onError: (error) => notify({ failed: true, text: toApiError(error).message }),
+      onError: tellFailure,
     });
   return {
     busy: decide.isPending || undo.isPending,
+    last,
     undoLast: () => {
-      if (lastId !== null) takeBack(lastId);
+      if (last !== null) takeBack(last.screeningId);
     },
     takeBack,
     decide: (item: ReviewQueueItem, decision: ReviewDecision, reason: string, then: () => void) =>
@@ -31,20 +39,15 @@ export function useReviewDecisions(siteId: number, onUndone: (screeningId: numbe
         { screeningId: item.screeningId, decision, reason },
         {
           onSuccess: ({ findingId, findingIsNew }) => {
-            setLastId(item.screeningId);
-            then();
-            const finding =
-              findingId === null
-                ? ''
-                : findingIsNew
-                  ? ` Finding ${findingId} is open.`
-                  : ` Finding ${findingId} is extended.`;
-            notify({
+            const word = findingIsNew ? 'is open' : 'is extended';
+            const finding = findingId === null ? '' : ` Finding ${findingId} ${word}.`;
+            setLast({
+              screeningId: item.screeningId,
               text: `${item.pointLabel}: ${decisionWords[decision].toLowerCase()}.${finding}`,
-              action: { label: 'Undo', onAction: () => takeBack(item.screeningId) },
             });
+            then();
           },
-          onError: (error) => notify({ failed: true, text: toApiError(error).message }),
+          onError: tellFailure,
         },
       ),
   };
