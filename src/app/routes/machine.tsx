@@ -14,6 +14,7 @@ import { MachineFacts } from '#src/features/register/components/machine-facts.ts
 import { PositionForm } from '#src/features/register/components/position-form.tsx';
 import { PositionPanel } from '#src/features/register/components/position-panel.tsx';
 import { capital } from '#src/features/register/components/machine-words.ts';
+import { PositionSeats } from '#src/features/seats/components/position-seats.tsx';
 import { toApiError } from '#src/lib/api-error.ts';
 import { useSite } from '../site-context.ts';
 
@@ -95,7 +96,7 @@ export function MachinePage() {
             siteId={siteId}
             position={position}
             mayEdit={machine.can.edit}
-            seats={null}
+            seats={<PositionSeats siteId={siteId} positionId={position.id} />}
           />
         ))}
       </div>
