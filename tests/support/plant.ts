@@ -10,7 +10,8 @@ import {
   buildSite,
   buildSurvey,
 } from './factories.ts';
-import { aScreeningResult, buildScreening, buildWaveform } from './screening-factories.ts';
+import { buildScreening, buildWaveform } from './screening-factories.ts';
+import { aScreeningResult } from './screening-result.ts';
 
 /** A site with its people, one machine with one bearing position, and a survey of it. */
 export async function buildPlant(dataSource: DataSource) {
