@@ -35,6 +35,7 @@ const restMs = 5_000;
 export class InProcessScreeningQueue implements ScreeningQueue {
   private readonly deps: Dependencies;
   private readonly running = new Map<number, Promise<void>>();
+  private started = false;
   private stopping = false;
   private pumping: Promise<void> | null = null;
   private woken = false;
@@ -48,6 +49,7 @@ export class InProcessScreeningQueue implements ScreeningQueue {
 
   async start(): Promise<void> {
     await this.takeUp();
+    this.started = true;
     this.wake();
   }
 
@@ -58,7 +60,7 @@ export class InProcessScreeningQueue implements ScreeningQueue {
 
   wake(): void {
     this.woken = true;
-    if (this.stopping || this.pumping !== null) return;
+    if (!this.started || this.stopping || this.pumping !== null) return;
     this.pumping = this.pump()
       .catch(async (error: unknown) => {
         this.deps.logger.error({ err: error }, 'the screening queue rests after a fault');

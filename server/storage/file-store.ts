@@ -49,6 +49,7 @@ export class FileStore {
     await file.sync();
     await file.close();
     await rename(incomingPath, path);
+    await syncFolder(dirname(path));
   }
 
   async remove(path: string): Promise<void> {
@@ -60,6 +61,7 @@ export class FileStore {
     const unfinished = `${path}.${randomUUID()}.part`;
     await writeFile(unfinished, bytes, { flush: true });
     await rename(unfinished, path);
+    await syncFolder(dirname(path));
   }
 
   /** Samples of a channel in the recorded unit; NaN marks a gap. */
@@ -84,5 +86,15 @@ export class FileStore {
       () => true,
       () => false,
     );
+  }
+}
+
+/** A name in a folder outlives a power cut only once the folder itself is on the disk. */
+async function syncFolder(path: string): Promise<void> {
+  const folder = await open(path, 'r');
+  try {
+    await folder.sync();
+  } finally {
+    await folder.close();
   }
 }

@@ -111,3 +111,13 @@ export const screenAgainRequest = z.strictObject({
   unit: unit.optional(),
 });
 export type ScreenAgainRequest = z.infer<typeof screenAgainRequest>;
+
+/**
+ * GET …/waveforms/:id/samples answers little-endian 32-bit floats in the recorded unit, NaN for a
+ * gap. Above `maxPoints` samples it answers pairs instead, the lowest and the highest of every so
+ * many samples as the header says; the header says 0 where every sample is there.
+ */
+export const samplesQuery = z.object({
+  maxPoints: z.coerce.number().int().min(2).max(20_000_000).optional(),
+});
+export const samplesPerPairHeader = 'x-samples-per-pair';

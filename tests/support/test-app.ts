@@ -16,16 +16,16 @@ type Caller = Record<Method, (path: string, body?: object) => Test>;
 const apps = new WeakMap<DataSource, ReturnType<typeof wireTestApp>>();
 
 /** The whole application over a test database, without its background work; one for each file of tests. */
-export function buildTestApp(dataSource: DataSource) {
-  const known = apps.get(dataSource) ?? wireTestApp(dataSource);
+export function buildTestApp(dataSource: DataSource, dataDirectory = tmpdir()) {
+  const known = apps.get(dataSource) ?? wireTestApp(dataSource, dataDirectory);
   apps.set(dataSource, known);
   return known;
 }
 
-function wireTestApp(dataSource: DataSource) {
+function wireTestApp(dataSource: DataSource, dataDirectory: string) {
   const config = readConfig({
     DATABASE_URL: 'mysql://unused@localhost/unused',
-    DATA_DIR: tmpdir(),
+    DATA_DIR: dataDirectory,
     AUTH_SECRET: authSecret,
     LOG_LEVEL: 'silent',
   });

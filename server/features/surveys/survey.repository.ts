@@ -86,6 +86,14 @@ export class SurveyRepository {
     return this.db.find(RejectedFile, { where: { surveyId }, order: { fileName: 'ASC' } });
   }
 
+  rejectedFile(surveyId: number, id: number): Promise<RejectedFile | null> {
+    return this.db.findOneBy(RejectedFile, { id, surveyId });
+  }
+
+  async removeRejectedFile(id: number): Promise<void> {
+    await this.db.delete(RejectedFile, { id });
+  }
+
   /** The counts of several surveys in a few grouped queries. */
   async counts(surveyIds: number[]): Promise<Map<number, SurveyCounts>> {
     const counts = new Map(surveyIds.map((id) => [id, { ...noCounts }]));

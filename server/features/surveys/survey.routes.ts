@@ -61,4 +61,13 @@ export const surveyRoutes = (surveys: SurveyService) => [
     response: surveyCounts,
     handle: ({ principal, params }) => surveys.progress(principal, params.surveyId),
   }),
+  route({
+    method: 'delete',
+    path: '/api/sites/:siteId/surveys/:surveyId/rejected-files/:rejectedFileId',
+    access: only('analyst', 'lead'),
+    params: surveyParams.extend({ rejectedFileId: id }),
+    response: null,
+    handle: ({ principal, params }) =>
+      surveys.dismissRejectedFile(principal, params.surveyId, params.rejectedFileId),
+  }),
 ];

@@ -107,6 +107,30 @@ export class SurveyService {
     return this.countsOf(id);
   }
 
+  /** Puts away the note of a file that could not be read; the file itself was never kept. */
+  async dismissRejectedFile(principal: SitePrincipal, id: number, fileId: number): Promise<void> {
+    const survey = await new SurveyRepository(this.database.db).find(principal.siteId, id);
+    if (survey === null) throw notFound('survey');
+    await this.database.transaction(async (db) => {
+      const repository = new SurveyRepository(db);
+      const file = await repository.rejectedFile(id, fileId);
+      if (file === null) throw notFound('file');
+      await repository.removeRejectedFile(fileId);
+      await recordActivity(
+        db,
+        {
+          siteId: principal.siteId,
+          userId: principal.userId,
+          action: 'rejected-file.dismissed',
+          objectType: 'survey',
+          objectId: id,
+          details: { fileName: file.fileName, errorLine: file.errorLine },
+        },
+        this.now(),
+      );
+    });
+  }
+
   private async countsOf(id: number): Promise<SurveyCounts> {
     const counts = (await new SurveyRepository(this.database.db).counts([id])).get(id);
     if (counts === undefined) throw notFound('survey');

@@ -1,9 +1,11 @@
 import { createHash, randomUUID } from 'node:crypto';
 import { createReadStream } from 'node:fs';
+import { rm } from 'node:fs/promises';
 import { pipeline } from 'node:stream/promises';
 import type { Request, Response } from 'express';
 import multer from 'multer';
 import { AppError } from '#server/http/app-error.ts';
+import { diskFullInWords } from '#server/storage/disk-full.ts';
 import { uploadMapping, type UploadMapping } from '#shared/contracts/waveform.ts';
 
 /** A file that has arrived in the incoming folder, with what the person settled about it. */
@@ -40,18 +42,7 @@ export async function receiveUpload(
   await new Promise<void>((resolve, reject) => {
     takeFile(req, res, (error: unknown) => {
       if (!error) resolve();
-      else if (error instanceof multer.MulterError) reject(error);
-      else {
-        reject(
-          new AppError(
-            'validation',
-            'The upload broke off or is no multipart form. Send it again.',
-            {
-              cause: error,
-            },
-          ),
-        );
-      }
+      else reject(uploadFault(error));
     });
   });
   const { file } = req;
@@ -60,14 +51,34 @@ export async function receiveUpload(
       fields: [{ path: 'file', message: 'Choose a file.' }],
     });
   }
-  return {
-    path: file.path,
-    // Browsers may send a folder's path; the name alone tells a person which file it was.
-    fileName: (file.originalname.split(/[/\\]/).at(-1) ?? 'file').slice(0, 255),
-    fileBytes: file.size,
-    contentHash: await hashOf(file.path),
-    mapping: readMapping((req.body as { mapping?: unknown }).mapping),
-  };
+  try {
+    return {
+      path: file.path,
+      fileName: plainName(file.originalname),
+      fileBytes: file.size,
+      contentHash: await hashOf(file.path),
+      mapping: readMapping((req.body as { mapping?: unknown }).mapping),
+    };
+  } catch (error) {
+    await rm(file.path, { force: true });
+    throw error;
+  }
+}
+
+function uploadFault(error: unknown): unknown {
+  const known = diskFullInWords(error);
+  if (known instanceof AppError || known instanceof multer.MulterError) return known;
+  return new AppError(
+    'validation',
+    'The upload broke off or is no multipart form. Send it again.',
+    { cause: error },
+  );
+}
+
+/** Browsers may send a folder's path; the name alone tells a person which file it was. */
+function plainName(sent: string): string {
+  const name = (sent.split(/[/\\]/).at(-1) ?? '').replace(/\p{Cc}/gu, '').trim();
+  return name === '' ? 'file' : name.slice(0, 255);
 }
 
 async function hashOf(path: string): Promise<string> {

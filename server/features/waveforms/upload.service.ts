@@ -3,6 +3,7 @@ import { recordActivity } from '#server/db/activity.repository.ts';
 import type { Database } from '#server/db/database.ts';
 import { isDuplicateKey } from '#server/db/duplicate-key.ts';
 import { AppError, notFound } from '#server/http/app-error.ts';
+import { diskFullInWords } from '#server/storage/disk-full.ts';
 import type { FileStore } from '#server/storage/file-store.ts';
 import { uploadLimits, type UploadMapping } from '#shared/contracts/waveform.ts';
 import { quantityOfUnit } from '#shared/quantities/quantity.ts';
@@ -60,7 +61,9 @@ export class UploadService {
       if (survey === null) throw notFound('survey');
       await this.checkPoints(waveforms, principal.siteId, file.mapping);
       const before = await waveforms.ofContent(surveyId, file.contentHash);
-      if (before.length > 0) return { alreadyThere: true, rows: before };
+      const there = new Set(before.map(({ waveform }) => waveform.channelIndex));
+      const missing = file.mapping.channels.filter(({ channelIndex }) => !there.has(channelIndex));
+      if (missing.length === 0) return { alreadyThere: true, rows: before };
       if ((await waveforms.countOfSurvey(surveyId)) >= uploadLimits.filesPerSurveyMax) {
         throw new AppError(
           'too_large',
@@ -76,9 +79,11 @@ export class UploadService {
         ...(file.mapping.toldSpeedRpm === undefined ? {} : { speedRpm: file.mapping.toldSpeedRpm }),
       });
       if ('error' in answer) return await this.reject(surveyId, file, answer.error);
-      const checked = this.check(file.mapping, answer.read);
+      const checked = this.check(missing, answer.read);
       if ('code' in checked) return await this.reject(surveyId, file, checked);
       return await this.keep(principal, surveyId, file, checked, answer.read);
+    } catch (error) {
+      throw diskFullInWords(error);
     } finally {
       await files.remove(file.path);
     }
@@ -99,7 +104,10 @@ export class UploadService {
   }
 
   /** What the reader could not know: the unit of each channel taken, and the sampling rate. */
-  private check(mapping: UploadMapping, read: ReadFile): CheckedFile | ReadFault {
+  private check(
+    wantedChannels: UploadMapping['channels'],
+    read: ReadFile,
+  ): CheckedFile | ReadFault {
     if (read.sampleRateHz === null) {
       return {
         code: 'sample-rate-missing',
@@ -109,7 +117,7 @@ export class UploadService {
       };
     }
     const channels: CheckedFile['channels'] = [];
-    for (const wanted of mapping.channels) {
+    for (const wanted of wantedChannels) {
       const channel = read.channels[wanted.channelIndex];
       if (channel === undefined) {
         return {
@@ -193,7 +201,7 @@ export class UploadService {
       .transaction(async (db) => {
         const waveforms = new WaveformRepository(db);
         await waveforms.insert(rows);
-        await waveforms.clearRejection(surveyId, file.fileName);
+        await waveforms.clearRejection(surveyId, file);
         await recordActivity(db, {
           siteId: principal.siteId,
           userId: principal.userId,

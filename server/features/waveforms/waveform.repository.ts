@@ -167,7 +167,12 @@ export class WaveformRepository {
   }
 
   /** A file that was mended and sent again under its name is no longer a rejected one. */
-  async clearRejection(surveyId: number, fileName: string): Promise<void> {
+  async clearRejection(
+    surveyId: number,
+    { fileName, contentHash }: { fileName: string; contentHash: string },
+  ): Promise<void> {
     await this.db.delete(RejectedFile, { surveyId, fileName });
+    // Nor is one that only lacked what a person has now said of it.
+    await this.db.delete(RejectedFile, { surveyId, contentHash });
   }
 }

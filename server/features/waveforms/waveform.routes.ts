@@ -1,3 +1,4 @@
+import { pipeline } from 'node:stream/promises';
 import type { Response } from 'express';
 import { z } from 'zod';
 import { anyMember, only } from '#server/auth/access.ts';
@@ -5,6 +6,8 @@ import { handled, route } from '#server/http/route.ts';
 import { id } from '#shared/contracts/fields.ts';
 import { screeningResponse } from '#shared/contracts/screening.ts';
 import {
+  samplesPerPairHeader,
+  samplesQuery,
   screenAgainRequest,
   uploadResponse,
   waveformListItem,
@@ -19,9 +22,11 @@ const waveformParams = z.object({ siteId: id, waveformId: id });
 const screeningParams = z.object({ siteId: id, screeningId: id });
 
 /** Recorded values never change under their id. */
+const neverChanges = 'private, max-age=86400, immutable';
+
 function sendBytes(res: Response, bytes: Uint8Array): typeof handled {
   res
-    .set('Cache-Control', 'private, max-age=86400, immutable')
+    .set('Cache-Control', neverChanges)
     .type('application/octet-stream')
     .send(Buffer.from(bytes.buffer, bytes.byteOffset, bytes.byteLength));
   return handled;
@@ -69,11 +74,10 @@ export const waveformRoutes = (waveforms: WaveformService) => [
     handle: async ({ principal, params, res }) => {
       const { path, fileName } = await waveforms.original(principal, params.waveformId);
       await new Promise<void>((resolve, reject) =>
-        res
-          .type('text/csv')
-          .download(path, fileName, { dotfiles: 'allow' }, (error) =>
-            error ? reject(error) : resolve(),
-          ),
+        res.type('text/csv').download(path, fileName, { dotfiles: 'allow' }, (error) =>
+          // A browser that leaves in the middle is no fault of ours.
+          error && !res.headersSent ? reject(error) : resolve(),
+        ),
       );
       return handled;
     },
@@ -83,10 +87,17 @@ export const waveformRoutes = (waveforms: WaveformService) => [
     path: '/api/sites/:siteId/waveforms/:waveformId/samples',
     access: anyMember(),
     params: waveformParams,
+    query: samplesQuery,
     response: 'binary',
-    handle: async ({ principal, params, res }) => {
-      const samples = await waveforms.samples(principal, params.waveformId);
-      return sendBytes(res, new Uint8Array(Float32Array.from(samples).buffer));
+    handle: async ({ principal, params, query, res }) => {
+      const samples = await waveforms.samples(principal, params.waveformId, query.maxPoints);
+      res
+        .set('Cache-Control', neverChanges)
+        .set(samplesPerPairHeader, String(samples.samplesPerPair))
+        .set('Content-Length', String(samples.byteCount))
+        .type('application/octet-stream');
+      await pipeline(samples.chunks, res);
+      return handled;
     },
   }),
   route({

@@ -4,6 +4,7 @@ import type { Database } from '#server/db/database.ts';
 import type { Screening } from '#server/db/entities/screening.entity.ts';
 import { AppError, notFound } from '#server/http/app-error.ts';
 import type { FileStore } from '#server/storage/file-store.ts';
+import { float32Samples, minMaxPairs } from '#server/storage/float32-samples.ts';
 import type { ScreenAgainRequest } from '#shared/contracts/waveform.ts';
 import { quantityOfUnit } from '#shared/quantities/quantity.ts';
 import { placeOf } from './waveform.presenter.ts';
@@ -39,10 +40,17 @@ export class WaveformService {
     return { path: this.files.originalPath(waveform.contentHash), fileName: waveform.fileName };
   }
 
-  /** Samples in the recorded unit; NaN marks a gap. */
-  async samples(principal: SitePrincipal, id: number): Promise<Float64Array> {
+  /** Samples in the recorded unit, as the contract sends them: all, or drawn together to pairs. */
+  async samples(principal: SitePrincipal, id: number, maxPoints = Infinity) {
     const { waveform } = await this.seen(principal, id);
-    return this.files.readSamples(waveform.contentHash, waveform.channelIndex);
+    const path = this.files.samplesPath(waveform.contentHash, waveform.channelIndex);
+    const { sampleCount } = waveform;
+    if (sampleCount <= maxPoints) {
+      return { samplesPerPair: 0, byteCount: sampleCount * 4, chunks: float32Samples(path) };
+    }
+    const samplesPerPair = Math.ceil(sampleCount / Math.floor(maxPoints / 2));
+    const pairCount = Math.ceil(sampleCount / samplesPerPair);
+    return { samplesPerPair, byteCount: pairCount * 8, chunks: minMaxPairs(path, samplesPerPair) };
   }
 
   async plot(
