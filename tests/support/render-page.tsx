@@ -1,10 +1,14 @@
 import { QueryClientProvider } from '@tanstack/react-query';
-import { render } from '@testing-library/react';
+import { configure, render } from '@testing-library/react';
 import { createMemoryRouter, RouterProvider } from 'react-router-dom';
 import { vi } from 'vitest';
 import { ToastProvider } from '#src/components/toast.tsx';
 import { routeTree } from '#src/app/router.tsx';
 import { createQueryClient } from '#src/lib/query-client.ts';
+
+// The first page of a file loads its modules on a busy machine.
+configure({ asyncUtilTimeout: 10_000 });
+window.scrollTo = () => undefined;
 
 export interface SentRequest {
   /** "POST /api/…" without the query. */
