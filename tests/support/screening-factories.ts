@@ -5,6 +5,8 @@ import { Waveform } from '#server/db/entities/waveform.entity.ts';
 import type { ScreeningResult } from '#shared/signal/screening-types.ts';
 import { aScreeningResult } from './screening-result.ts';
 
+export { aScreeningResult };
+
 export function buildWaveform(
   dataSource: DataSource,
   at: { surveyId: number; measuringPointId: number; uploadedByUserId: number },
