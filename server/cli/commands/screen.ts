@@ -4,7 +4,12 @@ import { screenWaveform } from '#shared/signal/screen-waveform.ts';
 import type { MachineFacts } from '#shared/signal/screening-types.ts';
 import { ArgumentFault, readArguments, tellArgumentFaults } from './command-arguments.ts';
 import { screeningLine } from './screening-line.ts';
-import { findWaveformFiles, readWaveformFile, type FileFault } from './waveform-files.ts';
+import {
+  findWaveformFiles,
+  missingRate,
+  readWaveformFile,
+  type FileFault,
+} from './waveform-files.ts';
 
 const optionNames = [
   'speed-rpm',
@@ -108,14 +113,6 @@ function machineFacts(
     assetKind: csv.comments.assetKind ?? machine.assetKind,
   };
 }
-
-const missingRate: FileFault = {
-  code: 'sample-rate-missing',
-  line: null,
-  message:
-    'Neither a time column nor a comment line tells the sampling rate; expected one of them. Add ' +
-    'a line "# sample_rate_hz: N" to the file, or tell it with --sample-rate-hz.',
-};
 
 function missingUnit({ unitText, columnIndex }: WaveformChannel): FileFault {
   const found =

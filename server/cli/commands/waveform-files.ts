@@ -85,3 +85,12 @@ function systemFault(error: unknown): FileFault {
   const known: Record<string, string> = { ENOENT: 'not-found', EACCES: 'not-allowed' };
   return { code: known[code] ?? 'unreadable', line: null, message };
 }
+
+/** For files that tell no sampling rate, where nobody else does. */
+export const missingRate: FileFault = {
+  code: 'sample-rate-missing',
+  line: null,
+  message:
+    'Neither a time column nor a comment line tells the sampling rate; expected one of them. Add ' +
+    'a line "# sample_rate_hz: N" to the file, or tell it with --sample-rate-hz.',
+};
