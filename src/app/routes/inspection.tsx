@@ -1,5 +1,7 @@
 import { useSuspenseQuery, type QueryClient } from '@tanstack/react-query';
 import { Link, useParams, type LoaderFunctionArgs } from 'react-router-dom';
+import { safetyCautions } from '#shared/contracts/safety-cautions.ts';
+import { CautionPanel } from '#src/components/caution-panel.tsx';
 import { PageHeader } from '#src/components/page-header.tsx';
 import { Panel } from '#src/components/panel.tsx';
 import { InspectionStateMark } from '#src/components/work-state-mark.tsx';
