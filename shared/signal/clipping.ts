@@ -1,0 +1,60 @@
+/** Samples that sit on one and the same extreme raw value. */
+export interface Clipping {
+  upper: boolean;
+  lower: boolean;
+  /** Share of the samples on a rail, 0–1. */
+  share: number;
+}
+
+/** Samples within this share of the range count as on the rail: a little noise of a fine converter. */
+const railShare = 2e-4;
+/** The band below the rail that is compared with it. */
+const bandShare = 0.02;
+const samplesMin = 6;
+const sampleShareMin = 5e-4;
+const runsMin = 2;
+
+/**
+ * Whether the instrument cut the record off: it clips every excursion at one and the same value, so
+ * that the extreme value is crowded, in runs, while the band just below it is not. A machine that
+ * truncates its motion does not stop at one raw value.
+ *
+ * @param samples - as recorded; non-finite ones are passed over
+ */
+export function findClipping(samples: Float64Array): Clipping {
+  let [low, high] = [Infinity, -Infinity];
+  for (const value of samples) {
+    if (!Number.isFinite(value)) continue;
+    if (value < low) low = value;
+    if (value > high) high = value;
+  }
+  const range = high - low;
+  if (!(range > 0)) return { upper: false, lower: false, share: 0 };
+  const upper = rail(samples, (value) => (high - value) / range);
+  const lower = rail(samples, (value) => (value - low) / range);
+  return {
+    upper: upper.clipped,
+    lower: lower.clipped,
+    share: ((upper.clipped ? upper.count : 0) + (lower.clipped ? lower.count : 0)) / samples.length,
+  };
+}
+
+function rail(samples: Float64Array, distance: (value: number) => number) {
+  let [count, below, runs, run] = [0, 0, 0, 0];
+  for (const value of samples) {
+    const away = distance(value);
+    if (away <= railShare) {
+      count += 1;
+      run += 1;
+      if (run === 2) runs += 1;
+      continue;
+    }
+    run = 0;
+    if (away <= bandShare) below += 1;
+  }
+  const clipped =
+    count >= Math.max(samplesMin, sampleShareMin * samples.length) &&
+    runs >= runsMin &&
+    count > 2 * below;
+  return { clipped, count };
+}

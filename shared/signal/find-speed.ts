@@ -1,0 +1,168 @@
+import type { MachineFacts, SpeedReading } from './screening-types.ts';
+import { peakNear, type SpectrumView } from './spectrum-view.ts';
+
+const defaultTolerance = 0.03;
+const ordersUsed = 12;
+/** A line's say in the family is capped: one strong line of something else must not decide. */
+const sayMax = Math.log2(1 + 300);
+/** A refined line further than this from its place belongs to something else, lines. */
+const outlierLines = 0.6;
+/** Standard error of an interpolated Hann line at a power ratio of 1, lines (close to the Cramér–Rao bound times 1.2). */
+const lineErrorAtUnity = 0.55;
+const supportRatio = 12;
+
+const say = (view: SpectrumView, frequencyHz: number): number => {
+  const at = Math.round(frequencyHz / view.stepHz);
+  let best = 0;
+  for (let i = at - 1; i <= at + 1; i += 1) best = Math.max(best, view.ratio[i] ?? 0);
+  return Math.min(sayMax, Math.log2(1 + best));
+};
+
+/** How well a speed explains the spectrum's lines: the family of its orders, early ones more. */
+function familyScore(view: SpectrumView, speedHz: number): number {
+  let score = 0;
+  for (let order = 1; order <= ordersUsed; order += 1) {
+    if (order * speedHz > view.usableHz) break;
+    score += say(view, order * speedHz) / Math.sqrt(order);
+  }
+  return score;
+}
+
+function bestIn(
+  view: SpectrumView,
+  fromHz: number,
+  toHz: number,
+): { speedHz: number; score: number } {
+  // Fine enough for the tenth order to stay within half a line.
+  const step = Math.max(view.stepHz / 16, (toHz - fromHz) / 20_000);
+  let best = { speedHz: (fromHz + toHz) / 2, score: -1 };
+  for (let speedHz = fromHz; speedHz <= toHz; speedHz += step) {
+    const score = familyScore(view, speedHz);
+    if (score > best.score) best = { speedHz, score };
+  }
+  return best;
+}
+
+/** Refines by weighted least squares over every order's interpolated line. */
+function refine(view: SpectrumView, speedHz: number) {
+  let current = speedHz;
+  let spread = view.stepHz;
+  let support = 0;
+  for (let round = 0; round < 3; round += 1) {
+    let [weights, sum] = [0, 0];
+    support = 0;
+    for (let order = 1; order <= 20; order += 1) {
+      if (order * current > view.usableHz) break;
+      const peak = peakNear(view, order * current, 1.5);
+      if (peak === null) continue;
+      const ratio = view.ratio[peak.index] ?? 0;
+      const missLines = Math.abs(peak.frequencyHz - order * current) / view.stepHz;
+      if (ratio < supportRatio || (round > 0 && missLines > outlierLines)) continue;
+      const error = (lineErrorAtUnity * view.stepHz) / Math.sqrt(Math.min(ratio, 1e8)) / order;
+      weights += 1 / error ** 2;
+      sum += peak.frequencyHz / order / error ** 2;
+      support += 1;
+    }
+    if (weights === 0) break;
+    current = sum / weights;
+    spread = 1 / Math.sqrt(weights);
+  }
+  return { speedHz: current, spread, support };
+}
+
+/**
+ * Running speed of the position's shaft from the whole family of its orders: a told speed refined
+ * within its tolerance, or one estimated within the machine's range.
+ *
+ * @param toldSpeedRpm - of the machine; the position's shaft turns at that times its ratio
+ */
+export function findSpeed(
+  view: SpectrumView,
+  toldSpeedRpm: number | undefined,
+  tolerance: number | undefined,
+  machine: MachineFacts | undefined,
+): SpeedReading & { supported: boolean } {
+  const ratio = machine?.shaftRatio ?? 1;
+  const told = toldSpeedRpm !== undefined && toldSpeedRpm > 0 ? (toldSpeedRpm / 60) * ratio : null;
+  const range = rangeOf(told, tolerance, machine, view);
+  if (range === null) {
+    return { speedHz: null, source: 'none', intervalHz: null, alternatives: [], supported: false };
+  }
+  const rough = bestIn(view, range[0], range[1]);
+  const { speedHz, spread, support } = refine(view, rough.speedHz);
+  const inside = speedHz >= range[0] * 0.999 && speedHz <= range[1] * 1.001;
+  const supported = support > 0 && inside;
+  if (!supported) {
+    if (told === null) {
+      return { speedHz: null, source: 'none', intervalHz: null, alternatives: [], supported };
+    }
+    const width = told * (tolerance ?? defaultTolerance);
+    return {
+      speedHz: told,
+      source: 'told',
+      intervalHz: [told - width, told + width],
+      alternatives: [],
+      supported,
+    };
+  }
+  return {
+    speedHz,
+    source: told === null ? 'estimated' : 'refined',
+    intervalHz: [speedHz - 1.96 * spread, speedHz + 1.96 * spread],
+    alternatives: alternativesOf(view, speedHz, machine, told === null),
+    supported,
+  };
+}
+
+function rangeOf(
+  told: number | null,
+  tolerance: number | undefined,
+  machine: MachineFacts | undefined,
+  view: SpectrumView,
+): [number, number] | null {
+  const ratio = machine?.shaftRatio ?? 1;
+  if (told !== null) {
+    const share = tolerance ?? defaultTolerance;
+    return [told * (1 - share), told * (1 + share)];
+  }
+  if (machine?.speedMinRpm !== undefined && machine.speedMaxRpm !== undefined) {
+    return [(machine.speedMinRpm / 60) * ratio * 0.98, (machine.speedMaxRpm / 60) * ratio * 1.02];
+  }
+  if (machine?.nominalSpeedRpm !== undefined) {
+    return [
+      (machine.nominalSpeedRpm / 60) * ratio * 0.9,
+      (machine.nominalSpeedRpm / 60) * ratio * 1.05,
+    ];
+  }
+  const top = Math.min(130, view.usableHz / 5);
+  const bottom = Math.max(4, 8 * view.stepHz);
+  return bottom < top ? [bottom, top] : null;
+}
+
+function alternativesOf(
+  view: SpectrumView,
+  speedHz: number,
+  machine: MachineFacts | undefined,
+  estimated: boolean,
+): SpeedReading['alternatives'] {
+  const found: { speedHz: number; reason: string }[] = [];
+  if (estimated) {
+    const own = familyScore(view, speedHz);
+    for (const [factor, words] of [
+      [0.5, 'half'],
+      [2, 'double'],
+    ] as const) {
+      if (familyScore(view, speedHz * factor) > 0.85 * own) {
+        found.push({
+          speedHz: speedHz * factor,
+          reason: `${words} the speed explains the lines about as well`,
+        });
+      }
+    }
+  }
+  const line = machine?.lineFrequencyHz;
+  if (line !== undefined && Math.abs(speedHz - line) < 2 * view.stepHz) {
+    found.push({ speedHz: line, reason: 'the line frequency stands next to 1×' });
+  }
+  return found;
+}
