@@ -86,7 +86,11 @@ export function InspectionPage() {
           </Panel>
         </div>
         <div className="flex min-w-0 flex-col gap-5">
-          {(can.accept || can.report) && <InspectionWork siteId={siteId} inspection={inspection} />}
+          {can.accept || can.report ? (
+            <InspectionWork siteId={siteId} inspection={inspection} />
+          ) : (
+            report === null && <CautionPanel cautions={safetyCautions} />
+          )}
           {report !== null && (
             <Panel
               title="Report"
