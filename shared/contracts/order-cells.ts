@@ -1,6 +1,15 @@
+import { z } from 'zod';
 import { standsOut } from '../signal/harmonic-run.ts';
 import type { OrderLine } from '../signal/screening-types.ts';
-import type { OrderCell } from './screening.ts';
+
+/** The strip's cells alone, for lists: order, prominence in dB and whether something else explains it. */
+export const orderCell = z.object({
+  order: z.number(),
+  prominenceDb: z.number(),
+  significant: z.boolean(),
+  explainedBy: z.string().nullable(),
+});
+export type OrderCell = z.infer<typeof orderCell>;
 
 /**
  * The order strip's cells from a screening's order table. A cell counts as standing out by the same
