@@ -21,7 +21,7 @@ export interface ScreeningQueue {
 interface Dependencies {
   database: Database;
   files: FileStore;
-  workers: WorkerPool;
+  workers: Pick<WorkerPool, 'threads' | 'screen' | 'close'>;
   logger: Logger;
   now?: () => Date;
 }

@@ -2,6 +2,7 @@ import { open } from 'node:fs/promises';
 import { move, transferableSymbol, valueSymbol } from 'piscina';
 import { CsvError } from '#shared/signal/csv/csv-error.ts';
 import { WaveformCsvParser } from '#shared/signal/csv/waveform-csv-parser.ts';
+import { screenWaveform } from '#shared/signal/screen-waveform.ts';
 import type { ReadAnswer, ReadTask, ScreenAnswer, ScreenTask, WorkerTask } from './worker-tasks.ts';
 
 const chunkBytes = 1024 * 1024;
@@ -40,9 +41,7 @@ async function read({ path, options }: ReadTask): Promise<ReadAnswer> {
   }
 }
 
-/** The method is loaded with the first screening: a thread that only reads needn't wait for it. */
-async function screen({ input }: ScreenTask): Promise<ScreenAnswer> {
-  const { screenWaveform } = await import('#shared/signal/screen-waveform.ts');
+function screen({ input }: ScreenTask): ScreenAnswer {
   const { result, plots } = screenWaveform(input);
   return {
     result,

@@ -7,6 +7,11 @@ import type { ReadAnswer, ScreenAnswer, WorkerTask } from './worker-tasks.ts';
 /** Longest time one waveform may take; a hundred times what the longest admitted record needs. */
 const taskLimitMs = 5 * 60_000;
 
+/** Starts a worker thread that runs the `runTask` of a TypeScript module (workerData.module). */
+export const typescriptWorkerPath = fileURLToPath(
+  new URL('./typescript-worker.mjs', import.meta.url),
+);
+
 /** A task took longer than it may; its worker was ended. */
 export class TaskTimeout extends Error {}
 
@@ -16,14 +21,14 @@ export class WorkerPool {
 
   constructor(threads: number) {
     this.pool = new Piscina({
-      filename: fileURLToPath(new URL('./screening-worker.ts', import.meta.url)),
+      filename: typescriptWorkerPath,
+      workerData: { module: new URL('./screening-worker.ts', import.meta.url).href },
       name: 'runTask',
       // Threads come with the first task; a server that only answers pages needs none.
       minThreads: 0,
       maxThreads: threads,
       idleTimeout: 30_000,
-      // Node reads TypeScript through the same loader as the server itself.
-      execArgv: ['--import', 'tsx'],
+      execArgv: [],
     });
     // The task that a dying worker held is rejected by itself; without a listener the event would
     // end the whole server.
