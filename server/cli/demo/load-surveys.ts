@@ -1,12 +1,12 @@
 import { createHash, randomUUID } from 'node:crypto';
 import { writeFile } from 'node:fs/promises';
 import { join } from 'node:path';
-import { fileURLToPath } from 'node:url';
 import { Piscina } from 'piscina';
 import { surveyDates, type DemoPoint, type demoWaveformFile } from '#fixtures/demo/surveys.ts';
 import type { SurveyIndex } from '#fixtures/demo/vibration.ts';
 import type { SitePrincipal } from '#server/auth/principal.ts';
 import type { Product } from '#server/compose.ts';
+import { typescriptWorkerPath } from '#server/screening/worker-pool.ts';
 import { demoMachines } from './load-register.ts';
 
 type Made = ReturnType<typeof demoWaveformFile>;
@@ -14,11 +14,12 @@ type Made = ReturnType<typeof demoWaveformFile>;
 /** The threads that make the demo's waveforms. */
 export function waveformMakers(): Piscina<unknown, Made> {
   return new Piscina({
-    filename: fileURLToPath(new URL('./waveform-worker.ts', import.meta.url)),
-    name: 'makeFile',
+    filename: typescriptWorkerPath,
+    name: 'runTask',
+    workerData: { module: new URL('./waveform-worker.ts', import.meta.url).href },
     minThreads: 2,
     maxThreads: 2,
-    execArgv: ['--import', 'tsx'],
+    execArgv: [],
   });
 }
 
