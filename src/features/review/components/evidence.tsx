@@ -8,53 +8,58 @@ export function Evidence({ result }: { result: ScreeningResponse['result'] }) {
   const speaksFor = result.evidence.filter((sentence) => sentence.for);
   const speaksAgainst = result.evidence.filter((sentence) => !sentence.for);
   return (
-    <div className="grid gap-5 lg:grid-cols-2">
-      <Part title="Speaks for looseness">
-        {speaksFor.map(({ text }) => (
-          <li key={text} className="border-l-4 border-evidence pl-2">
-            {text}
-          </li>
-        ))}
-      </Part>
-      <Part title="Speaks against it">
-        {speaksAgainst.map(({ text }) => (
-          <li key={text} className="border-l-4 border-rule pl-2">
-            {text}
-          </li>
-        ))}
-      </Part>
-      <Part title="What could look alike">
-        {result.lookAlikes.map(({ name, ruledOut, reason }) => (
-          <li key={name} className="flex gap-2">
-            <span className="mt-1">
-              <Icon name={ruledOut ? 'dash' : 'help'} size={12} />
-            </span>
-            <span>
-              <span className="font-medium">{name}</span>{' '}
-              <span className="text-ink-soft">
-                {ruledOut ? 'is ruled out' : 'is not ruled out'}: {reason}
-              </span>
-            </span>
-          </li>
-        ))}
-      </Part>
-      <Part title="Quality of the record" none="Nothing is wrong with it.">
-        {result.quality.map(({ code, message, advice, forcesRetake }) => (
-          <li key={code}>
-            <span className={forcesRetake ? 'font-semibold' : ''}>{message}</span>{' '}
-            <span className="text-ink-soft">{advice}</span>
-          </li>
-        ))}
-      </Part>
-      {result.speed.alternatives.length > 0 && (
-        <Part title="Other speeds that fit about as well">
-          {result.speed.alternatives.map(({ speedHz, reason }) => (
-            <li key={`${speedHz} ${reason}`}>
-              <span className="figures">{formatFixed(speedHz * 60, 0)} r/min</span>: {reason}
+    <div className="grid items-start gap-5 lg:grid-cols-2">
+      <div className="flex flex-col gap-5">
+        <Part title="Speaks for looseness">
+          {speaksFor.map(({ text }) => (
+            <li key={text} className="border-l-4 border-evidence pl-2">
+              {text}
             </li>
           ))}
         </Part>
-      )}
+        <Part title="Speaks against it">
+          {speaksAgainst.map(({ text }) => (
+            <li key={text} className="border-l-4 border-rule pl-2">
+              {text}
+            </li>
+          ))}
+        </Part>
+        <Part title="Quality of the record" none="Nothing is wrong with it.">
+          {result.quality.map(({ code, message, advice, forcesRetake }) => (
+            <li key={code}>
+              <span className={forcesRetake ? 'font-semibold' : ''}>{message}</span>{' '}
+              <span className="text-ink-soft">{advice}</span>
+            </li>
+          ))}
+        </Part>
+        {result.speed.alternatives.length > 0 && (
+          <Part title="Other speeds that fit about as well">
+            {result.speed.alternatives.map(({ speedHz, reason }) => (
+              <li key={`${speedHz} ${reason}`}>
+                <span className="figures">{formatFixed(speedHz * 60, 0)} r/min</span>: {reason}
+              </li>
+            ))}
+          </Part>
+        )}
+      </div>
+      <Part title="What could look alike">
+        {/* What is still open is read first. */}
+        {[...result.lookAlikes]
+          .sort((a, b) => Number(a.ruledOut) - Number(b.ruledOut))
+          .map(({ name, ruledOut, reason }) => (
+            <li key={name} className="flex gap-2">
+              <span className="mt-1">
+                <Icon name={ruledOut ? 'dash' : 'help'} size={12} />
+              </span>
+              <span>
+                <span className="font-medium">{name}</span>{' '}
+                <span className="text-ink-soft">
+                  {ruledOut ? 'is ruled out' : 'is not ruled out'}: {reason}
+                </span>
+              </span>
+            </li>
+          ))}
+      </Part>
     </div>
   );
 }

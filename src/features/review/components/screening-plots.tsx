@@ -96,7 +96,7 @@ export function ScreeningWaveform({ siteId, screening, waveform }: PlotProps) {
   });
   if (samples.isError) return <PlotFailure error={samples.error} />;
   return (
-    <div className="grid items-start gap-5 xl:grid-cols-[2fr_1fr]">
+    <div className="grid items-start gap-5 xl:grid-cols-[minmax(0,2fr)_minmax(0,1fr)]">
       {samples.data === undefined ? (
         <PlotSkeleton heightPx={waveformHeightPx} label="Loading the waveform…" />
       ) : (
