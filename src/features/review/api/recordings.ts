@@ -52,14 +52,23 @@ export const averagedRevolutionQuery = (siteId: number, screeningId: number) =>
       }),
   });
 
-/** Fetches what an item of the queue shows before it is gone to. */
-export function prefetchItem(
+/** Fetches what an item of the queue shows before it is gone to; what fails is asked for again then. */
+export async function prefetchItem(
   client: QueryClient,
   siteId: number,
   item: { screeningId: number; waveformId: number },
-): void {
-  void client.prefetchQuery(screeningQuery(siteId, item.screeningId));
-  void client.prefetchQuery(waveformQuery(siteId, item.waveformId));
-  void client.prefetchQuery(samplesQuery(siteId, item.waveformId));
-  void client.prefetchQuery(spectrumQuery(siteId, item.screeningId));
+): Promise<void> {
+  await Promise.all([
+    client.prefetchQuery(screeningQuery(siteId, item.screeningId)),
+    client.prefetchQuery(waveformQuery(siteId, item.waveformId)),
+    client.prefetchQuery(samplesQuery(siteId, item.waveformId)),
+    client.prefetchQuery(spectrumQuery(siteId, item.screeningId)),
+    client.prefetchQuery(averagedRevolutionQuery(siteId, item.screeningId)),
+  ]);
+  const waveform = client.getQueryData(waveformQuery(siteId, item.waveformId).queryKey);
+  if (!waveform?.previous) return;
+  await Promise.all([
+    client.prefetchQuery(waveformQuery(siteId, waveform.previous.waveformId)),
+    client.prefetchQuery(spectrumQuery(siteId, waveform.previous.screeningId)),
+  ]);
 }

@@ -38,7 +38,7 @@ export function ReviewDesk(props: ReviewDeskProps) {
   const decisions = useReviewDecisions(siteId, onSelect);
 
   useEffect(() => {
-    if (next !== undefined) prefetchItem(client, siteId, next);
+    if (next !== undefined) void prefetchItem(client, siteId, next);
   }, [client, siteId, next]);
 
   const isOpen = item !== undefined && item.decision === null;
