@@ -6,8 +6,11 @@ import {
 import { readWaveformCsv } from '#shared/signal/csv/read-waveform-csv.ts';
 import { sketchOf, type Sketch } from './sketch.ts';
 
-/** Enough for some thousand rows; a longer file is read to its end by the server. */
-const headBytes = 64 * 1024;
+/** The whole of most recordings (16,384 rows), in a few milliseconds; the server reads the rest of longer ones. */
+const headBytes = 256 * 1024;
+
+/** Some turns of a machine; more would be a solid bar at this size. */
+const sketchedSamples = 600;
 
 export interface FileHead {
   preview: WaveformCsvPreview;
@@ -32,7 +35,9 @@ function sketches(head: Uint8Array): Sketch[] {
   const end = Math.max(head.lastIndexOf(10), head.lastIndexOf(13));
   try {
     const whole = end < 0 ? head : head.subarray(0, end + 1);
-    return readWaveformCsv(whole).channels.map(({ samples }) => sketchOf(samples));
+    return readWaveformCsv(whole).channels.map(({ samples }) =>
+      sketchOf(samples.subarray(0, sketchedSamples)),
+    );
   } catch (error) {
     // The picture is a help; a file that reads otherwise without its last row is not worth a fault.
     if (error instanceof CsvError) return [];

@@ -1,23 +1,30 @@
+import type { PointChoice } from '#shared/contracts/measuring-point.ts';
 import type { SurveyResponse } from '#shared/contracts/survey.ts';
 import { IconButton } from '#src/components/icon-button.tsx';
 import { Panel } from '#src/components/panel.tsx';
 import { toApiError } from '#src/lib/api-error.ts';
 import { useDismissRejectedFile } from '../api/surveys.ts';
 
-/** The points nobody has a waveform of yet. */
+/** The points nobody has a waveform of yet, machine by machine. */
 export function MissingPoints({ points }: { points: SurveyResponse['missingPoints'] }) {
   if (points.length === 0) return null;
   const title =
     points.length === 1
       ? '1 point without a waveform'
       : `${points.length} points without a waveform`;
+  const machines = new Map<number, PointChoice[]>();
+  for (const point of points) {
+    const known = machines.get(point.machineId);
+    if (known) known.push(point);
+    else machines.set(point.machineId, [point]);
+  }
   return (
     <Panel title={title}>
-      <ul className="grid gap-x-6 text-sm phone:grid-cols-2 xl:grid-cols-3">
-        {points.map((point) => (
-          <li key={point.id} className="flex gap-3 border-b border-hairline py-1">
-            <span className="figures">{point.label}</span>
-            <span className="text-ink-soft">{point.machineName}</span>
+      <ul className="grid gap-x-8 text-sm lg:grid-cols-2">
+        {[...machines].map(([machineId, missing]) => (
+          <li key={machineId} className="border-b border-hairline py-1">
+            <span className="text-ink-soft">{missing[0]?.machineName}:</span>{' '}
+            <span className="figures">{missing.map(({ label }) => label).join(', ')}</span>
           </li>
         ))}
       </ul>

@@ -36,6 +36,8 @@ export function UploadPanel({
   useEffect(() => list.know({ points, routePointIds: onRoute }), [list, points, onRoute]);
   useWarningBeforeLeaving(entries.some(isUnderWay));
   const [opened, setOpened] = useState(false);
+  const [onlyOpenWanted, setOnlyOpen] = useState(false);
+  const onlyOpen = onlyOpenWanted && entries.some(needsSomebody);
   const isOpen = isEmpty || opened || entries.length > 0;
 
   if (!isOpen) {
@@ -58,9 +60,9 @@ export function UploadPanel({
       />
       {entries.length > 0 && (
         <>
-          <UploadBar list={list} entries={entries} />
+          <UploadBar list={list} entries={entries} onlyOpen={onlyOpen} onOnlyOpen={setOnlyOpen} />
           <ul aria-label="Files" className="max-h-[36rem] overflow-y-auto border border-hairline">
-            {entries.map((entry) => (
+            {(onlyOpen ? entries.filter(needsSomebody) : entries).map((entry) => (
               <EntryRow
                 key={entry.id}
                 entry={entry}
@@ -77,12 +79,22 @@ export function UploadPanel({
 }
 
 /** The whole of the list: how many, how far, and the buttons that move it. */
-function UploadBar({ list, entries }: { list: UploadList; entries: readonly UploadEntry[] }) {
+function UploadBar({
+  list,
+  entries,
+  onlyOpen,
+  onOnlyOpen,
+}: {
+  list: UploadList;
+  entries: readonly UploadEntry[];
+  onlyOpen: boolean;
+  onOnlyOpen: (onlyOpen: boolean) => void;
+}) {
   const sendable = entries.filter((entry) => maySend(entry) && entry.state !== 'refused');
   const underWay = entries.filter(isUnderWay);
   const done = entries.filter(isDone);
   const reading = entries.filter(({ state }) => state === 'reading');
-  const open = entries.length - sendable.length - underWay.length - done.length - reading.length;
+  const open = entries.filter(needsSomebody).length;
   const parts = [
     reading.length > 0 && `${reading.length} being read`,
     sendable.length > 0 && `${sendable.length} ready`,
@@ -102,6 +114,13 @@ function UploadBar({ list, entries }: { list: UploadList; entries: readonly Uplo
           <span className="figures">{entries.length}</span>{' '}
           {entries.length === 1 ? 'file' : 'files'}: {parts.join(', ')}.
         </p>
+        {open > 0 && open < entries.length && (
+          <Button variant="quiet" aria-pressed={onlyOpen} onClick={() => onOnlyOpen(!onlyOpen)}>
+            {onlyOpen
+              ? 'Show all files'
+              : `Show ${open === 1 ? 'the one' : `the ${open}`} that ${open === 1 ? 'needs' : 'need'} you`}
+          </Button>
+        )}
         {done.length > 0 && (
           <Button variant="quiet" onClick={() => list.clearDone()}>
             Clear what has arrived
@@ -114,7 +133,7 @@ function UploadBar({ list, entries }: { list: UploadList; entries: readonly Uplo
           disabled={sendable.length === 0}
           onClick={() => list.sendAll()}
         >
-          {sendable.length === 1 ? 'Send 1 file' : `Send ${sendable.length} files`}
+          {sendWords(sendable.length)}
         </Button>
       </div>
       {underWay.length > 0 && (
@@ -128,6 +147,16 @@ function UploadBar({ list, entries }: { list: UploadList; entries: readonly Uplo
     </div>
   );
 }
+
+/** Not on its way and not to be sent as it is. */
+const needsSomebody = (entry: UploadEntry) =>
+  !isUnderWay(entry) &&
+  !isDone(entry) &&
+  entry.state !== 'reading' &&
+  (entry.state === 'refused' || !maySend(entry));
+
+const sendWords = (count: number) =>
+  count === 0 ? 'Nothing to send' : count === 1 ? 'Send 1 file' : `Send ${count} files`;
 
 /** Closing the window would break off what is on its way. */
 function useWarningBeforeLeaving(active: boolean): void {
