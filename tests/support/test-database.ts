@@ -20,6 +20,17 @@ export function testDatabaseEnvironment(): Record<string, string> {
   };
 }
 
+/** Makes this worker's database where it is missing. */
+export async function createTestDatabase(): Promise<void> {
+  const options = testDatabaseOptions();
+  const admin = createDataSource({ ...options, database: inject('mariadb').database });
+  await admin.initialize();
+  await admin.query(
+    `CREATE DATABASE IF NOT EXISTS \`${options.database}\` CHARACTER SET utf8mb4 COLLATE utf8mb4_unicode_ci`,
+  );
+  await admin.destroy();
+}
+
 /**
  * Gives a file of tests a real, migrated MariaDB, empty before each test.
  *
@@ -32,14 +43,8 @@ export function useTestDatabase(): () => DataSource {
     return dataSource;
   };
   beforeAll(async () => {
-    const options = testDatabaseOptions();
-    const admin = createDataSource({ ...options, database: inject('mariadb').database });
-    await admin.initialize();
-    await admin.query(
-      `CREATE DATABASE IF NOT EXISTS \`${options.database}\` CHARACTER SET utf8mb4 COLLATE utf8mb4_unicode_ci`,
-    );
-    await admin.destroy();
-    dataSource = createDataSource(options);
+    await createTestDatabase();
+    dataSource = createDataSource(testDatabaseOptions());
     await dataSource.initialize();
     await runMigrations(dataSource);
   });

@@ -100,28 +100,31 @@ export function ReviewPage() {
           </>
         }
       />
-      {data !== undefined && items.length === 0 && screeningId === undefined ? (
-        <EmptyState
-          title={
-            query.show === 'decided' ? 'Nothing has been decided' : 'No flag waits for a decision'
-          }
-          action={
-            <>
-              <ButtonLink to={`/sites/${siteId}/surveys`}>Surveys</ButtonLink>
-              <ButtonLink to={`/sites/${siteId}/findings`}>Findings</ButtonLink>
-            </>
-          }
-        >
-          {isFiltered
-            ? 'Nothing here fits the filters; take one away to see the rest of the queue.'
-            : 'Flags come from surveys: upload the next one, or look at the findings that were made.'}
-        </EmptyState>
-      ) : (
+      {data !== undefined && (
         <ReviewDesk
           siteId={siteId}
           items={items}
           screeningId={screeningId}
           plotSettings={readPlotSettings(search)}
+          empty={
+            <EmptyState
+              title={
+                query.show === 'decided'
+                  ? 'Nothing has been decided'
+                  : 'No flag waits for a decision'
+              }
+              action={
+                <>
+                  <ButtonLink to={`/sites/${siteId}/surveys`}>Surveys</ButtonLink>
+                  <ButtonLink to={`/sites/${siteId}/findings`}>Findings</ButtonLink>
+                </>
+              }
+            >
+              {isFiltered
+                ? 'Nothing here fits the filters; take one away to see the rest of the queue.'
+                : 'Flags come from surveys: upload the next one, or look at the findings that were made.'}
+            </EmptyState>
+          }
           onSelect={(id) => set({ screening: id, page })}
           onPlotSettings={(changes) => set({ ...changes, page })}
         />

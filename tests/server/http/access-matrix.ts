@@ -42,7 +42,6 @@ export const accessMatrix: Readonly<Record<string, Allowed>> = {
   'POST /api/sites/:siteId/surveys': work,
   'GET /api/sites/:siteId/surveys/:surveyId': work,
   'GET /api/sites/:siteId/surveys/:surveyId/progress': work,
-  'DELETE /api/sites/:siteId/surveys/:surveyId/rejected-files/:rejectedFileId': work,
   'POST /api/sites/:siteId/surveys/:surveyId/waveforms': work,
   'DELETE /api/sites/:siteId/surveys/:surveyId/rejected-files/:rejectedFileId': work,
   'GET /api/sites/:siteId/waveforms/:waveformId': all,

@@ -1,5 +1,5 @@
 import { useQueryClient } from '@tanstack/react-query';
-import { useEffect, useState } from 'react';
+import { useEffect, useState, type ReactNode } from 'react';
 import type { ReviewDecision, ReviewQueueItem } from '#shared/contracts/review.ts';
 import { Button } from '#src/components/button.tsx';
 import { KeyHint } from '#src/components/key-hint.tsx';
@@ -20,6 +20,8 @@ export interface ReviewDeskProps {
   /** The screening the address names; else the first of the queue is open. */
   screeningId: number | undefined;
   plotSettings: PlotSettingsValue;
+  /** Shown when nothing waits; the last decision stays beside it, to be undone. */
+  empty: ReactNode;
   onSelect: (screeningId: number | undefined) => void;
   onPlotSettings: (changes: { axis?: string; scale?: string }) => void;
 }
@@ -70,20 +72,32 @@ export function ReviewDesk(props: ReviewDeskProps) {
     keysOn,
   );
 
+  const lastDecision = (
+    <div role="status" className="text-sm">
+      {decisions.last !== null && (
+        <p className="flex items-center justify-between gap-2 border-l border-rule pl-2">
+          <span>{decisions.last.text}</span>
+          <Button size="small" aria-keyshortcuts="u" onClick={decisions.undoLast}>
+            Undo {keysOn && <KeyHint keys={['u']} />}
+          </Button>
+        </p>
+      )}
+    </div>
+  );
+  // The same component as before the last flag went, so that its undo is not lost with it.
+  if (items.length === 0 && screeningId === undefined) {
+    return (
+      <div className="flex flex-col gap-4">
+        <div className="max-w-xl">{lastDecision}</div>
+        {props.empty}
+      </div>
+    );
+  }
   return (
     <div className="grid items-start gap-4 xl:grid-cols-[17.5rem_minmax(0,1fr)]">
       <div className="flex flex-col gap-2">
         <QueueList items={items} selectedId={screeningId} onSelect={onSelect} />
-        <div role="status" className="text-sm">
-          {decisions.last !== null && (
-            <p className="flex items-center justify-between gap-2 border-l border-rule pl-2">
-              <span>{decisions.last.text}</span>
-              <Button size="small" aria-keyshortcuts="u" onClick={decisions.undoLast}>
-                Undo {keysOn && <KeyHint keys={['u']} />}
-              </Button>
-            </p>
-          )}
-        </div>
+        {lastDecision}
         <Button size="small" variant="quiet" icon="help" onClick={() => setShowsKeys(true)}>
           Keys
         </Button>
