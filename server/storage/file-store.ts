@@ -66,10 +66,17 @@ export class FileStore {
 
   /** Samples of a channel in the recorded unit; NaN marks a gap. */
   async readSamples(contentHash: string, channelIndex: number): Promise<Float64Array<ArrayBuffer>> {
-    const bytes = await readFile(this.samplesPath(contentHash, channelIndex));
-    const copy = new Float64Array(bytes.byteLength / 8);
-    new Uint8Array(copy.buffer).set(bytes);
-    return copy;
+    const file = await open(this.samplesPath(contentHash, channelIndex), 'r');
+    try {
+      const { size } = await file.stat();
+      // Read into its own memory, which a worker can then be given without a copy.
+      const samples = new Float64Array(size / 8);
+      const { bytesRead } = await file.read(new Uint8Array(samples.buffer));
+      if (bytesRead !== size) throw new Error(`The samples of ${contentHash} end early.`);
+      return samples;
+    } finally {
+      await file.close();
+    }
   }
 
   async readBytes(path: string): Promise<Buffer | null> {

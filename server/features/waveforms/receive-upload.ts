@@ -42,7 +42,7 @@ export async function receiveUpload(
   await new Promise<void>((resolve, reject) => {
     takeFile(req, res, (error: unknown) => {
       if (!error) resolve();
-      else reject(uploadFault(error));
+      else reject(uploadFault(error, fileMaxBytes));
     });
   });
   const { file } = req;
@@ -65,7 +65,15 @@ export async function receiveUpload(
   }
 }
 
-function uploadFault(error: unknown): unknown {
+function uploadFault(error: unknown, fileMaxBytes: number): unknown {
+  if (error instanceof multer.MulterError && error.code === 'LIMIT_FILE_SIZE') {
+    const most = Math.floor(fileMaxBytes / 1_000_000);
+    return new AppError(
+      'too_large',
+      `The file is larger than ${most} MB, the most that is taken. Send a shorter recording.`,
+      { cause: error },
+    );
+  }
   const known = diskFullInWords(error);
   if (known instanceof AppError || known instanceof multer.MulterError) return known;
   return new AppError(

@@ -3,7 +3,8 @@ import type { Screening } from '#server/db/entities/screening.entity.ts';
 import { pointLabel } from '#shared/contracts/measuring-point.ts';
 import type { ScreeningResponse } from '#shared/contracts/screening.ts';
 import type { WaveformListItem, WaveformResponse } from '#shared/contracts/waveform.ts';
-import { orderCellsOf } from '#shared/contracts/order-cells.ts';
+import { orderCellsOf, type OrderCell } from '#shared/contracts/order-cells.ts';
+import type { OrderLine } from '#shared/signal/screening-types.ts';
 import type { WaveformRow } from './waveform.repository.ts';
 
 /** The point and machine of a row; every query of this feature joins them. */
@@ -16,6 +17,12 @@ export function placeOf({ waveform }: WaveformRow) {
   }
   return { point, position, machine };
 }
+
+/** The cells a small strip draws (a third, two thirds and the halves), as finely as it can show them. */
+const stripCells = (orders: readonly OrderLine[]): OrderCell[] =>
+  orderCellsOf(orders)
+    .filter(({ order }) => order < 1 || Math.abs(order * 2 - Math.round(order * 2)) < 1e-3)
+    .map((cell) => ({ ...cell, prominenceDb: Math.round(cell.prominenceDb * 10) / 10 }));
 
 export function presentListItem(row: WaveformRow): WaveformListItem {
   const { waveform, screening } = row;
@@ -43,7 +50,7 @@ export function presentListItem(row: WaveformRow): WaveformListItem {
     score: screening?.score ?? null,
     decision: screening?.decision ?? null,
     speedRpm: screening?.speedHz == null ? null : screening.speedHz * 60,
-    orders: screening === null ? [] : orderCellsOf(screening.result.orders),
+    orders: screening === null ? [] : stripCells(screening.orders),
   };
 }
 

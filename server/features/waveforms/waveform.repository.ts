@@ -4,13 +4,20 @@ import { RejectedFile } from '#server/db/entities/rejected-file.entity.ts';
 import { Screening } from '#server/db/entities/screening.entity.ts';
 import { Survey } from '#server/db/entities/survey.entity.ts';
 import { Waveform } from '#server/db/entities/waveform.entity.ts';
+import type { OrderLine } from '#shared/signal/screening-types.ts';
 
 export type NewWaveform = Omit<Waveform, 'id' | 'survey' | 'measuringPoint'>;
+
+/** What lists show of a screening: of its result, some twenty kilobytes, the order table alone. */
+export type ScreeningSummary = Pick<
+  Screening,
+  'id' | 'verdict' | 'score' | 'speedHz' | 'decision'
+> & { orders: readonly OrderLine[] };
 
 /** A waveform with its point, machine, survey and the screening of its latest run. */
 export interface WaveformRow {
   waveform: Waveform;
-  screening: Screening | null;
+  screening: ScreeningSummary | null;
 }
 
 /** Waveforms, and the files that could not be read. */
@@ -31,16 +38,28 @@ export class WaveformRepository {
       .innerJoinAndSelect('position.machine', 'machine');
   }
 
-  /** The screenings of the latest run; without their results unless asked for. */
-  private async screeningsOf(waveforms: Waveform[]): Promise<Map<number, Screening>> {
+  /** The screenings of the latest run. */
+  private async screeningsOf(waveforms: Waveform[]): Promise<Map<number, ScreeningSummary>> {
     if (waveforms.length === 0) return new Map();
-    const screenings = await this.db
-      .createQueryBuilder(Screening, 'screening')
-      .innerJoin('screening.waveform', 'waveform')
-      .where('screening.waveformId IN (:...ids)', { ids: waveforms.map((one) => one.id) })
-      .andWhere('screening.run = waveform.screeningRun')
-      .getMany();
-    return new Map(screenings.map((screening) => [screening.waveformId, screening]));
+    const places = waveforms.map(() => '?').join(', ');
+    const rows = await this.db.query<
+      (Omit<ScreeningSummary, 'orders'> & { waveformId: number; orders: string })[]
+    >(
+      `SELECT screening.id, screening.waveform_id AS waveformId, screening.verdict,
+              screening.score, screening.speed_hz AS speedHz, screening.decision,
+              CAST(JSON_EXTRACT(screening.result, '$.orders') AS CHAR) AS orders
+         FROM screening
+         JOIN waveform ON waveform.id = screening.waveform_id
+          AND waveform.screening_run = screening.run
+        WHERE screening.waveform_id IN (${places})`,
+      waveforms.map((waveform) => waveform.id),
+    );
+    return new Map(
+      rows.map(({ waveformId, orders, ...row }) => [
+        waveformId,
+        { ...row, orders: JSON.parse(orders) as OrderLine[] },
+      ]),
+    );
   }
 
   async find(siteId: number, id: number): Promise<WaveformRow | null> {
