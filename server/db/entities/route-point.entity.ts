@@ -15,7 +15,7 @@ export class RoutePoint {
   @Column({ type: 'int' })
   sequence: number;
 
-  @ManyToOne(() => Route, (route) => route.points, { onDelete: 'CASCADE' })
+  @ManyToOne(() => Route, { onDelete: 'CASCADE' })
   @JoinColumn({ name: 'route_id' })
   route?: Relation<Route>;
 

@@ -4,11 +4,9 @@ import {
   Index,
   JoinColumn,
   ManyToOne,
-  OneToMany,
   PrimaryGeneratedColumn,
   type Relation,
 } from 'typeorm';
-import { RoutePoint } from './route-point.entity.ts';
 import { Site } from './site.entity.ts';
 
 /** An ordered list of measuring points, and what to record there. */
@@ -36,7 +34,4 @@ export class Route {
   @ManyToOne(() => Site, { onDelete: 'RESTRICT' })
   @JoinColumn({ name: 'site_id' })
   site?: Relation<Site>;
-
-  @OneToMany(() => RoutePoint, (point) => point.route)
-  points?: Relation<RoutePoint[]>;
 }

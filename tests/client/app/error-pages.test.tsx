@@ -1,4 +1,4 @@
-import { cleanup, render, screen } from '@testing-library/react';
+import { cleanup, render, screen, waitFor } from '@testing-library/react';
 import { createMemoryRouter, RouterProvider } from 'react-router-dom';
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import { NotFoundPage, RouteErrorPage } from '#src/app/error-pages.tsx';
@@ -33,7 +33,8 @@ describe('a page that can’t be shown', () => {
     const words = await show(new ApiError('not_found', 'No such machine.', { status: 404 }));
     expect(words).toMatch(/^This page is not here\./u);
     screen.getByRole('link', { name: 'Start page' });
-    expect(document.title).toBe('This page is not here. – Fretline');
+    // The title follows a moment after the page.
+    await waitFor(() => expect(document.title).toBe('This page is not here. – Fretline'));
   });
 
   it('says what is safe when the server is away, and offers to load again', async () => {
