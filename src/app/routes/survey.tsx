@@ -26,7 +26,7 @@ export const surveyLoader =
   };
 
 export function SurveyPage() {
-  const { siteId } = useSite();
+  const { siteId, session } = useSite();
   const surveyId = Number(useParams().surveyId);
   const { data: survey } = useSuspenseQuery(surveyQuery(siteId, surveyId));
   const { data: choices } = useSuspenseQuery(pointChoicesQuery(siteId));
@@ -60,6 +60,7 @@ export function SurveyPage() {
         <ScreeningProgress siteId={siteId} surveyId={surveyId} counts={counts} />
         {survey.can.upload && (
           <UploadPanel
+            userId={session.userId}
             siteId={siteId}
             surveyId={surveyId}
             points={choices.points}

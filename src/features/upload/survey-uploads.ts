@@ -10,9 +10,17 @@ const refreshMs = 1000;
 
 const lists = new Map<string, UploadList>();
 
-/** The one list of files of a survey, for as long as the window is open. */
-export function uploadListOf(client: QueryClient, siteId: number, surveyId: number): UploadList {
-  const key = `${siteId}/${surveyId}`;
+/**
+ * The one list of files of a survey, for as long as the window is open. It is the person's own: who
+ * signs in after another at the same window starts with an empty one.
+ */
+export function uploadListOf(
+  client: QueryClient,
+  userId: number,
+  siteId: number,
+  surveyId: number,
+): UploadList {
+  const key = `${userId}/${siteId}/${surveyId}`;
   const known = lists.get(key);
   if (known !== undefined) return known;
   const list = new UploadList({

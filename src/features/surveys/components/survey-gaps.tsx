@@ -20,9 +20,9 @@ export function MissingPoints({ points }: { points: SurveyResponse['missingPoint
   }
   return (
     <Panel title={title}>
-      <ul className="grid gap-x-8 text-sm lg:grid-cols-2">
+      <ul className="gap-x-8 text-sm lg:columns-2">
         {[...machines].map(([machineId, missing]) => (
-          <li key={machineId} className="border-b border-hairline py-1">
+          <li key={machineId} className="break-inside-avoid border-b border-hairline py-1">
             <span className="text-ink-soft">{missing[0]?.machineName}:</span>{' '}
             <span className="figures">{missing.map(({ label }) => label).join(', ')}</span>
           </li>
@@ -55,9 +55,9 @@ export function RejectedFiles({
         {files.map((file) => (
           <li
             key={file.id}
-            className="flex flex-wrap items-center gap-x-4 border-b border-hairline py-1 text-sm"
+            className="flex items-center gap-x-4 border-b border-hairline py-1 text-sm"
           >
-            <span className="figures font-medium">{file.fileName}</span>
+            <span className="figures max-w-64 shrink-0 font-medium break-all">{file.fileName}</span>
             <span className="grow">
               {file.errorLine !== null && (
                 <span className="figures font-medium">Line {file.errorLine}: </span>

@@ -15,12 +15,14 @@ import { PointOptions } from './point-input.tsx';
 
 /** Takes the files of a survey: dropped, matched to their points, looked at, sent. */
 export function UploadPanel({
+  userId,
   siteId,
   surveyId,
   points,
   routePointIds,
   isEmpty,
 }: {
+  userId: number;
   siteId: number;
   surveyId: number;
   /** Every point of the site; those of the route are preferred. */
@@ -30,7 +32,7 @@ export function UploadPanel({
   isEmpty: boolean;
 }) {
   const client = useQueryClient();
-  const list = uploadListOf(client, siteId, surveyId);
+  const list = uploadListOf(client, userId, siteId, surveyId);
   const entries = useUploadEntries(list);
   const onRoute = useMemo(() => new Set(routePointIds), [routePointIds]);
   useEffect(() => list.know({ points, routePointIds: onRoute }), [list, points, onRoute]);
