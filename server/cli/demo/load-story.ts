@@ -114,7 +114,7 @@ export async function monitorFan(
   clock.set('2026-10-28T10:40:00Z');
   await services.findings.decide(lead, finding.id, {
     action: 'monitor',
-    reason: 'Can run until the stop of 12 January; measure every month and check the bolts then.',
+    reason: 'Can run until the stop of 12 January; measure every month and open the bearing then.',
     version: finding.version,
   });
 }
