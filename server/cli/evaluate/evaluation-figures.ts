@@ -31,6 +31,8 @@ export interface MethodFigures {
   retakesByFault: ShareRow[];
   calibration: { from: number; to: number; cases: number; meanScore: number; looseShare: number }[];
   histogram: { from: number; to: number; loose: number; notLoose: number }[];
+  /** What other limits of the score would find and call falsely. */
+  operatingPoints: { limit: number; found: ShareRow; falseAlarms: ShareRow }[];
   /** Real recordings by source; empty where none were given. */
   realRecordings: { source: string; loose: boolean; flagged: ShareRow; retakes: number }[];
 }

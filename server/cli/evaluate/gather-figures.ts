@@ -7,6 +7,7 @@ import {
   falseAlarmsOfFaults,
   histogram,
   looseCases,
+  operatingPoints,
   percentile,
   predictiveValue,
   recall,
@@ -146,6 +147,7 @@ export function gatherFigures(
     retakesByFault: asked.byFault,
     calibration: bins,
     histogram: histogram(cases),
+    operatingPoints: operatingPoints(cases),
     realRecordings: bySource(real, flagged),
   };
 }

@@ -187,6 +187,22 @@ function scoreBins(outcomes: readonly CaseOutcome[]) {
   });
 }
 
+const limitsTried = [0.2, 0.3, 0.4, 0.5, 0.6, 0.7, 0.8, 0.9, 0.95, 0.98];
+
+/** What other limits of the score would find and call falsely. */
+export function operatingPoints(outcomes: readonly CaseOutcome[]) {
+  const loose = looseCases(outcomes);
+  const tight = tightCases(outcomes);
+  return limitsTried.map((limit) => {
+    const reaches = ({ score }: CaseOutcome) => score !== null && score >= limit;
+    return {
+      limit,
+      found: share('found', loose, reaches),
+      falseAlarms: share('false alarms', tight, reaches),
+    };
+  });
+}
+
 /** Share of the flags that are right where `prevalence` of the points are loose (Bayes). */
 export function predictiveValue(recallShare: number, falseShare: number, prevalence: number) {
   const right = recallShare * prevalence;

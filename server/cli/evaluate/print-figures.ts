@@ -37,6 +37,13 @@ export function printFigures(figures: MethodFigures): string {
         String(bin.notLoose).padStart(6),
     ),
   ];
+  lines.push('', 'Limits of the score: looseness found, false alarms');
+  for (const { limit, found, falseAlarms } of figures.operatingPoints) {
+    const shares = [found, falseAlarms].map(({ hits, cases }) =>
+      `${((100 * hits) / Math.max(1, cases)).toFixed(2)} %`.padStart(9),
+    );
+    lines.push(`  ${limit.toFixed(2)} ${shares.join(' ')}`);
+  }
   if (figures.realRecordings.length > 0) {
     lines.push('', 'Real recordings flagged, by source');
     for (const { source, loose, flagged, retakes } of figures.realRecordings) {
