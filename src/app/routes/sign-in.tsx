@@ -8,6 +8,7 @@ import {
   type LoaderFunctionArgs,
 } from 'react-router-dom';
 import { SignInForm } from '#src/features/session/components/sign-in-form.tsx';
+import { WhatItDoes } from '#src/features/session/components/what-it-does.tsx';
 import { productQuery, sessionQuery } from '#src/features/session/api/session.ts';
 import { homeOf } from '../home.ts';
 import { Shell } from '../shell.tsx';
@@ -43,6 +44,7 @@ export function SignInPage() {
             recorded bearing fit can explain it, gets the seat inspected, and checks at the next
             survey that it is gone.
           </p>
+          <WhatItDoes />
           <p className="max-w-prose border-l border-rule pl-3 text-sm text-ink-soft">
             A screening is a hint for a qualified analyst. It is not a diagnosis and not a release
             to run.
