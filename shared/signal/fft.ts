@@ -2,19 +2,35 @@ import FFT from 'fft.js';
 
 /** Plans by length; a route's records have a few lengths only. */
 const plans = new Map<number, FFT>();
+const chirps = new Map<number, Chirp>();
 const plansMax = 12;
+const chirpsMax = 4;
 
-function planOf(length: number): FFT {
-  const known = plans.get(length);
-  if (known !== undefined) return known;
-  if (plans.size >= plansMax) plans.clear();
-  const plan = new FFT(length);
-  plans.set(length, plan);
-  return plan;
+/** Bluestein's chirp of a length and the transform of its convolution kernel. */
+interface Chirp {
+  cos: Float64Array;
+  sin: Float64Array;
+  kernel: ArrayLike<number>;
+  convolutionLength: number;
 }
 
+function kept<T>(store: Map<number, T>, most: number, length: number, make: () => T): T {
+  const known = store.get(length);
+  if (known !== undefined) return known;
+  if (store.size >= most) store.clear();
+  const made = make();
+  store.set(length, made);
+  return made;
+}
+
+const planOf = (length: number) => kept(plans, plansMax, length, () => new FFT(length));
 const isPowerOfTwo = (n: number) => n > 1 && (n & (n - 1)) === 0;
-const nextPowerOfTwo = (n: number) => 2 ** Math.ceil(Math.log2(Math.max(2, n)));
+
+/** The smallest power of two that is at least `n`, and at least 2. */
+export const nextPowerOfTwo = (n: number) => 2 ** Math.ceil(Math.log2(Math.max(2, n)));
+
+/** fft.js takes any indexed numbers; its types only know plain arrays. */
+const asNumbers = (values: Float64Array) => values as unknown as number[];
 
 /**
  * Discrete Fourier transform of real samples of any length: fft.js for powers of two, Bluestein's
@@ -28,53 +44,81 @@ export function realFft(samples: Float64Array): Float64Array {
   const n = samples.length;
   if (n < 2) return Float64Array.of(samples[0] ?? 0, 0);
   const half = Math.floor(n / 2) + 1;
-  if (isPowerOfTwo(n)) {
-    const plan = planOf(n);
-    const out = plan.createComplexArray();
-    plan.realTransform(out, samples);
-    return Float64Array.from(out.slice(0, 2 * half));
+  if (!isPowerOfTwo(n)) return bluestein(samples, half);
+  const out = new Float64Array(2 * n);
+  if (n >= 4) planOf(n).realTransform(asNumbers(out), asNumbers(samples));
+  else out.set([(samples[0] ?? 0) + (samples[1] ?? 0), 0, (samples[0] ?? 0) - (samples[1] ?? 0)]);
+  return out.subarray(0, 2 * half);
+}
+
+/**
+ * Real signal of `length` points from its lower lines: the sum over k of 2 Re(line[k] e^{2πi jk/length}),
+ * line 0 left out. Any duration can so be sampled anew on a power of two, band-limited by the lines
+ * that are given.
+ *
+ * @param lines - interleaved, lines 0 … K with K < length / 2
+ * @param length - a power of two, at least 4
+ * @throws {RangeError} for another length
+ */
+export function realFromLines(lines: Float64Array, length: number): Float64Array {
+  if (!isPowerOfTwo(length) || length < 4) throw new RangeError('The length must be a power of two.');
+  const full = new Float64Array(2 * length);
+  const count = Math.min(lines.length >> 1, length >> 1);
+  // Only the upper half-plane is filled: the real part of the inverse is half the wanted signal.
+  for (let k = 1; k < count; k += 1) {
+    full[2 * k] = lines[2 * k] ?? 0;
+    full[2 * k + 1] = lines[2 * k + 1] ?? 0;
   }
-  return bluestein(samples, half);
+  const out = new Float64Array(2 * length);
+  planOf(length).inverseTransform(asNumbers(out), asNumbers(full));
+  const signal = new Float64Array(length);
+  // fft.js divides its inverse by the length.
+  for (let j = 0; j < length; j += 1) signal[j] = 2 * length * (out[2 * j] ?? 0);
+  return signal;
+}
+
+function chirpOf(n: number): Chirp {
+  const m = nextPowerOfTwo(2 * n);
+  const cos = new Float64Array(n);
+  const sin = new Float64Array(n);
+  const b = new Float64Array(2 * m);
+  for (let k = 0; k < n; k += 1) {
+    // k² modulo 2n keeps the angle small and exact for long records.
+    const angle = (Math.PI * ((k * k) % (2 * n))) / n;
+    const [c, s] = [Math.cos(angle), Math.sin(angle)];
+    cos[k] = c;
+    sin[k] = s;
+    for (const at of k === 0 ? [0] : [k, m - k]) {
+      b[2 * at] = c;
+      b[2 * at + 1] = s;
+    }
+  }
+  const kernel = new Float64Array(2 * m);
+  planOf(m).transform(asNumbers(kernel), asNumbers(b));
+  return { cos, sin, kernel, convolutionLength: m };
 }
 
 function bluestein(samples: Float64Array, half: number): Float64Array {
   const n = samples.length;
-  const m = nextPowerOfTwo(2 * n);
+  const { cos, sin, kernel, convolutionLength: m } = kept(chirps, chirpsMax, n, () => chirpOf(n));
   const plan = planOf(m);
-  const cos = new Float64Array(n);
-  const sin = new Float64Array(n);
-  for (let k = 0; k < n; k += 1) {
-    // k² modulo 2n keeps the angle small and exact for long records.
-    const angle = (Math.PI * ((k * k) % (2 * n))) / n;
-    cos[k] = Math.cos(angle);
-    sin[k] = Math.sin(angle);
-  }
   const a = new Float64Array(2 * m);
-  const b = new Float64Array(2 * m);
   for (let k = 0; k < n; k += 1) {
     const x = samples[k] ?? 0;
     a[2 * k] = x * (cos[k] ?? 0);
     a[2 * k + 1] = -x * (sin[k] ?? 0);
-    for (const at of k === 0 ? [0] : [k, m - k]) {
-      b[2 * at] = cos[k] ?? 0;
-      b[2 * at + 1] = sin[k] ?? 0;
-    }
   }
-  const fa = plan.createComplexArray();
-  const fb = plan.createComplexArray();
-  plan.transform(fa, a as unknown as number[]);
-  plan.transform(fb, b as unknown as number[]);
+  const fa = new Float64Array(2 * m);
+  plan.transform(asNumbers(fa), asNumbers(a));
   for (let k = 0; k < 2 * m; k += 2) {
-    const re = (fa[k] ?? 0) * (fb[k] ?? 0) - (fa[k + 1] ?? 0) * (fb[k + 1] ?? 0);
-    const im = (fa[k] ?? 0) * (fb[k + 1] ?? 0) + (fa[k + 1] ?? 0) * (fb[k] ?? 0);
-    fa[k] = re;
-    fa[k + 1] = im;
+    const [aRe, aIm, bRe, bIm] = [fa[k] ?? 0, fa[k + 1] ?? 0, kernel[k] ?? 0, kernel[k + 1] ?? 0];
+    fa[k] = aRe * bRe - aIm * bIm;
+    fa[k + 1] = aRe * bIm + aIm * bRe;
   }
-  const product = plan.createComplexArray();
-  plan.inverseTransform(product, fa);
+  plan.inverseTransform(asNumbers(a), asNumbers(fa));
   const out = new Float64Array(2 * half);
   for (let k = 0; k < half; k += 1) {
-    const [re, im, c, s] = [product[2 * k] ?? 0, product[2 * k + 1] ?? 0, cos[k] ?? 0, sin[k] ?? 0];
+    const [re, im, c, s] = [a[2 * k] ?? 0, a[2 * k + 1] ?? 0, cos[k] ?? 0, sin[k] ?? 0];
     out[2 * k] = re * c + im * s;
     out[2 * k + 1] = im * c - re * s;
   }
