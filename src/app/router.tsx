@@ -2,6 +2,7 @@ import type { QueryClient } from '@tanstack/react-query';
 import { createBrowserRouter, Outlet, ScrollRestoration, type RouteObject } from 'react-router-dom';
 import { NotFoundPage, RouteErrorPage } from './error-pages.tsx';
 import { OfflineNotice } from './offline-notice.tsx';
+import { Shell } from './shell.tsx';
 import { routes } from './routes.tsx';
 
 function Root() {
@@ -19,10 +20,24 @@ export function routeTree(queryClient: QueryClient): RouteObject[] {
   return [
     {
       element: <Root />,
-      errorElement: <RouteErrorPage />,
+      errorElement: (
+        <Shell homeTo="/">
+          <RouteErrorPage />
+        </Shell>
+      ),
       // Shown for the moment before the first route's module and data are there.
       hydrateFallbackElement: <></>,
-      children: [...routes(queryClient), { path: '*', element: <NotFoundPage /> }],
+      children: [
+        ...routes(queryClient),
+        {
+          path: '*',
+          element: (
+            <Shell homeTo="/">
+              <NotFoundPage />
+            </Shell>
+          ),
+        },
+      ],
     },
   ];
 }

@@ -1,5 +1,6 @@
 import type { QueryClient } from '@tanstack/react-query';
 import type { RouteObject } from 'react-router-dom';
+import { RouteErrorPage } from './error-pages.tsx';
 import { lazyPage } from './lazy-page.ts';
 
 type Load = Parameters<typeof lazyPage>[1];
@@ -73,4 +74,9 @@ const pages: Readonly<Record<string, Load>> = {
 };
 
 export const sitePages = (queryClient: QueryClient): RouteObject[] =>
-  Object.entries(pages).map(([path, load]) => ({ path, lazy: lazyPage(queryClient, load) }));
+  Object.entries(pages).map(([path, load]) => ({
+    path,
+    lazy: lazyPage(queryClient, load),
+    // A page that fails leaves the frame and its navigation standing.
+    ErrorBoundary: RouteErrorPage,
+  }));

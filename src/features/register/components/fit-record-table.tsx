@@ -36,10 +36,16 @@ const columns: DataTableColumn<FitRecordResponse>[] = [
 ];
 
 /** The fit records of a position's two seats, newest first. */
-export function FitRecordTable({ records }: { records: readonly FitRecordResponse[] }) {
+export function FitRecordTable({
+  positionCode,
+  records,
+}: {
+  positionCode: string;
+  records: readonly FitRecordResponse[];
+}) {
   return (
     <DataTable
-      label="Fit records"
+      label={`Fit records of ${positionCode}`}
       columns={columns}
       rows={records}
       rowId={(row) => row.id}

@@ -166,7 +166,9 @@ export function PositionPanel({
           ]}
         />
         {seats}
-        {position.kind === 'rolling' && <FitRecordTable records={position.fitRecords} />}
+        {position.kind === 'rolling' && (
+          <FitRecordTable positionCode={position.code} records={position.fitRecords} />
+        )}
       </div>
       <Dialog
         wide

@@ -1,0 +1,77 @@
+import { readFileSync } from 'node:fs';
+import { createRequire } from 'node:module';
+import type { AxeResults } from 'axe-core';
+import type { Page } from 'playwright-core';
+import { describe, expect, it } from 'vitest';
+import { openPage, useBrowser } from './support/browser.ts';
+import { useDemoProduct } from './support/demo-product.ts';
+
+const product = useDemoProduct();
+const browser = useBrowser();
+const axeSource = readFileSync(
+  createRequire(import.meta.url).resolve('axe-core/axe.min.js'),
+  'utf8',
+);
+
+/** Every page of each role that a plant without surveys has; the address below the site. */
+const pages: Readonly<Record<string, readonly string[]>> = {
+  Analyst: ['/surveys', '/surveys/new', '/review', '/findings', '/inspections', '/routes/1'],
+  'Reliability lead': [
+    '/machines',
+    '/machines/new',
+    '/machines/1',
+    '/machines/1/edit',
+    '/routes/new',
+  ],
+  'Asset owner': ['/inspections', '/machines', '/findings'],
+};
+
+/** Axe runs from its source: the page's security policy lets no script tag in. */
+async function violationsOf(page: Page): Promise<string[]> {
+  await page.evaluate(axeSource);
+  const results = await page.evaluate(() =>
+    (window as unknown as { axe: { run: () => Promise<AxeResults> } }).axe.run(),
+  );
+  return results.violations.flatMap(({ id, nodes }) =>
+    nodes.map((node) => `${id}: ${node.target.join(' ')}`),
+  );
+}
+
+describe.each(['light', 'dark'] as const)('every page, %s', (theme) => {
+  it('has nothing that axe objects to, signed out', async () => {
+    const { page, close } = await openPage(browser(), { theme });
+    for (const address of ['/sign-in', '/demo/mailbox', '/no-such-page']) {
+      await page.goto(product().url + address);
+      await page.getByRole('heading', { level: 1 }).first().waitFor();
+      expect(await violationsOf(page), address).toEqual([]);
+    }
+    await close();
+  });
+
+  it.each(Object.keys(pages))('has nothing that axe objects to: %s', async (role) => {
+    const { url, account } = product();
+    const { page, close } = await openPage(browser(), { theme });
+    const { email, password } = account(role);
+    await page.context().request.post(`${url}/api/session`, { data: { email, password } });
+    await page.goto(url);
+    await page.waitForURL(/\/sites\/\d+\//);
+    const site = /\/sites\/\d+/.exec(page.url())?.[0] ?? '';
+    for (const address of pages[role] ?? []) {
+      // Ids of the demo's machines and routes begin where the database lets them.
+      await page.goto(url + site + (await realAddress(page, url + site, address)));
+      await page.getByRole('heading', { level: 1 }).first().waitFor();
+      expect(await violationsOf(page), address).toEqual([]);
+    }
+    await close();
+  });
+});
+
+/** Puts the first machine's or route's own id into an address that names number 1. */
+async function realAddress(page: Page, site: string, address: string): Promise<string> {
+  const match = /^\/(machines|routes)\/1(\/|$)/.exec(address);
+  if (match === null) return address;
+  const api = site.replace('/sites/', '/api/sites/');
+  const answer = await page.context().request.get(`${api}/${match[1]}`);
+  const { items } = (await answer.json()) as { items: { id: number }[] };
+  return address.replace('/1', `/${items[0]?.id ?? 0}`);
+}
