@@ -65,6 +65,11 @@ describe('matching a file to a measuring point', () => {
     },
   );
 
+  it('takes the longest name that fits, not one within it', () => {
+    const two = [...points, point(7, '2-P-101', 'M-DE', 'horizontal')];
+    expect(matchPoint({ filePath: '2-P-101_M-DE_H.csv' }, two, route)?.pointId).toBe(7);
+  });
+
   it('reads position and direction in the file name where a comment line names the asset', () => {
     expect(match({ asset: 'P-102', filePath: 'M-DE_H.csv' })?.pointId).toBe(4);
   });

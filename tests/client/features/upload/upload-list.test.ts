@@ -179,7 +179,7 @@ describe('the list of files of a survey', () => {
   it('holds a file that is dropped twice once', async () => {
     const { list, states } = aList();
     await list.add([aFile('P-101_M-DE_H.csv')]);
-    await list.add([aFile('P-101_M-DE_H.csv'), aFile('P-101_P-DE_H.csv')]);
+    await list.add(['M-DE', 'P-DE', 'P-DE'].map((code) => aFile(`P-101_${code}_H.csv`)));
     expect(states()).toEqual(['ready', 'ready']);
   });
 

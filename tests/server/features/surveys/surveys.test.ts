@@ -65,10 +65,9 @@ describe('POST …/surveys', () => {
   });
 
   it('refuses the route of another site', async () => {
-    const other = await buildSite(dataSource());
-    const route = await buildRoute(dataSource(), other, []).catch(() => null);
+    const other = await buildPlant(dataSource());
     const res = await make(plant.analyst, {
-      routeId: route?.id ?? 999_999,
+      routeId: other.survey.routeId,
       surveyedOn: '2026-11-09',
     });
     expect(res.status).toBe(422);
@@ -120,6 +119,7 @@ describe('GET …/surveys/:surveyId', () => {
       dataSource(),
       await buildPosition(dataSource(), plant.machine),
     );
+    await buildRoute(dataSource(), plant.site, [elsewhere]);
     await buildWaveform(dataSource(), {
       surveyId: plant.survey.id,
       measuringPointId: elsewhere.id,
