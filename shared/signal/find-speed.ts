@@ -3,6 +3,11 @@ import { peakNear, type SpectrumView } from './spectrum-view.ts';
 
 const defaultTolerance = 0.03;
 const ordersUsed = 12;
+const orderWeights = Array.from(
+  { length: ordersUsed + 1 },
+  (_, order) => 1 / Math.sqrt(order || 1),
+);
+const scanStepsMax = 40_000;
 /** A line's say in the family is capped: one strong line of something else must not decide. */
 const sayMax = Math.log2(1 + 300);
 /** A refined line further than this from its place belongs to something else, lines. */
@@ -11,33 +16,38 @@ const outlierLines = 0.6;
 const lineErrorAtUnity = 0.55;
 const supportRatio = 12;
 
-const say = (view: SpectrumView, frequencyHz: number): number => {
-  const at = Math.round(frequencyHz / view.stepHz);
-  let best = 0;
-  for (let i = at - 1; i <= at + 1; i += 1) best = Math.max(best, view.ratio[i] ?? 0);
-  return Math.min(sayMax, Math.log2(1 + best));
-};
+/** Every line's say: the logarithm of the strongest of three lines over the floor, capped. */
+function sayings(view: SpectrumView): Float64Array {
+  const { ratio } = view;
+  const say = new Float64Array(ratio.length);
+  for (let i = 1; i < ratio.length - 1; i += 1) {
+    const best = Math.max(ratio[i - 1] ?? 0, ratio[i] ?? 0, ratio[i + 1] ?? 0);
+    say[i] = Math.min(sayMax, Math.log2(1 + best));
+  }
+  return say;
+}
 
 /** How well a speed explains the spectrum's lines: the family of its orders, early ones more. */
-function familyScore(view: SpectrumView, speedHz: number): number {
+function familyScore(say: Float64Array, view: SpectrumView, speedHz: number): number {
   let score = 0;
-  for (let order = 1; order <= ordersUsed; order += 1) {
-    if (order * speedHz > view.usableHz) break;
-    score += say(view, order * speedHz) / Math.sqrt(order);
+  const orders = Math.min(ordersUsed, Math.floor(view.usableHz / speedHz));
+  for (let order = 1; order <= orders; order += 1) {
+    score += (say[Math.round((order * speedHz) / view.stepHz)] ?? 0) * (orderWeights[order] ?? 0);
   }
   return score;
 }
 
 function bestIn(
+  say: Float64Array,
   view: SpectrumView,
   fromHz: number,
   toHz: number,
 ): { speedHz: number; score: number } {
-  // Fine enough for the tenth order to stay within half a line.
-  const step = Math.max(view.stepHz / 16, (toHz - fromHz) / 20_000);
+  // Fine enough for the tenth order to stay within a line.
+  const step = Math.max(view.stepHz / 12, (toHz - fromHz) / scanStepsMax);
   let best = { speedHz: (fromHz + toHz) / 2, score: -1 };
   for (let speedHz = fromHz; speedHz <= toHz; speedHz += step) {
-    const score = familyScore(view, speedHz);
+    const score = familyScore(say, view, speedHz);
     if (score > best.score) best = { speedHz, score };
   }
   return best;
@@ -88,7 +98,8 @@ export function findSpeed(
   if (range === null) {
     return { speedHz: null, source: 'none', intervalHz: null, alternatives: [], supported: false };
   }
-  const rough = bestIn(view, range[0], range[1]);
+  const say = sayings(view);
+  const rough = bestIn(say, view, range[0], range[1]);
   const { speedHz, spread, support } = refine(view, rough.speedHz);
   const inside = speedHz >= range[0] * 0.999 && speedHz <= range[1] * 1.001;
   const supported = support > 0 && inside;
@@ -109,7 +120,7 @@ export function findSpeed(
     speedHz,
     source: told === null ? 'estimated' : 'refined',
     intervalHz: [speedHz - 1.96 * spread, speedHz + 1.96 * spread],
-    alternatives: alternativesOf(view, speedHz, machine, told === null),
+    alternatives: alternativesOf(say, view, speedHz, machine, told === null),
     supported,
   };
 }
@@ -140,6 +151,7 @@ function rangeOf(
 }
 
 function alternativesOf(
+  say: Float64Array,
   view: SpectrumView,
   speedHz: number,
   machine: MachineFacts | undefined,
@@ -147,12 +159,12 @@ function alternativesOf(
 ): SpeedReading['alternatives'] {
   const found: { speedHz: number; reason: string }[] = [];
   if (estimated) {
-    const own = familyScore(view, speedHz);
+    const own = familyScore(say, view, speedHz);
     for (const [factor, words] of [
       [0.5, 'half'],
       [2, 'double'],
     ] as const) {
-      if (familyScore(view, speedHz * factor) > 0.85 * own) {
+      if (familyScore(say, view, speedHz * factor) > 0.85 * own) {
         found.push({
           speedHz: speedHz * factor,
           reason: `${words} the speed explains the lines about as well`,

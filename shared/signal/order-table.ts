@@ -52,7 +52,7 @@ export function orderTable(
       frequencyHz: peak.frequencyHz,
       velocityMmPerSRms: peak.amplitudePeak * velocityRmsFactor(view.quantity, peak.frequencyHz),
       amplitudePeak: peak.amplitudePeak / factor,
-      floorMmPerSRms: view.floor[peak.index] ?? 0,
+      floorMmPerSRms: Math.sqrt(1 / Math.max(ratio, 1e-12)) * (view.velocity[peak.index] ?? 0),
       prominenceDb: 10 * Math.log10(Math.max(ratio, 1e-12)),
       pNoise: chanceOfLine(ratio, 2 * Math.round(reach) + 1),
       explainedBy: explained?.words ?? null,

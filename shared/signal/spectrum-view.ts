@@ -1,20 +1,20 @@
 import type { Quantity } from '../quantities/quantity.ts';
-import { amplitudeSpectrum } from './amplitude-spectrum.ts';
+import { realFft } from './fft.ts';
 import { noiseFloor } from './noise-floor.ts';
-import { velocityLines } from './velocity-lines.ts';
+import { velocityRmsFactor } from './velocity-lines.ts';
 
 /** The whole-record spectrum as the steps after it look at it. */
 export interface SpectrumView {
   stepHz: number;
   quantity: Quantity;
-  /** Peak, m/s², mm/s or µm. */
+  /** Fourier lines without a window, interleaved, scaled to peak amplitudes. */
+  lines: Float64Array;
+  /** Through a Hann window: peak, m/s², mm/s or µm. */
   amplitudePeak: Float64Array;
-  /** mm/s rms a line. */
+  /** mm/s rms a line, through the Hann window. */
   velocity: Float64Array;
   /** Power over the local noise floor, a line. */
   ratio: Float64Array;
-  /** mm/s rms of the noise in a line. */
-  floor: Float64Array;
   /** Highest frequency that is not touched by the anti-alias filter, Hz. */
   usableHz: number;
 }
@@ -22,9 +22,13 @@ export interface SpectrumView {
 /** Recorders keep a guard band: the usable band is the sampling rate over 2.56 (common practice, no source). */
 const guardFactor = 2.56;
 const floorHalfWidthMin = 24;
+const floorHalfWidthMax = 400;
 
 /**
- * @param values - prepared samples, m/s², mm/s or µm
+ * One transform of the whole record, seen with and without a window: a periodic Hann window in time
+ * is the convolution of the lines with −¼, ½, −¼, so the second transform is saved.
+ *
+ * @param values - prepared samples, m/s², mm/s or µm; at least 4
  * @param orderHz - about one shaft speed: the floor is taken over a window of that width
  */
 export function viewSpectrum(
@@ -33,26 +37,57 @@ export function viewSpectrum(
   quantity: Quantity,
   orderHz: number,
 ): SpectrumView {
-  const { stepHz, amplitudePeak } = amplitudeSpectrum(values, sampleRateHz);
-  const velocity = velocityLines(amplitudePeak, stepHz, quantity);
-  const power = amplitudePeak.map((value) => value * value);
+  const n = values.length;
+  const stepHz = sampleRateHz / n;
+  const lines = realFft(values);
+  const count = lines.length >> 1;
+  const scale = 2 / n;
+  for (let i = 0; i < lines.length; i += 1) lines[i] = (lines[i] ?? 0) * scale;
+  const amplitudePeak = hannAmplitudes(lines, n);
+  const velocity = new Float64Array(count);
+  const power = new Float64Array(count);
+  for (let k = 0; k < count; k += 1) {
+    const peak = amplitudePeak[k] ?? 0;
+    velocity[k] = peak * velocityRmsFactor(quantity, k * stepHz);
+    power[k] = peak * peak;
+  }
   const halfWidth = Math.max(
     floorHalfWidthMin,
-    Math.min(400, Math.round((0.6 * orderHz) / stepHz)),
+    Math.min(floorHalfWidthMax, Math.round((0.6 * orderHz) / stepHz)),
   );
   const noise = noiseFloor(power, halfWidth);
+  const ratio = new Float64Array(count);
+  for (let k = 0; k < count; k += 1) ratio[k] = (power[k] ?? 0) / (noise[k] ?? 1);
   return {
     stepHz,
     quantity,
+    lines,
     amplitudePeak,
     velocity,
-    ratio: power.map((value, i) => value / (noise[i] ?? 1)),
-    floor: velocity.map((value, i) => {
-      const peak = amplitudePeak[i] ?? 0;
-      return peak > 0 ? (value / peak) * Math.sqrt(noise[i] ?? 0) : 0;
-    }),
+    ratio,
     usableHz: sampleRateHz / guardFactor,
   };
+}
+
+/** Amplitudes through a Hann window, coherent gain corrected, from the lines without one. */
+function hannAmplitudes(lines: Float64Array, n: number): Float64Array {
+  const count = lines.length >> 1;
+  const nyquist = n % 2 === 0 ? count - 1 : -1;
+  const amplitudes = new Float64Array(count);
+  for (let k = 0; k < count; k += 1) {
+    // Beyond both ends the spectrum of a real signal is its own mirror image.
+    const below = k === 0 ? 1 : k - 1;
+    const mirrorBelow = k === 0 ? -1 : 1;
+    const above = k < count - 1 ? k + 1 : nyquist === k ? k - 1 : k;
+    const mirrorAbove = k < count - 1 ? 1 : -1;
+    const re = (lines[2 * k] ?? 0) - 0.5 * ((lines[2 * below] ?? 0) + (lines[2 * above] ?? 0));
+    const im =
+      (lines[2 * k + 1] ?? 0) -
+      0.5 * (mirrorBelow * (lines[2 * below + 1] ?? 0) + mirrorAbove * (lines[2 * above + 1] ?? 0));
+    const single = k === 0 || k === nyquist ? 0.5 : 1;
+    amplitudes[k] = single * Math.sqrt(re * re + im * im);
+  }
+  return amplitudes;
 }
 
 /**
