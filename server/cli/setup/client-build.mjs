@@ -2,7 +2,7 @@ import { createHash } from 'node:crypto';
 import { existsSync, readdirSync, readFileSync, statSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { run } from './run.mjs';
-import { SetupError } from './say.mjs';
+import { outputInWords, SetupError } from './say.mjs';
 
 const sources = [
   'src',
@@ -45,7 +45,7 @@ export async function ensureClient(projectDirectory) {
   const { code, output: said } = await run(process.execPath, [vite, 'build'], {
     cwd: projectDirectory,
   });
-  if (code !== 0) throw new SetupError(`The client could not be built:\n${said.trim()}`);
+  if (code !== 0) throw new SetupError(outputInWords('The client could not be built.', said));
   writeFileSync(stamp, wanted);
   return 'built';
 }

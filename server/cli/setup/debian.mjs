@@ -1,7 +1,7 @@
 import { existsSync } from 'node:fs';
 import { join } from 'node:path';
 import { run } from './run.mjs';
-import { SetupError } from './say.mjs';
+import { outputInWords, SetupError } from './say.mjs';
 
 /** Servers lie in sbin, which an ordinary user's PATH often lacks. */
 const folders = () => [
@@ -30,9 +30,10 @@ export function findProgram(program) {
  *
  * @param {string} program
  * @param {readonly string[]} packages
+ * @param {(words: string) => void} note
  * @returns {Promise<string>} its full path
  */
-export async function ensureProgram(program, packages) {
+export async function ensureProgram(program, packages, note) {
   const there = findProgram(program);
   if (there !== null) return there;
   const byHand = `Install it by hand: apt-get install ${packages.join(' ')}`;
@@ -47,33 +48,43 @@ export async function ensureProgram(program, packages) {
   }
   /** @param {readonly string[]} args */
   const apt = (args) => {
-    const environment = ['DEBIAN_FRONTEND=noninteractive'];
-    const command = ['env', ...environment, 'apt-get', '-y', '-q', ...args];
+    const command = ['env', 'DEBIAN_FRONTEND=noninteractive', 'apt-get', '-y', '-q', ...args];
     const [first = 'env', ...rest] = asRoot ? command : ['sudo', '-n', ...command];
-    return run(first, rest);
+    // Half an installation would be in the way of every later one.
+    return run(first, rest, { mayEnd: false });
   };
+  note(`installing ${packages.join(' and ')} with apt-get`);
   const install = ['install', '--no-install-recommends', ...packages];
   let result = await apt(install);
   if (result.code !== 0) {
     // A fresh machine has no package lists, an old one stale ones.
-    await apt(['update']);
+    const { code, output } = await apt(['update']);
     result = await apt(install);
+    if (result.code !== 0 && code !== 0) result.output += output;
   }
   const path = findProgram(program);
   if (result.code !== 0 || path === null) {
     throw new SetupError(
-      `${packages.join(', ')} could not be installed. ${byHand}\napt-get said:\n${result.output.trim().split('\n').slice(-8).join('\n')}`,
+      outputInWords(
+        `${packages.join(' and ')} could not be installed. ${byHand} (as root).`,
+        result.output,
+      ),
     );
   }
   return path;
 }
 
+const silent = () => undefined;
+
 /** The server alone: this package brings no daemon of its own that would be left running. */
-export const ensureMariadb = async () => {
-  const server = await ensureProgram('mariadbd', ['mariadb-server-core', 'mariadb-client-core']);
-  const maker = await ensureProgram('mariadb-install-db', ['mariadb-server-core']);
-  await ensureProgram('my_print_defaults', ['mariadb-client-core']);
+export const ensureMariadb = async (/** @type {(words: string) => void} */ note = silent) => {
+  const packages = ['mariadb-server-core', 'mariadb-client-core'];
+  const server = await ensureProgram('mariadbd', packages, note);
+  const maker = await ensureProgram('mariadb-install-db', packages, note);
+  // mariadb-install-db calls it, and Debian keeps it in the client's package.
+  await ensureProgram('my_print_defaults', packages, note);
   return { server, maker };
 };
 
-export const ensureChromium = () => ensureProgram('chromium', ['chromium']);
+export const ensureChromium = (/** @type {(words: string) => void} */ note = silent) =>
+  ensureProgram('chromium', ['chromium'], note);

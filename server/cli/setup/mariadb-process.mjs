@@ -1,19 +1,20 @@
 import { spawn } from 'node:child_process';
 import {
-  existsSync,
-  openSync,
   closeSync,
+  existsSync,
+  mkdirSync,
+  openSync,
   readFileSync,
   rmSync,
   writeFileSync,
-  mkdirSync,
 } from 'node:fs';
 import { connect } from 'node:net';
-import { join } from 'node:path';
 import { userInfo } from 'node:os';
+import { join } from 'node:path';
 import { setTimeout as sleep } from 'node:timers/promises';
+import { endProcess } from './processes.mjs';
 import { run } from './run.mjs';
-import { SetupError } from './say.mjs';
+import { outputInWords, SetupError } from './say.mjs';
 
 /**
  * @typedef {object} Programs
@@ -22,10 +23,11 @@ import { SetupError } from './say.mjs';
  */
 
 const readyWithinMs = 60_000;
+const shutDownWithinMs = 60_000;
 
 const asRoot = () => process.getuid?.() === 0;
 
-/** Whether a server answers on the socket or port. @param {{ path: string } | { port: number, host: string }} where */
+/** Whether a server answers on the socket or port. @param {{ path: string } | { port: number, host: string }} where @returns {Promise<boolean>} */
 export function answers(where) {
   return new Promise((resolve) => {
     const socket = connect(where);
@@ -45,6 +47,7 @@ export function answers(where) {
  *
  * @param {Programs} programs
  * @param {{ directory: string, database: string, user: string, password: string, extra?: string[], mayCreate?: boolean }} options
+ * @returns {Promise<'made' | 'there already'>}
  */
 export async function makeDataDirectory(programs, options) {
   const { directory, database, user, password } = options;
@@ -58,6 +61,7 @@ export async function makeDataDirectory(programs, options) {
   writeFileSync(
     boot,
     [
+      // The grants are not loaded while MariaDB is being made: without this, no user can be.
       'FLUSH PRIVILEGES;',
       `CREATE DATABASE \`${database}\` CHARACTER SET utf8mb4 COLLATE utf8mb4_unicode_ci;`,
       ...['localhost', '127.0.0.1'].flatMap((host) => [
@@ -78,9 +82,7 @@ export async function makeDataDirectory(programs, options) {
   ]);
   rmSync(boot, { force: true });
   if (code !== 0) {
-    throw new SetupError(
-      `MariaDB's data directory could not be made in ${data}:\n${output.trim().split('\n').slice(-8).join('\n')}`,
-    );
+    throw new SetupError(outputInWords(`MariaDB could not be set up in ${data}.`, output));
   }
   writeFileSync(mark, new Date().toISOString());
   return 'made';
@@ -90,13 +92,15 @@ export async function makeDataDirectory(programs, options) {
  * Starts mariadbd and waits until it answers on its socket.
  *
  * @param {Programs} programs
- * @param {{ directory: string, socketPath: string, extra: string[] }} options
+ * @param {{ directory: string, socketPath: string, extra: string[], onSpawn?: (pid: number) => void }} options
+ *   `onSpawn` hears of the process at once, so that a Ctrl-C in the next moment still ends it
  * @returns {Promise<{ pid: number }>}
  */
-export async function startServer(programs, { directory, socketPath, extra }) {
+export async function startServer(programs, { directory, socketPath, extra, onSpawn }) {
   const log = join(directory, 'mariadb.log');
   rmSync(socketPath, { force: true });
-  const output = openSync(log, 'a');
+  // Only what this start says tells of this start's fault.
+  const output = openSync(log, 'w', 0o600);
   const child = spawn(
     programs.server,
     [
@@ -116,54 +120,51 @@ export async function startServer(programs, { directory, socketPath, extra }) {
     { stdio: ['ignore', output, output], detached: true },
   );
   closeSync(output);
+  const pid = child.pid ?? 0;
   let ended = false;
   child.on('exit', () => (ended = true));
   child.on('error', () => (ended = true));
   child.unref();
+  if (pid > 0) onSpawn?.(pid);
   const until = Date.now() + readyWithinMs;
   while (!(await answers({ path: socketPath }))) {
     if (ended || Date.now() > until) {
-      const said = existsSync(log) ? readFileSync(log, 'utf8').trim().split('\n') : [];
-      throw new SetupError(serverFault(said, directory));
+      if (!ended) await stopServer(pid);
+      throw new SetupError(
+        serverFault(existsSync(log) ? readFileSync(log, 'utf8') : '', directory),
+      );
     }
-    await sleep(50);
+    await sleep(25);
   }
-  return { pid: child.pid ?? 0 };
+  return { pid };
 }
 
-/** @param {string[]} lines @param {string} directory */
-function serverFault(lines, directory) {
-  const tail = lines.slice(-60).join('\n');
-  const errors = lines
-    .filter((line) => line.includes('[ERROR]'))
-    .slice(-6)
-    .join('\n');
-  if (/No space left|Errcode: 28/i.test(tail)) {
-    return 'MariaDB could not start: the disk is full. Free some space and start again.';
-  }
-  if (/Address already in use/i.test(tail)) {
+/** @param {string} log @param {string} directory */
+function serverFault(log, directory) {
+  if (/Address already in use/i.test(log)) {
     return 'MariaDB could not start: its port was taken in the same moment. Start again.';
   }
-  if (/corrupt|Unable to (lock|open).*ibdata1|Cannot find checkpoint/i.test(tail)) {
-    return `MariaDB could not start: its files in ${directory} are damaged or in use.\n${errors}\nIf no other process uses them, put the folder .data back from a backup, or move it away: the next start makes a new, empty one with the demo.`;
+  const errors = log.split('\n').filter((line) => line.includes('[ERROR]'));
+  const told = errors.length > 0 ? errors.slice(-8).join('\n') : log;
+  if (
+    /corrupt|missing|ibdata1|checkpoint|redo log|crash|signal \d+|Table 'mysql|doesn't exist/i.test(
+      told,
+    ) &&
+    !/space|Errcode: (13|28|30)/i.test(told)
+  ) {
+    return [
+      `MariaDB could not start: its files in ${directory} are damaged.`,
+      `Put the folder .data back from a backup; or move it away (mv .data .data-damaged): the next start makes a new one with the demo plant. MariaDB's own words are in ${join(directory, 'mariadb.log')}.`,
+    ].join('\n');
   }
-  return `MariaDB could not start. It said:\n${errors || tail}`;
+  return outputInWords('MariaDB could not start.', told);
 }
 
-/** @param {number} pid */
-export function isRunning(pid) {
-  try {
-    process.kill(pid, 0);
-    return true;
-  } catch {
-    return false;
-  }
-}
-
-/** Asks the server to shut down and waits for it. @param {number} pid */
+/** Asks the server to shut down and waits for it: a clean end needs no recovery at the next start. @param {number} pid */
 export async function stopServer(pid) {
-  if (pid <= 0 || !isRunning(pid)) return;
-  process.kill(pid, 'SIGTERM');
-  const until = Date.now() + 60_000;
-  while (isRunning(pid) && Date.now() < until) await sleep(50);
+  if (!(await endProcess(pid, shutDownWithinMs))) {
+    throw new SetupError(
+      `MariaDB (process ${pid}) did not stop within a minute. It may still be writing: look at it before you end it by force.`,
+    );
+  }
 }

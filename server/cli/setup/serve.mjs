@@ -1,167 +1,176 @@
-import { spawn } from 'node:child_process';
-import { existsSync, mkdirSync, readFileSync } from 'node:fs';
+import { existsSync, mkdirSync, readFileSync, statfsSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { ensureClient } from './client-build.mjs';
+import { createEndings } from './endings.mjs';
+import { checkGivenDatabase, givenDatabaseUrl } from './given-database.mjs';
+import { checkPort, endLeftServer, portOf, rememberServer, takePlace } from './one-start.mjs';
 import { checkNode, ensurePackages } from './packages.mjs';
-import { checkPort, takePlace } from './one-start.mjs';
 import { installationSecrets, startPrivateMariadb } from './private-mariadb.mjs';
 import { run } from './run.mjs';
-import { faultInWords, SetupError, step } from './say.mjs';
+import { faultInWords, outputInWords, SetupError, step } from './say.mjs';
+import { startServerProcess, stopChild } from './server-process.mjs';
 
-const defaultPort = 4173;
+const usualPort = 4173;
+const megabyte = 1024 * 1024;
+/** MariaDB's own files, the packages and the demo take about 600 MB; a start of what is there little. */
+const roomMegabytes = { first: 800, later: 50 };
+
+/**
+ * @typedef {object} Mode
+ * @property {boolean} buildClient
+ * @property {readonly string[]} serverArguments
+ * @property {NodeJS.ProcessEnv} [environment] what holds where the person says nothing else
+ * @property {(serverAddress: string) => { child: import('node:child_process').ChildProcess, address: string }} [beside]
+ *   a process beside the server, and the address people use then
+ */
 
 /**
  * Does everything between a fresh clone and a running product, and ends all of it on a signal.
  *
  * @param {string} projectDirectory
- * @param {{ buildClient: boolean, serverArguments: readonly string[], beside?: (port: number) => import('node:child_process').ChildProcess, address?: string }} mode
+ * @param {Mode} mode
  */
 export async function serve(projectDirectory, mode) {
-  /** @type {(() => Promise<void> | void)[]} what must be undone, last first */
-  const endings = [];
-  let ending = false;
-  const end = async (/** @type {number} */ code) => {
-    if (ending) return;
-    ending = true;
-    for (const undo of endings.reverse()) {
-      try {
-        await undo();
-      } catch (error) {
-        process.stderr.write(`${faultInWords(error)}\n`);
-      }
-    }
-    process.exit(code);
-  };
-  for (const signal of /** @type {const} */ (['SIGINT', 'SIGTERM', 'SIGHUP'])) {
-    process.on(signal, () => {
-      if (!ending) process.stdout.write('\nStopping …\n');
-      void end(0);
-    });
-  }
+  const endings = createEndings('Stopping …');
   try {
     checkNode();
-    const host = process.env.HOST ?? '127.0.0.1';
-    const port = Number(process.env.PORT ?? defaultPort);
-    const data = join(projectDirectory, '.data');
-    endings.push(takePlace(data));
-    await checkPort(host, port);
-    await step('npm packages', () => ensurePackages(projectDirectory), String);
-    const secrets = installationSecrets(data);
-    let databaseUrl = process.env.DATABASE_URL;
-    if (!databaseUrl) {
-      const database = await step(
-        'MariaDB',
-        () => startPrivateMariadb(data),
-        ({ how }) => how,
-      );
-      endings.push(database.stop);
-      databaseUrl = database.url;
-    }
-    const files = process.env.DATA_DIR ?? join(data, 'files');
-    mkdirSync(files, { recursive: true, mode: 0o700 });
-    const demo = process.env.DEMO ?? '1';
-    const environment = {
-      LOG_LEVEL: 'warn',
-      ...process.env,
-      DATABASE_URL: databaseUrl,
-      DATA_DIR: files,
-      HOST: host,
-      PORT: String(port),
-      AUTH_SECRET: process.env.AUTH_SECRET ?? secrets.authSecret,
-      DEMO: demo,
-    };
+    const environment = { ...mode.environment, ...(await prepare(projectDirectory, endings)) };
     if (mode.buildClient) await step('Client', () => ensureClient(projectDirectory), String);
-    if (demo === '1' || demo === 'true') {
-      await step('Demo data', () => loadDemo(projectDirectory, environment), String);
-    }
-    if (ending) return;
-    await startServer(projectDirectory, mode, environment, endings, end);
+    const demo = ['1', 'true'].includes(environment.DEMO);
+    if (demo) await step('Demo data', () => loadDemo(projectDirectory, environment), String);
+    if (endings.begun()) return;
+    const serverAddress = await step(
+      'Server',
+      () => startServer(projectDirectory, mode, environment, endings),
+      () => 'listening',
+    );
+    let address = serverAddress;
     if (mode.beside) {
-      const beside = mode.beside(port);
-      endings.push(() => stopChild(beside));
+      const beside = mode.beside(serverAddress);
+      endings.add(() => stopChild(beside.child));
+      beside.child.once('exit', (code) => {
+        if (endings.begun()) return;
+        process.stderr.write(`The client's development server ended by itself (${code}).\n`);
+        void endings.end(1);
+      });
+      address = beside.address;
     }
-    printAddress(mode.address ?? `http://${host}:${port}`, files, demo);
+    printAddress(address, environment.DATA_DIR, demo);
   } catch (error) {
-    if (ending) return;
+    if (endings.begun()) return;
     process.stderr.write(`\n${faultInWords(error)}\n`);
-    await end(1);
+    await endings.end(1);
   }
 }
 
-/** @param {string} projectDirectory @param {NodeJS.ProcessEnv} environment */
+/**
+ * Packages, database and secrets: all that must be there before the product's own code can run.
+ *
+ * @param {string} projectDirectory
+ * @param {import('./endings.mjs').Endings} endings
+ */
+async function prepare(projectDirectory, endings) {
+  const { env } = process;
+  const host = env.HOST || '127.0.0.1';
+  const port = portOf(env.PORT, usualPort);
+  const data = join(projectDirectory, '.data');
+  endings.add(takePlace(data));
+  if (await endLeftServer(projectDirectory, data)) {
+    process.stdout.write('Ended the server of an earlier start that was killed.\n');
+  }
+  await checkPort(host, port);
+  checkRoom(projectDirectory, existsSync(join(data, 'files')) ? 'later' : 'first');
+  await step('npm packages', (note) => ensurePackages(projectDirectory, note), String);
+
+  const secrets = installationSecrets(data);
+  const files = env.DATA_DIR || join(data, 'files');
+  const given = givenDatabaseUrl(env);
+  const url =
+    given ??
+    (
+      await step(
+        'MariaDB',
+        (note) => startPrivateMariadb(data, { note, onStop: endings.add }),
+        ({ how }) => how,
+      )
+    ).url;
+  if (given !== null) {
+    await step('MariaDB', () => checkGivenDatabase(given, env.DATABASE_SOCKET), String);
+  }
+  mkdirSync(files, { recursive: true, mode: 0o700 });
+  return {
+    LOG_LEVEL: 'warn',
+    ...env,
+    DATABASE_URL: url,
+    ...(env.AUTH_SECRET || env.AUTH_SECRET_FILE ? {} : { AUTH_SECRET: secrets.authSecret }),
+    DATA_DIR: files,
+    HOST: host,
+    PORT: String(port),
+    DEMO: env.DEMO || '1',
+  };
+}
+
+/** A disk that fills up half-way through says so in a hundred ways; this one is plain. @param {string} folder @param {'first' | 'later'} start */
+function checkRoom(folder, start) {
+  const { bavail, bsize } = statfsSync(folder);
+  const freeMegabytes = Math.floor((bavail * bsize) / megabyte);
+  if (freeMegabytes >= roomMegabytes[start]) return;
+  throw new SetupError(
+    `The disk is full: ${freeMegabytes} MB are free where ${folder} lies, and a start needs ${roomMegabytes[start]} MB. Free some space, then start again.`,
+  );
+}
+
+/**
+ * Fills an empty database with the demo. Looking whether it is empty takes a second or two, so a
+ * mark beside the private database remembers it, and goes when that database goes.
+ *
+ * @param {string} projectDirectory
+ * @param {NodeJS.ProcessEnv} environment
+ */
 async function loadDemo(projectDirectory, environment) {
+  const own = givenDatabaseUrl(process.env) === null;
+  const mark = own ? join(projectDirectory, '.data', 'mariadb', 'demo') : null;
+  if (mark !== null && existsSync(mark)) return 'there already';
   const { code, output } = await run(
     process.execPath,
     ['--import', 'tsx', 'server/cli/load-demo.ts'],
     { cwd: projectDirectory, env: environment },
   );
-  if (code !== 0) throw new SetupError(`The demo data could not be loaded:\n${output.trim()}`);
+  if (code !== 0) throw new SetupError(outputInWords('The demo could not be loaded.', output));
+  if (mark !== null) writeFileSync(mark, '');
   return output.trim().split('\n').at(-1) ?? '';
 }
 
 /**
  * @param {string} projectDirectory
- * @param {{ serverArguments: readonly string[] }} mode
+ * @param {Mode} mode
  * @param {NodeJS.ProcessEnv} environment
- * @param {(() => Promise<void> | void)[]} endings
- * @param {(code: number) => Promise<void>} end
- * @returns {Promise<void>} when it listens
+ * @param {import('./endings.mjs').Endings} endings
+ * @returns {Promise<string>} its address
  */
-function startServer(projectDirectory, mode, environment, endings, end) {
-  return step('Server', () => {
-    // Detached: a Ctrl-C of the terminal reaches this process alone, which then ends the rest in order.
-    const server = spawn(process.execPath, [...mode.serverArguments, 'server/main.ts'], {
-      cwd: projectDirectory,
-      env: environment,
-      stdio: ['ignore', 'pipe', 'inherit'],
-      detached: true,
-    });
-    endings.push(() => stopChild(server));
-    return new Promise((resolve, reject) => {
-      let listening = false;
-      server.stdout.on('data', (chunk) => {
-        const text = String(chunk);
-        if (!listening && text.includes('listening on')) {
-          listening = true;
-          resolve(undefined);
-          return;
-        }
-        if (!text.startsWith('listening on')) process.stdout.write(text);
-      });
-      server.on('error', reject);
-      server.on('exit', (code) => {
-        if (!listening) reject(new SetupError('The server could not start; see above.'));
-        else {
-          process.stderr.write(`The server ended by itself (${code}). Start again: npm start\n`);
-          void end(1);
-        }
-      });
-    });
+function startServer(projectDirectory, mode, environment, endings) {
+  return startServerProcess(projectDirectory, {
+    args: mode.serverArguments,
+    env: environment,
+    onSpawn: (child) => {
+      endings.add(rememberServer(join(projectDirectory, '.data'), child.pid ?? 0));
+      endings.add(() => stopChild(child));
+    },
+    onCrash: (how) => {
+      if (endings.begun()) return;
+      process.stderr.write(
+        `The server ended by itself (${how}); its last words are above. Stopping the rest. Start again with npm start; what was being screened goes on then.\n`,
+      );
+      void endings.end(1);
+    },
   });
 }
 
-/** @param {import('node:child_process').ChildProcess} child @returns {Promise<void>} */
-function stopChild(child) {
-  return new Promise((resolve) => {
-    if (child.exitCode !== null || child.signalCode !== null) {
-      resolve();
-      return;
-    }
-    child.removeAllListeners('exit');
-    const impatient = setTimeout(() => child.kill('SIGKILL'), 20_000);
-    child.once('exit', () => {
-      clearTimeout(impatient);
-      resolve();
-    });
-    child.kill('SIGTERM');
-  });
-}
-
-/** @param {string} address @param {string} files @param {string} demo */
+/** @param {string} address @param {string} files @param {boolean} demo */
 function printAddress(address, files, demo) {
   process.stdout.write(`\nFretline is at ${address}   (Ctrl-C ends it)\n`);
   const accounts = join(files, 'demo-accounts.json');
-  if ((demo !== '1' && demo !== 'true') || !existsSync(accounts)) return;
+  if (!demo || !existsSync(accounts)) return;
   process.stdout.write('\nDemo accounts:\n');
   for (const { role, email, password } of JSON.parse(readFileSync(accounts, 'utf8'))) {
     process.stdout.write(`  ${role.padEnd(17)} ${email.padEnd(30)} ${password}\n`);
