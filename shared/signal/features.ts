@@ -1,86 +1,164 @@
 import type { AveragedRevolution } from './averaged-revolution.ts';
 import { standsOut } from './harmonic-run.ts';
+import { medianInPlace } from './noise-floor.ts';
+import type { OrderSpectrum } from './order-spectra.ts';
 import type { HarmonicRun, OrderLine, Truncation } from './screening-types.ts';
-import type { SpectrumView } from './spectrum-view.ts';
+import { momentsOf } from './turn-shape.ts';
 
 /** The numbers that the score is made of; each also stands in a sentence of the evidence. */
 export interface ScreeningFeatures {
   /** Whole orders 2–10 that stand out and nothing else explains. */
   openOrdersOut: number;
+  /** Whole orders 11–20 that stand out and nothing else explains. */
+  highOrdersOut: number;
   /** Of orders 4–10, those at least a tenth as strong as the strongest order. */
   strongHighOrders: number;
+  /** Longest run of whole orders that stand out, of the first ten. */
+  runLength: number;
   /** Velocity of orders 2–10 together over that of 1×. */
   runOverFirst: number;
-  /** Half and third orders that stand out. */
+  /** Level of orders 2 and 3, and of 4 to 10, over that of 1× to 3×, dB; −60 at the least. */
+  lowOrdersDb: number;
+  highOverLowDb: number;
+  /** Median of how far orders 2–10 stand out, dB. */
+  medianProminenceDb: number;
+  /** Half and third orders that stand out, and the level of the strongest against the strongest order, dB. */
   fractions: number;
+  halfDb: number;
+  thirdDb: number;
   /** Share of the velocity power up to order 20 that is synchronous with the shaft, 0–1. */
   synchronousShare: number;
-  /** Strongest line that belongs to no whole or half order, against the strongest order, dB. */
+  /** Power of orders 2–10 that keeps its phase to the shaft, over all at these orders, 0–1. */
+  steadiness: number;
+  /** Strongest line that belongs to no whole, half or third order, against the strongest order, dB. */
   strangerDb: number;
-  /** Velocity of all orders together, mm/s rms. */
+  /** Noise between the orders up to the tenth against the strongest order, a line, dB. */
+  floorDb: number;
+  /** Velocity of all orders together, and of orders 2 to 10, mm/s rms. */
   familyMmPerS: number;
+  runMmPerS: number;
   /** 1 where the averaged revolution is flattened by the machine. */
   truncated: number;
+  /** Skewness (size) and excess kurtosis of the averaged turn in displacement and acceleration. */
+  displacementSkew: number;
+  displacementKurtosis: number;
+  accelerationSkew: number;
+  accelerationKurtosis: number;
+  /** Share of the orders' power that known sources explain, 0–1. */
+  explainedShare: number;
 }
 
 const strongShare = 0.1;
+const leastDb = -60;
 const isWhole = (order: number) => Number.isInteger(order);
-const rms = (lines: readonly OrderLine[]) =>
-  Math.sqrt(lines.reduce((sum, line) => sum + line.velocityMmPerSRms ** 2, 0));
+const isHalf = (order: number) => Number.isInteger(order * 2) && !isWhole(order);
+const powerOf = (lines: readonly OrderLine[]) =>
+  lines.reduce((sum, line) => sum + line.velocityMmPerSRms ** 2, 0);
+const db = (power: number, over: number, least = leastDb) =>
+  over > 0 && power > 0 ? Math.max(least, 10 * Math.log10(power / over)) : least;
+
+/** What the steps before have found, for the features to be taken from. */
+export interface FeatureSources {
+  spectrum: OrderSpectrum;
+  usableOrders: number;
+  orders: readonly OrderLine[];
+  run: HarmonicRun;
+  truncation: Truncation;
+  revolution: AveragedRevolution;
+}
 
 /** Takes the features from what the steps before have found. */
-export function extractFeatures(
-  view: SpectrumView,
-  speedHz: number,
-  orders: readonly OrderLine[],
-  run: HarmonicRun,
-  truncation: Truncation,
-  revolution: AveragedRevolution,
-): ScreeningFeatures {
+export function featuresOf(sources: FeatureSources): ScreeningFeatures {
+  const { spectrum, orders, run, truncation, revolution } = sources;
   const whole = orders.filter((line) => isWhole(line.order));
   const strongest = Math.max(1e-9, ...whole.map((line) => line.velocityMmPerSRms));
-  const open = whole.filter((line) => line.explainedBy === null && standsOut(line, strongest));
-  const run2to10 = open.filter((line) => line.order >= 2 && line.order <= 10);
+  const within = (from: number, to: number) => (line: OrderLine) =>
+    line.order >= from && line.order <= to;
+  const counts = (line: OrderLine) => line.explainedBy === null && standsOut(line, strongest);
+  const open = whole.filter(counts);
+  const run2to10 = open.filter(within(2, 10));
+  const fractionsOf = (test: (order: number) => boolean) =>
+    orders.filter((line) => test(line.order) && line.order < 10 && counts(line));
+  const halves = fractionsOf(isHalf);
+  const thirds = fractionsOf((order) => !isWhole(order) && !isHalf(order));
+  const top = (lines: readonly OrderLine[]) =>
+    lines.reduce((most, line) => Math.max(most, line.velocityMmPerSRms ** 2), 0);
   const first = whole.find((line) => line.order === 1)?.velocityMmPerSRms ?? 0;
+  const low = powerOf(whole.filter(within(1, 3)));
+  const prominences = Float64Array.from(whole.filter(within(2, 10)), (line) => line.prominenceDb);
+  const displacement = momentsOf(revolution.displacementUm);
+  const acceleration = momentsOf(revolution.accelerationMPerS2);
+  const all = powerOf(whole);
   return {
     openOrdersOut: run2to10.length,
+    highOrdersOut: open.filter(within(11, 20)).length,
     strongHighOrders: run2to10.filter(
       (line) => line.order >= 4 && line.velocityMmPerSRms >= strongShare * strongest,
     ).length,
-    runOverFirst: Math.min(20, rms(run2to10) / Math.max(first, 1e-3 * strongest)),
-    fractions: run.halfOrderCount + run.thirdOrderCount,
-    synchronousShare: synchronousShare(view, speedHz, revolution),
-    strangerDb: strangerDb(view, speedHz, strongest),
-    familyMmPerS: rms(whole),
+    runLength: Math.min(10, run.length),
+    runOverFirst: Math.min(20, Math.sqrt(powerOf(run2to10)) / Math.max(first, 1e-3 * strongest)),
+    lowOrdersDb: db(powerOf(run2to10.filter(within(2, 3))), first ** 2),
+    highOverLowDb: db(powerOf(run2to10.filter(within(4, 10))), low),
+    medianProminenceDb: Math.max(-10, medianInPlace(prominences, prominences.length)),
+    fractions: halves.length + thirds.length,
+    halfDb: db(top(halves), strongest ** 2),
+    thirdDb: db(top(thirds), strongest ** 2),
+    ...sharesOf(spectrum, sources.usableOrders),
+    strangerDb: strangerDb(spectrum, sources.usableOrders, strongest),
+    floorDb: floorDb(whole.filter(within(1, 10)), strongest),
+    familyMmPerS: Math.sqrt(all),
+    runMmPerS: Math.sqrt(powerOf(run2to10)),
     truncated: truncation.side !== 'none' && !truncation.instrument ? 1 : 0,
+    displacementSkew: Math.abs(displacement.skewness),
+    displacementKurtosis: displacement.kurtosis,
+    accelerationSkew: Math.abs(acceleration.skewness),
+    accelerationKurtosis: acceleration.kurtosis,
+    explainedShare:
+      all > 0
+        ? powerOf(whole.filter((line) => line.explainedBy !== null && standsOut(line, strongest))) /
+          all
+        : 0,
   };
 }
 
-function synchronousShare(view: SpectrumView, speedHz: number, revolution: AveragedRevolution) {
-  const from = Math.ceil((0.3 * speedHz) / view.stepHz);
-  const to = Math.min(
-    view.velocity.length - 1,
-    Math.floor(Math.min(20.5 * speedHz, view.usableHz) / view.stepHz),
-  );
-  let power = 0;
-  for (let i = from; i <= to; i += 1) power += (view.velocity[i] ?? 0) ** 2;
-  power /= 1.5; // equivalent noise bandwidth of the Hann window (Harris 1978)
-  return power > 0 ? Math.min(1, revolution.synchronousPower / power) : 0;
+/** Synchronous power over all up to order 20, and steady over all power at orders 2 to 10. */
+function sharesOf(spectrum: OrderSpectrum, usableOrders: number) {
+  const { power, coherentPower, linesPerOrder } = spectrum;
+  const last = Math.min(power.length - 1, Math.floor(Math.min(20.5, usableOrders) * linesPerOrder));
+  let [all, synchronous, steady, atOrders] = [0, 0, 0, 0];
+  for (let k = Math.ceil(0.3 * linesPerOrder); k <= last; k += 1) all += power[k] ?? 0;
+  for (let order = 1; order * linesPerOrder <= last; order += 1) {
+    const at = order * linesPerOrder;
+    for (let k = at - 1; k <= at + 1; k += 1) {
+      synchronous += coherentPower[k] ?? 0;
+      if (order < 2 || order > 10) continue;
+      steady += coherentPower[k] ?? 0;
+      atOrders += power[k] ?? 0;
+    }
+  }
+  return {
+    synchronousShare: all > 0 ? Math.min(1, synchronous / all) : 0,
+    steadiness: atOrders > 0 ? Math.min(1, steady / atOrders) : 0,
+  };
 }
 
-/** The strongest line away from every multiple of half the speed. */
-function strangerDb(view: SpectrumView, speedHz: number, strongest: number): number {
-  const keepAway = 3;
-  const from = Math.ceil((0.6 * speedHz) / view.stepHz);
-  const to = Math.min(
-    view.velocity.length - 1,
-    Math.floor(Math.min(20.5 * speedHz, view.usableHz) / view.stepHz),
-  );
+/** The strongest line away from every multiple of a half and a third. */
+function strangerDb(spectrum: OrderSpectrum, usableOrders: number, strongest: number): number {
+  const { power, linesPerOrder } = spectrum;
+  const last = Math.min(power.length - 1, Math.floor(Math.min(20.5, usableOrders) * linesPerOrder));
+  const reach = 2.2 / linesPerOrder;
+  const grid = linesPerOrder >= 8 ? 0.5 : 1;
   let most = 0;
-  for (let i = from; i <= to; i += 1) {
-    const halves = (i * view.stepHz) / (speedHz / 2);
-    const away = (Math.abs(halves - Math.round(halves)) * speedHz) / 2 / view.stepHz;
-    if (away > keepAway) most = Math.max(most, view.velocity[i] ?? 0);
+  for (let k = Math.ceil(0.4 * linesPerOrder); k <= last; k += 1) {
+    const order = k / linesPerOrder;
+    if (Math.abs(order - Math.round(order / grid) * grid) < reach) continue;
+    if (linesPerOrder >= 32 && Math.abs(order - Math.round(order * 3) / 3) < reach) continue;
+    most = Math.max(most, power[k] ?? 0);
   }
-  return 20 * Math.log10(Math.max(most, 1e-9) / strongest);
+  return db(most, strongest ** 2);
+}
+
+function floorDb(lines: readonly OrderLine[], strongest: number): number {
+  const floors = Float64Array.from(lines, (line) => line.floorMmPerSRms ** 2);
+  return db(medianInPlace(floors, floors.length), strongest ** 2, -100);
 }

@@ -61,7 +61,8 @@ export function realFft(samples: Float64Array): Float64Array {
  * @throws {RangeError} for another length
  */
 export function realFromLines(lines: Float64Array, length: number): Float64Array {
-  if (!isPowerOfTwo(length) || length < 4) throw new RangeError('The length must be a power of two.');
+  if (!isPowerOfTwo(length) || length < 4)
+    throw new RangeError('The length must be a power of two.');
   const full = new Float64Array(2 * length);
   const count = Math.min(lines.length >> 1, length >> 1);
   // Only the upper half-plane is filled: the real part of the inverse is half the wanted signal.

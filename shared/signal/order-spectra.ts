@@ -19,7 +19,7 @@ export interface OrderSpectrum {
   power: Float64Array;
   /** The same of the mean of the complex lines: what keeps its phase to the shaft. */
   coherentPower: Float64Array;
-  /** Independent averages the mean power is worth. */
+  /** Independent averages the mean power is worth; 0 without segments. */
   averages: number;
 }
 
@@ -108,6 +108,6 @@ export function averageSegments({
     linesPerOrder,
     power,
     coherentPower,
-    averages: count === 1 ? 1 : count / overlapLoss,
+    averages: segments.length <= 1 ? segments.length : count / overlapLoss,
   };
 }

@@ -1,12 +1,20 @@
-import { chanceOfLine } from './noise-floor.ts';
-import { explanations } from './explained-orders.ts';
+import { explanations, type Explanation } from './explained-orders.ts';
+import { chanceOfLine, medianInPlace } from './noise-floor.ts';
+import type { OrderSpectrum } from './order-spectra.ts';
 import type { MachineFacts, OrderLine } from './screening-types.ts';
-import { peakNear, type SpectrumView } from './spectrum-view.ts';
-import { velocityRmsFactor } from './velocity-lines.ts';
+import { plainVelocityRmsFactor } from './velocity-lines.ts';
+import type { Quantity } from '../quantities/quantity.ts';
 
 export const highestOrder = 20;
-const reachMinLines = 1;
-const reachMaxLines = 4;
+/** Lines to an order from which half and third orders can be told from the whole ones beside them. */
+const linesForHalves = 8;
+const linesForThirds = 16;
+const floorReachOrders = 1.5;
+const floorLinesMin = 4;
+/** A median of neighbouring Hann lines is worth this share of as many independent ones (simulated). */
+const medianWorth = 0.4;
+/** Three neighbouring Hann lines of a tone together, over its power (Harris 1978). */
+const hannLobe = 1.5;
 
 /** Orders looked at: every multiple of a half and of a third up to the twentieth. */
 export const tableOrders: readonly number[] = Array.from(
@@ -17,48 +25,111 @@ export const tableOrders: readonly number[] = Array.from(
   return sixths % 3 === 0 || sixths % 2 === 0;
 });
 
+const isNear = (value: number, grid: number, reach: number) =>
+  Math.abs(value - Math.round(value / grid) * grid) < reach;
+
+/** Floor of an order: mean noise power of a line, (mm/s rms)², and the averages it is worth. */
+export interface OrderFloor {
+  power: number;
+  averages: number;
+}
+
+/**
+ * Noise beside an order: the median of the averaged power between the whole, half and (where they
+ * can be told apart) third orders, as far to one side as to the other. A gamma variable's median is
+ * (1 − 1/9a)³ of its mean (Wilson and Hilferty 1931).
+ */
+export function orderFloor({ power, averages, linesPerOrder }: OrderSpectrum, order: number) {
+  const centre = order * linesPerOrder;
+  const lowest = Math.ceil(0.3 * linesPerOrder);
+  const most = Math.min(
+    Math.max(centre - lowest, 0.5 * linesPerOrder),
+    Math.max(power.length - 1 - centre, 0.5 * linesPerOrder),
+  );
+  const grid = linesPerOrder >= linesForHalves ? 0.5 : 1;
+  const beside = new Float64Array(power.length);
+  let count = 0;
+  for (
+    let reachOrders = floorReachOrders;
+    count < floorLinesMin && reachOrders < 8;
+    reachOrders *= 2
+  ) {
+    const reach = Math.min(reachOrders * linesPerOrder, Math.max(most, floorLinesMin * 2));
+    count = 0;
+    const to = Math.min(power.length - 1, Math.floor(centre + reach));
+    for (let k = Math.max(lowest, Math.ceil(centre - reach)); k <= to; k += 1) {
+      const at = k / linesPerOrder;
+      if (isNear(at, grid, 1.6 / linesPerOrder)) continue;
+      if (linesPerOrder > linesForThirds && isNear(at, 1 / 3, 1.6 / linesPerOrder)) continue;
+      beside[count++] = power[k] ?? 0;
+    }
+  }
+  const median = medianInPlace(beside, count);
+  return {
+    power: Math.max(median / (1 - 1 / (9 * averages)) ** 3, 1e-30),
+    averages: Math.max(1, medianWorth * averages * count),
+  } satisfies OrderFloor;
+}
+
 /**
  * Level, floor, prominence and chance of every order in the usable band.
  *
  * @param speedHz - of the position's shaft
- * @param speedErrorHz - half the 95 % interval: the higher the order, the wider it is looked for
  * @param factor - from the recorded unit to the base unit, to give amplitudes back as recorded
  */
 export function orderTable(
-  view: SpectrumView,
+  spectrum: OrderSpectrum,
   speedHz: number,
-  speedErrorHz: number,
+  usableHz: number,
   machine: MachineFacts | undefined,
+  quantity: Quantity,
   factor: number,
 ): OrderLine[] {
-  const known = explanations(speedHz, machine, view.usableHz);
+  const { power, linesPerOrder, averages } = spectrum;
+  const known = explanations(speedHz, machine, usableHz);
+  const widthHz = speedHz / linesPerOrder;
   const lines: OrderLine[] = [];
   for (const order of tableOrders) {
     const frequencyHz = order * speedHz;
-    if (frequencyHz > view.usableHz || frequencyHz < 2 * view.stepHz) continue;
-    const reach = Math.max(
-      reachMinLines,
-      Math.min(reachMaxLines, (order * speedErrorHz) / view.stepHz),
-    );
-    const peak = peakNear(view, frequencyHz, reach);
-    if (peak === null) continue;
-    const ratio = view.ratio[peak.index] ?? 0;
-    const explained = known.find(
-      (one) =>
-        Math.abs(one.frequencyHz - frequencyHz) < Math.max(1.5 * view.stepHz, 0.002 * frequencyHz),
-    );
+    if (frequencyHz > usableHz) break;
+    if (linesPerOrder < linesForHalves && !Number.isInteger(order)) continue;
+    if (linesPerOrder < linesForThirds && !Number.isInteger(order * 2)) continue;
+    const at = Math.round(order * linesPerOrder);
+    let [best, sum] = [0, 0];
+    for (let k = at - 1; k <= at + 1; k += 1) {
+      best = Math.max(best, power[k] ?? 0);
+      sum += power[k] ?? 0;
+    }
+    const floor = orderFloor(spectrum, order);
+    const ratio = best / floor.power;
+    const velocityMmPerSRms = Math.sqrt(Math.max(best, sum / hannLobe));
     lines.push({
       order: roundOrder(order),
-      frequencyHz: peak.frequencyHz,
-      velocityMmPerSRms: peak.amplitudePeak * velocityRmsFactor(view.quantity, peak.frequencyHz),
-      amplitudePeak: peak.amplitudePeak / factor,
-      floorMmPerSRms: Math.sqrt(1 / Math.max(ratio, 1e-12)) * (view.velocity[peak.index] ?? 0),
+      frequencyHz,
+      velocityMmPerSRms,
+      amplitudePeak: velocityMmPerSRms / plainVelocityRmsFactor(quantity, frequencyHz) / factor,
+      floorMmPerSRms: Math.sqrt(floor.power),
       prominenceDb: 10 * Math.log10(Math.max(ratio, 1e-12)),
-      pNoise: chanceOfLine(ratio, 2 * Math.round(reach) + 1),
-      explainedBy: explained?.words ?? null,
+      pNoise: chanceOfLine(ratio, 2, averages, floor.averages),
+      explainedBy: explanationOf(known, frequencyHz, widthHz)?.words ?? null,
     });
   }
   return lines;
+}
+
+/** The known source nearest to an order, if it falls into the same line. */
+function explanationOf(
+  known: readonly Explanation[],
+  frequencyHz: number,
+  widthHz: number,
+): Explanation | undefined {
+  let nearest: Explanation | undefined;
+  let least = Math.max(1.5 * widthHz, 0.002 * frequencyHz);
+  for (const one of known) {
+    const away = Math.abs(one.frequencyHz - frequencyHz);
+    if (away < least) [nearest, least] = [one, away];
+  }
+  return nearest;
 }
 
 /** Thirds are written with four decimals; wholes and halves are exact. */

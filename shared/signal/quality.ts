@@ -1,18 +1,5 @@
-import type { Clipping } from './clipping.ts';
-import type { PreparedSamples } from './prepare-samples.ts';
-import type { QualityDefect, ScreeningLimits } from './screening-types.ts';
-import type { SpectrumView } from './spectrum-view.ts';
-
-export interface QualityInput {
-  prepared: PreparedSamples;
-  clipping: Clipping;
-  sampleRateHz: number;
-  view: SpectrumView | null;
-  speedHz: number | null;
-  speedSupported: boolean;
-  told: boolean;
-  limits: ScreeningLimits;
-}
+import type { WaveformAnalysis } from './analyse-waveform.ts';
+import type { QualityDefect, ScreeningInput, ScreeningLimits } from './screening-types.ts';
 
 const samplesMin = 256;
 const gapShareMax = 0.02;
@@ -28,8 +15,13 @@ const defect = (
 ): QualityDefect => ({ code, forcesRetake, message, advice });
 
 /** Whether a record is fit to be judged; each defect says what to set at the retake. */
-export function qualityDefects(input: QualityInput): QualityDefect[] {
-  const { prepared, clipping, view, speedHz, limits, sampleRateHz } = input;
+export function qualityDefects(
+  { prepared, clipping, view, speed, speedSupported }: WaveformAnalysis,
+  { sampleRateHz, toldSpeedRpm }: ScreeningInput,
+  limits: ScreeningLimits,
+): QualityDefect[] {
+  const { speedHz } = speed;
+  const told = toldSpeedRpm !== undefined && toldSpeedRpm > 0;
   const { values } = prepared;
   const found: QualityDefect[] = [];
   const count = values.length;
@@ -89,7 +81,7 @@ export function qualityDefects(input: QualityInput): QualityDefect[] {
   const drift = settling(values, rms);
   if (drift !== null) found.push(drift);
   if (view === null) return found;
-  if (speedHz === null || (input.told && !input.speedSupported)) {
+  if (speedHz === null || (told && !speedSupported)) {
     found.push(
       defect(
         'speed-unsupported',

@@ -1,14 +1,9 @@
-import { averagedRevolution } from './averaged-revolution.ts';
-import { findClipping } from './clipping.ts';
+import { analyseWaveform } from './analyse-waveform.ts';
 import { evidenceSentences } from './evidence.ts';
-import { extractFeatures } from './features.ts';
-import { findSpeed } from './find-speed.ts';
-import { harmonicRun } from './harmonic-run.ts';
 import { lookAlikes } from './look-alikes.ts';
 import { loosenessKind } from './looseness-kind.ts';
-import { orderTable } from './order-table.ts';
 import { overallVelocity } from './overall-velocity.ts';
-import { prepareSamples, type PreparedSamples } from './prepare-samples.ts';
+import type { PreparedSamples } from './prepare-samples.ts';
 import { qualityDefects } from './quality.ts';
 import { scoreFromFeatures } from './score.ts';
 import type {
@@ -17,12 +12,10 @@ import type {
   ScreeningInput,
   ScreeningLimits,
   ScreeningResult,
-  SpeedReading,
   Truncation,
   Verdict,
 } from './screening-types.ts';
-import { viewSpectrum, type SpectrumView } from './spectrum-view.ts';
-import { findTruncation } from './truncation.ts';
+import type { SpectrumView } from './spectrum-view.ts';
 
 export const methodVersion = '1';
 
@@ -51,11 +44,6 @@ const noTruncation: Truncation = {
   instrument: false,
   ranges: [],
 };
-const noSpeed: SpeedReading = { speedHz: null, source: 'none', intervalHz: null, alternatives: [] };
-
-/** Typical speed for the first look, before the speed is known, Hz. */
-const typicalSpeedHz = 25;
-
 /**
  * Screens one waveform for mechanical looseness: quality, running speed, orders, run, truncation,
  * verdict with its evidence. See the method page for what each step does and where it fails.
@@ -68,50 +56,22 @@ export function screenWaveform(
   input: ScreeningInput,
   limits: Partial<ScreeningLimits> = {},
 ): Screening {
-  const { sampleRateHz, machine } = input;
-  if (!(Number.isFinite(sampleRateHz) && sampleRateHz > 0)) {
-    throw new RangeError('The sampling rate must be a positive number of Hz.');
-  }
   const inForce = { ...defaultLimits, ...limits };
-  const prepared = prepareSamples(input.samples, input.unit);
-  const clipping = findClipping(input.samples);
-  const told = input.toldSpeedRpm !== undefined && input.toldSpeedRpm > 0;
-  const readable = prepared.values.length >= 16 && prepared.values.some((value) => value !== 0);
-  const aboutHz = (input.toldSpeedRpm ?? machine?.nominalSpeedRpm ?? typicalSpeedHz * 60) / 60;
-  const view = readable
-    ? viewSpectrum(
-        prepared.values,
-        sampleRateHz,
-        prepared.quantity,
-        aboutHz * (machine?.shaftRatio ?? 1),
-      )
-    : null;
-  const found = view
-    ? findSpeed(view, input.toldSpeedRpm, input.toldSpeedTolerance, machine)
-    : { ...noSpeed, supported: false };
-  const { supported, ...speed } = found;
-  const quality = qualityDefects({
-    prepared,
-    clipping,
-    sampleRateHz,
-    view,
-    speedHz: speed.speedHz,
-    speedSupported: supported,
-    told,
-    limits: inForce,
-  });
+  const analysis = analyseWaveform(input);
+  const { prepared, view, speed, family } = analysis;
+  const quality = qualityDefects(analysis, input, inForce);
   const common = {
     speed,
     quality,
     quantity: prepared.quantity,
     overallVelocity: view ? overallVelocity(view, speed.speedHz) : null,
     revolutions:
-      speed.speedHz === null ? null : (prepared.values.length / sampleRateHz) * speed.speedHz,
+      speed.speedHz === null ? null : (prepared.values.length / input.sampleRateHz) * speed.speedHz,
     methodVersion,
     limits: inForce,
   };
   const spectrum = plotSpectrum(view, prepared);
-  if (view === null || speed.speedHz === null) {
+  if (family === null) {
     return {
       result: {
         ...common,
@@ -127,19 +87,7 @@ export function screenWaveform(
       plots: { spectrum, averagedRevolution: null },
     };
   }
-  const { speedHz } = speed;
-  const errorHz = ((speed.intervalHz?.[1] ?? speedHz) - (speed.intervalHz?.[0] ?? speedHz)) / 2;
-  const orders = orderTable(view, speedHz, supported ? errorHz : 0, machine, prepared.factor);
-  const run = harmonicRun(orders);
-  const revolution = averagedRevolution(
-    prepared.values,
-    sampleRateHz,
-    prepared.quantity,
-    speedHz,
-    view.usableHz,
-  );
-  const truncation = findTruncation(revolution.displacementUm, prepared.values, clipping);
-  const features = extractFeatures(view, speedHz, orders, run, truncation, revolution);
+  const { orders, run, truncation, features, revolution } = family;
   const retake = quality.some((defect) => defect.forcesRetake);
   const score = retake ? null : scoreFromFeatures(features);
   const verdict = verdictOf(score, inForce);
@@ -152,7 +100,7 @@ export function screenWaveform(
     harmonicRun: run,
     truncation,
     evidence: evidenceSentences(features, run, truncation, speed),
-    lookAlikes: lookAlikes(features, run, orders, machine),
+    lookAlikes: lookAlikes(features, run, orders, input.machine),
   };
   return {
     result,

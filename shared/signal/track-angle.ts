@@ -1,6 +1,6 @@
 import type { BandVelocity } from './band-velocity.ts';
 import { medianInPlace } from './noise-floor.ts';
-import { orderSegments, type OrderSegments } from './order-spectra.ts';
+import { orderSegments, segmentTurns, type OrderSegments } from './order-spectra.ts';
 import { pointsPerTurn, steadyRunning, toShaftAngle, type AngleDeviation } from './shaft-angle.ts';
 
 /** The record over the shaft angle, with slow changes of speed followed. */
@@ -33,6 +33,11 @@ const followRatio = 25;
 /** Phase steps from segment to segment above which the unwrapping is not to be trusted, rad. */
 const stepMax = 1.2;
 const rounds = 2;
+/** A correction of the mean speed by more lines of the whole record follows some other line. */
+const shiftMaxLines = 1.2;
+/** By how much the family must gain, in nepers of power over all orders, for the following to be believed. */
+const gainMin = 0.02;
+const sharpOrders = 20;
 
 /**
  * Follows the phase of the strongest low order from segment to segment (demodulation), takes what
@@ -46,6 +51,8 @@ export function trackAngle(band: BandVelocity, speedHz: number): TrackedRecord {
   let velocity = toShaftAngle(band, speedHz, deviation);
   let trackedOrder: number | null = null;
   let current = speedHz;
+  let sharp = sharpness(velocity);
+  const durationS = band.mmPerS.length / band.rateHz;
   for (let round = 0; round < rounds; round += 1) {
     const turnsInAll = velocity.length / pointsPerTurn;
     if (turnsInAll < fineTurns + (segmentsMin - 1) * hopTurns) break;
@@ -56,7 +63,6 @@ export function trackAngle(band: BandVelocity, speedHz: number): TrackedRecord {
       round === 0 ? 3 : highestTracked,
     );
     if (phase === null) break;
-    trackedOrder = phase.order;
     const added = smooth(phase.turns);
     const stepS = hop / current;
     const fromS = fineTurns / 2 / current;
@@ -66,9 +72,14 @@ export function trackAngle(band: BandVelocity, speedHz: number): TrackedRecord {
       total[s] = (added[s] ?? 0) + at(base, fromS + s * stepS);
     }
     const { slope, rest } = takeLine(total);
-    current += slope / stepS;
-    deviation = { fromS, stepS, turns: rest };
-    velocity = toShaftAngle(band, current, deviation);
+    const tried = current + slope / stepS;
+    if (Math.abs(tried - speedHz) * durationS > shiftMaxLines) break;
+    const followed = { fromS, stepS, turns: rest };
+    const resampled = toShaftAngle(band, tried, followed);
+    const sharper = sharpness(resampled);
+    if (sharper < sharp + gainMin) break;
+    [current, deviation, velocity, sharp] = [tried, followed, resampled, sharper];
+    trackedOrder = phase.order;
   }
   return {
     speedHz: current,
@@ -77,6 +88,17 @@ export function trackAngle(band: BandVelocity, speedHz: number): TrackedRecord {
     trackedOrder,
     wander: wanderOf(deviation, current),
   };
+}
+
+/** How far the family stands out as a whole: the sum over orders of ln(power over the lines beside). */
+function sharpness(velocity: Float64Array): number {
+  const turns = segmentTurns(velocity.length / pointsPerTurn);
+  const segments = orderSegments(velocity, turns, turns);
+  let sum = 0;
+  for (let order = 1; order <= sharpOrders; order += 1) {
+    sum += Math.log(Math.max(1, signalRatio(segments, order)));
+  }
+  return sum;
 }
 
 /** The order whose phase is known best; an order's phase is worth the more the higher it is. */

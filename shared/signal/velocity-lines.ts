@@ -10,7 +10,11 @@ export const highPassHz = 1.5;
  * @param frequencyHz - Hz; below the high-pass of 1.5 Hz the factor is 0
  */
 export function velocityRmsFactor(quantity: Quantity, frequencyHz: number): number {
-  if (frequencyHz < highPassHz) return 0;
+  return frequencyHz < highPassHz ? 0 : plainVelocityRmsFactor(quantity, frequencyHz);
+}
+
+/** The same without the high-pass, for a frequency > 0. */
+export function plainVelocityRmsFactor(quantity: Quantity, frequencyHz: number): number {
   const omega = 2 * Math.PI * frequencyHz;
   if (quantity === 'acceleration') return 1000 / omega / Math.SQRT2;
   if (quantity === 'velocity') return 1 / Math.SQRT2;
