@@ -7,7 +7,8 @@ import type {
 import type { LabelledWaveform } from '#fixtures/signals/labelled-set.ts';
 import { screenWaveform } from '#shared/signal/screen-waveform.ts';
 import type { SpeedSource, Verdict } from '#shared/signal/screening-types.ts';
-import { caseFeatures, type FeatureValues } from './case-features.ts';
+import { extractFeatures } from '#shared/signal/analyse-waveform.ts';
+import type { FeatureValues } from './case-features.ts';
 
 /** What the method said of one labelled waveform, beside the truth. */
 export interface CaseOutcome {
@@ -60,7 +61,7 @@ export function screenCase(
     speedSource: result.speed.source,
     speedError: result.speed.speedHz === null ? null : result.speed.speedHz / speedHz - 1,
     toldError: recording.toldSpeedError,
-    features: withFeatures && result.score !== null ? caseFeatures(input) : null,
+    features: withFeatures && result.score !== null ? extractFeatures(input) : null,
     screeningMs,
   };
 }

@@ -5,7 +5,8 @@ import type { Unit } from '#shared/quantities/quantity.ts';
 import { readWaveformCsv } from '#shared/signal/csv/read-waveform-csv.ts';
 import { screenWaveform } from '#shared/signal/screen-waveform.ts';
 import type { ScreeningInput, Verdict } from '#shared/signal/screening-types.ts';
-import { caseFeatures, type FeatureValues } from './case-features.ts';
+import { extractFeatures } from '#shared/signal/analyse-waveform.ts';
+import type { FeatureValues } from './case-features.ts';
 
 /** What the evaluation reads of one entry of the folder's index.json. */
 interface IndexEntry {
@@ -53,7 +54,7 @@ export async function screenRealRecordings(folder: string): Promise<RealOutcome[
       loose: entry.looseness,
       verdict: result.verdict,
       score: result.score,
-      features: result.score === null ? null : caseFeatures(input),
+      features: result.score === null ? null : extractFeatures(input),
     });
   }
   return outcomes;

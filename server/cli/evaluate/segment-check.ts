@@ -23,6 +23,7 @@ export function segmentSpread(seed: number): number | null {
   const condition =
     seed % 2 === 0
       ? drawLooseCondition(
+          machine,
           simulatedLoosenessKinds[(seed / 2) % simulatedLoosenessKinds.length]!,
           random.pick(severities),
           random,
