@@ -9,9 +9,19 @@ import { readDemoAccounts } from './config/demo-accounts.ts';
 import { readEnvironment } from './config/environment.ts';
 import { createDataSource } from './db/data-source.ts';
 import { runMigrations } from './db/run-migrations.ts';
+import type { AdministrationService } from './features/administration/administration.service.ts';
 import { createApp } from './http/create-app.ts';
 
 const signInLimit = 20;
+
+/** An empty installation without demo data needs somebody who can make the first site. */
+async function tellFirstAdministrator(administration: AdministrationService): Promise<void> {
+  const first = await administration.createFirstAdministrator();
+  if (first === null) return;
+  process.stdout.write(
+    `First administrator: ${first.email}, password ${first.password} (shown this once)\n`,
+  );
+}
 
 async function main(): Promise<void> {
   const environment = readEnvironment();
@@ -29,6 +39,7 @@ async function main(): Promise<void> {
     demoAccounts: config.demo ? readDemoAccounts(config.dataDirectory) : [],
     publicUrl: () => publicUrl,
   });
+  if (!config.demo) await tellFirstAdministrator(product.services.administration);
   const clientDirectory = join(environment.projectDirectory, 'dist/client');
   const app = createApp({
     ...product.routeContext,

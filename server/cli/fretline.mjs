@@ -8,7 +8,7 @@ import { existsSync } from 'node:fs';
 import { dirname, join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 
-const commands = ['screen', 'spectrum', 'fit', 'limits', 'help'];
+const commands = ['screen', 'spectrum', 'fit', 'limits', 'evaluate', 'help'];
 const projectFolder = dirname(dirname(dirname(fileURLToPath(import.meta.url))));
 
 /** npm writes this file last, so half an installation counts as none. */

@@ -1,3 +1,4 @@
+import { randomBytes } from 'node:crypto';
 import { hashPassword } from '#server/auth/passwords.ts';
 import type { Principal } from '#server/auth/principal.ts';
 import { recordActivity } from '#server/db/activity.repository.ts';
@@ -45,6 +46,24 @@ export class AdministrationService {
   /** True where nobody can sign in yet. */
   async isEmpty(): Promise<boolean> {
     return (await new AdministrationRepository(this.database.db).userCount()) === 0;
+  }
+
+  /**
+   * Makes the account that an empty installation begins with, with a password made for it.
+   *
+   * @returns null where there are people already
+   */
+  async createFirstAdministrator(): Promise<{ email: string; password: string } | null> {
+    if (!(await this.isEmpty())) return null;
+    const email = 'administrator@fretline.local';
+    const password = randomBytes(12).toString('base64url');
+    await this.createPerson(null, {
+      name: 'First administrator',
+      email,
+      password,
+      isAdministrator: true,
+    });
+    return { email, password };
   }
 
   createSite(actor: Actor, request: CreateSiteRequest): Promise<number> {
