@@ -12,6 +12,8 @@ export default defineConfig({
   server: { proxy: { '/api': `http://127.0.0.1:${apiPort}` } },
   test: {
     env: { TZ: 'UTC' },
+    // A forgotten `.only` would let the other tests of its file pass unrun.
+    allowOnly: false,
     // Two cores: more workers only wait for each other.
     maxWorkers: 2,
     projects: [
@@ -41,6 +43,8 @@ export default defineConfig({
           name: 'client',
           environment: 'jsdom',
           include: ['tests/client/**/*.test.{ts,tsx}'],
+          // A person's clicks take seconds where other work shares the cores.
+          testTimeout: minuteMs,
         },
       },
       {

@@ -44,6 +44,30 @@ module.exports = {
       { path: '^fixtures/' },
     ),
     forbid(
+      'tools-are-leaves',
+      'The product never imports its tools, which may import fixtures',
+      { path: '^server/', pathNot: '^server/cli/' },
+      { path: '^server/cli/' },
+    ),
+    forbid(
+      'composition-is-the-top',
+      'Only the process, the tools and the tests see every feature at once',
+      { path: '^server/', pathNot: '^server/(main\\.ts$|compose\\.ts$|cli/)' },
+      { path: '^server/(main|compose)\\.ts$' },
+    ),
+    forbid(
+      'production-needs-no-dev-packages',
+      'What runs in production is a dependency; types alone may come from devDependencies',
+      { path: '^(server|src|shared)/', pathNot: '^server/cli/' },
+      { dependencyTypes: ['npm-dev'], dependencyTypesNot: ['type-only'], pathNot: '/@types/' },
+    ),
+    forbid(
+      'every-import-leads-somewhere',
+      'An import that cannot be resolved is an unlisted package or a wrong path',
+      { path: '^(server|src|shared|fixtures|tests)/' },
+      { couldNotResolve: true },
+    ),
+    forbid(
       'nobody-imports-tests',
       'Tests are leaves',
       { path: '^(server|src|shared|fixtures)/' },
@@ -74,6 +98,12 @@ module.exports = {
       { path: '^src/(features|lib/api-client)' },
     ),
     forbid(
+      'lib-is-lowest',
+      'lib serves features and knows none',
+      { path: '^src/lib/' },
+      { path: '^src/(features|charts|components)/' },
+    ),
+    forbid(
       'features-apart-in-server',
       'The server hands one feature a narrow interface of another in compose.ts',
       { path: '^server/features/([^/]+)/' },
@@ -81,9 +111,9 @@ module.exports = {
     ),
     forbid(
       'typeorm-at-home',
-      'TypeORM appears in server/db and in repositories alone',
-      { path: '^server/', pathNot: '^server/(db/|.*\\.repository\\.ts$)' },
-      { path: 'node_modules/typeorm/', dependencyTypesNot: ['type-only'] },
+      'TypeORM appears in server/db and in repositories alone; compose.ts names the type it hands on',
+      { path: '^server/', pathNot: '^server/(db/|compose\\.ts$|.*\\.repository\\.ts$)' },
+      { path: 'node_modules/typeorm/' },
     ),
   ],
   options: {

@@ -80,4 +80,21 @@ describe('the tree', () => {
     expect(named.length).toBeGreaterThan(3);
     expect(named.filter((path) => !files.includes(path))).toEqual([]);
   });
+
+  it('names no package registry, so that each machine uses its own', () => {
+    const hosts = [
+      ['registry', 'npmjs', 'org'],
+      ['registry', 'yarnpkg', 'com'],
+      ['npm', 'pkg', 'github', 'com'],
+      ['deb', 'debian', 'org'],
+      ['security', 'debian', 'org'],
+    ].map((parts) => parts.join('.'));
+    const texts = files.filter((path) => /\.(json|ts|tsx|mjs|cjs|js|md|html|css)$|^\./.test(path));
+    expect(texts).toContain('package-lock.json');
+    const naming = texts.filter((path) => {
+      const text = read(path);
+      return hosts.some((host) => text.includes(host)) || /"resolved": "https?:/.test(text);
+    });
+    expect(naming).toEqual([]);
+  });
 });

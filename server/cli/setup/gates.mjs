@@ -26,6 +26,8 @@ export function createGates(projectDirectory, scratch) {
   /** @type {NodeJS.ProcessEnv} */
   const env = { ...process.env, NO_COLOR: '1' };
   delete env.FORCE_COLOR;
+  // React refuses to be tested where this says production.
+  delete env.NODE_ENV;
   const bin = (/** @type {string} */ program) =>
     join(projectDirectory, 'node_modules', '.bin', program);
 
