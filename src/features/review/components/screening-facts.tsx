@@ -15,6 +15,10 @@ function speedText({ speed }: Result): string | null {
   return `${rpm} ± ${formatSignificant(half, 2)}`;
 }
 
+/** Smaller chances than one in a million are no knowledge: the model of the noise isn't that good. */
+const chanceInWords = (chance: number): string =>
+  chance < 1e-6 ? 'under 1 in a million' : formatSignificant(chance, 1);
+
 /** The figures behind the verdict: speed, overall level, run, truncation, record. */
 export function ScreeningFacts({
   result,
@@ -59,7 +63,7 @@ export function ScreeningFacts({
               <>
                 <Figure value={`${harmonicRun.from}× to ${harmonicRun.to}×`} />
                 {', by chance '}
-                <Figure value={formatSignificant(harmonicRun.pChance, 1)} />
+                <Figure value={chanceInWords(harmonicRun.pChance)} />
               </>
             ),
         },
