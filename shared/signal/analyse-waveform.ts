@@ -64,7 +64,7 @@ export function analyseWaveform(input: ScreeningInput): WaveformAnalysis {
     throw new RangeError('The sampling rate must be a positive number of Hz.');
   }
   const prepared = prepareSamples(input.samples, input.unit);
-  const clipping = findClipping(input.samples);
+  const clipping = findClipping(prepared.raw);
   const { values, quantity, factor } = prepared;
   const nothing: WaveformAnalysis = {
     prepared,

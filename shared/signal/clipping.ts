@@ -58,3 +58,44 @@ function rail(samples: Float64Array, distance: (value: number) => number) {
     count > 2 * below;
   return { clipped, count };
 }
+
+const slopeRailShare = 0.03;
+const slopeSamplesMin = 0.03;
+const slopeCrowding = 8;
+
+/**
+ * Whether the record was cut off before the instrument integrated it: then its steps from sample to
+ * sample crowd at one extreme value, which integration and its high-pass leave nearly even.
+ *
+ * @param values - prepared samples in velocity (once) or displacement (twice integrated)
+ * @param times - how often it was integrated
+ */
+export function clippedBeforeIntegration(values: Float64Array, times: 1 | 2): boolean {
+  let steps = differences(values);
+  if (times === 2) steps = differences(steps);
+  const sorted = steps.slice().sort();
+  const [low, high] = [sorted[0] ?? 0, sorted[sorted.length - 1] ?? 0];
+  const range = high - low;
+  if (!(range > 0)) return false;
+  const near = (from: number, to: number, up: boolean) => {
+    let count = 0;
+    for (const step of steps) {
+      const away = (up ? high - step : step - low) / range;
+      if (away >= from && away < to) count += 1;
+    }
+    return count / steps.length;
+  };
+  return [true, false].some((up) => {
+    const share = near(0, slopeRailShare, up);
+    return (
+      share > slopeSamplesMin &&
+      share > slopeCrowding * near(slopeRailShare, 2 * slopeRailShare, up)
+    );
+  });
+}
+
+function differences(values: Float64Array): Float64Array {
+  const out = new Float64Array(Math.max(0, values.length - 1));
+  for (let i = 0; i < out.length; i += 1) out[i] = (values[i + 1] ?? 0) - (values[i] ?? 0);
+  return out;
+}

@@ -79,24 +79,19 @@ export function orderSegments(
 }
 
 /** Mean power and coherent power of segments that overlap by half. */
-export function averageSegments({
-  linesPerOrder,
-  segments,
-  hopTurns,
-}: OrderSegments): OrderSpectrum {
+export function averageSegments({ linesPerOrder, segments }: OrderSegments): OrderSpectrum {
   const lineCount = bandOrders * linesPerOrder + 1;
   const power = new Float64Array(lineCount);
   const mean = new Float64Array(2 * lineCount);
-  segments.forEach((lines, s) => {
+  for (const lines of segments) {
     for (let k = 0; k < lineCount; k += 1) {
       const [re, im] = [lines[2 * k] ?? 0, lines[2 * k + 1] ?? 0];
       power[k] = (power[k] ?? 0) + re * re + im * im;
-      // A line between the orders turns by its share of a turn from segment to segment.
-      const sign = ((k * s * hopTurns * 2) / linesPerOrder) % 2 === 0 ? 1 : -1;
-      mean[2 * k] = (mean[2 * k] ?? 0) + sign * re;
-      mean[2 * k + 1] = (mean[2 * k + 1] ?? 0) + sign * im;
+      // Segments begin half their (even) turns apart: whole and half orders meet in phase.
+      mean[2 * k] = (mean[2 * k] ?? 0) + re;
+      mean[2 * k + 1] = (mean[2 * k + 1] ?? 0) + im;
     }
-  });
+  }
   const count = Math.max(1, segments.length);
   const coherentPower = new Float64Array(lineCount);
   for (let k = 0; k < lineCount; k += 1) {

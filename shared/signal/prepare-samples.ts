@@ -14,6 +14,8 @@ const toBase: Readonly<Record<Unit, number>> = {
 };
 
 export interface PreparedSamples {
+  /** As recorded, as far as analysed. */
+  raw: Float64Array;
   /** Without gaps and without mean, in m/s², mm/s or µm. */
   values: Float64Array;
   quantity: Quantity;
@@ -61,6 +63,7 @@ export function prepareSamples(samples: Float64Array, unit: Unit): PreparedSampl
   const mean = count === 0 ? 0 : sum / count;
   for (let i = 0; i < count; i += 1) values[i] = (values[i] ?? 0) - mean;
   return {
+    raw: samples.subarray(0, count),
     values,
     quantity: quantityOfUnit[unit],
     factor,

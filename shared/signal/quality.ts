@@ -1,11 +1,18 @@
 import type { WaveformAnalysis } from './analyse-waveform.ts';
+import { countCableJumps } from './cable-jumps.ts';
+import { clippedBeforeIntegration } from './clipping.ts';
 import type { QualityDefect, ScreeningInput, ScreeningLimits } from './screening-types.ts';
+import { settlingDrift, skiSlopeRatio } from './slow-drift.ts';
+import { stuckShare } from './stuck-samples.ts';
 
 const samplesMin = 256;
 const gapShareMax = 0.02;
 const linesPerOrderMin = 6;
 /** A record that has not settled drifts by more than this many of its own rms. */
 const settlingFactor = 2.5;
+const stuckShareMax = 0.01;
+const cableJumpsMin = 2;
+const skiSlopeMax = 30;
 
 const defect = (
   code: string,
@@ -78,8 +85,51 @@ export function qualityDefects(
       ),
     );
   }
-  const drift = settling(values, rms);
-  if (drift !== null) found.push(drift);
+  const integrations = { acceleration: 0, velocity: 1, displacement: 2 } as const;
+  const times = integrations[prepared.quantity];
+  if (times !== 0 && clippedBeforeIntegration(values, times)) {
+    found.push(
+      defect(
+        'overload-before-integration',
+        true,
+        'The steps from sample to sample crowd at one extreme value: the instrument was overloaded before it integrated.',
+        'Set a larger range, let the input settle, and measure again.',
+      ),
+    );
+  }
+  const stuck = stuckShare(prepared.raw);
+  if (stuck > stuckShareMax) {
+    found.push(
+      defect(
+        'dropouts',
+        true,
+        `${(stuck * 100).toFixed(1)} % of the samples stand still between jumps: the link dropped out.`,
+        'Check cable and link, and measure again.',
+      ),
+    );
+  }
+  const jumps = countCableJumps(values, sampleRateHz);
+  if (jumps >= cableJumpsMin) {
+    found.push(
+      defect(
+        'cable-jumps',
+        true,
+        `The signal jumps ${jumps} times and creeps back: a plug or cable makes contact by turns.`,
+        'Check plug and cable, and measure again.',
+      ),
+    );
+  }
+  const drift = settlingDrift(values);
+  if (drift > settlingFactor) {
+    found.push(
+      defect(
+        'settling',
+        true,
+        `The record drifts: its beginning lies ${drift.toFixed(1)} times the later rms away.`,
+        'Wait until the sensor has settled before recording.',
+      ),
+    );
+  }
   if (view === null) return found;
   if (speedHz === null || (told && !speedSupported)) {
     found.push(
@@ -94,6 +144,17 @@ export function qualityDefects(
     );
   }
   if (speedHz === null) return found;
+  const slope = skiSlopeRatio(view, speedHz);
+  if (slope > skiSlopeMax) {
+    found.push(
+      defect(
+        'ski-slope',
+        true,
+        `Below a quarter of running speed there is ${slope.toFixed(0)} times the power of everything above: drift or low-frequency noise buries the orders.`,
+        'Check the sensor mount and its temperature, let it settle, and measure again with a higher low-frequency limit.',
+      ),
+    );
+  }
   const revolutions = (count / sampleRateHz) * speedHz;
   if (revolutions < limits.minRevolutions) {
     found.push(
@@ -128,27 +189,4 @@ export function qualityDefects(
     );
   }
   return found;
-}
-
-/** A ramp at the beginning: the sensor's supply or an integrator had not settled. */
-function settling(values: Float64Array, rms: number): QualityDefect | null {
-  const eighth = Math.floor(values.length / 8);
-  const mean = (from: number, to: number) => {
-    let sum = 0;
-    for (let i = from; i < to; i += 1) sum += values[i] ?? 0;
-    return sum / (to - from);
-  };
-  const half = values.length >> 1;
-  const late = mean(half, values.length);
-  const drift = Math.abs(mean(0, eighth) - late);
-  let lateRms = 0;
-  for (let i = half; i < values.length; i += 1) lateRms += ((values[i] ?? 0) - late) ** 2;
-  lateRms = Math.sqrt(lateRms / half);
-  if (drift < settlingFactor * Math.max(lateRms, 0.02 * rms)) return null;
-  return defect(
-    'settling',
-    true,
-    `The record drifts: its beginning lies ${(drift / Math.max(lateRms, 1e-12)).toFixed(1)} times the later rms away.`,
-    'Wait until the sensor has settled before recording.',
-  );
 }
