@@ -1,4 +1,4 @@
-import { extractFeatures } from '#shared/signal/analyse-waveform.ts';
+import type { ScreeningFeatures } from '#shared/signal/features.ts';
 
 /** The numbers behind a screening's score. */
-export type FeatureValues = NonNullable<ReturnType<typeof extractFeatures>>;
+export type FeatureValues = ScreeningFeatures;

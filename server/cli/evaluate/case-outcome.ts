@@ -18,6 +18,7 @@ export interface CaseOutcome {
   lookAlike: LookAlikeName;
   /** Null for a machine that is not loose, or a broken record. */
   physicsLeavesSign: boolean | null;
+  visibleOrders: number | null;
   fault: RecordFault | null;
   expectsRetake: boolean;
   verdict: Verdict;
@@ -54,6 +55,7 @@ export function screenCase(
     severity: label.severity,
     lookAlike: label.lookAlike,
     physicsLeavesSign: label.physicsLeavesSign,
+    visibleOrders: label.visibleOrders,
     fault: label.fault,
     expectsRetake: label.expectsRetake,
     verdict: result.verdict,

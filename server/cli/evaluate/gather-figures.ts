@@ -101,7 +101,7 @@ export function gatherFigures(
     ),
     {
       id: 'speed-error',
-      name: 'relative error of the speed, 95th percentile',
+      name: 'relative error of the speed where three orders or more show, 95th percentile',
       value: speed.p95 === null ? null : 100 * speed.p95,
       unit: '%',
       target: most(0.05),
@@ -109,7 +109,7 @@ export function gatherFigures(
     },
     {
       id: 'speed-found',
-      name: 'records whose speed is found by lines',
+      name: 'records that show three orders or more, speed found by lines',
       value: speed.judged === 0 ? null : (100 * speed.found) / speed.judged,
       unit: '%',
       target: null,

@@ -124,16 +124,18 @@ export function percentile(values: readonly number[], p: number): number | null 
   return sorted[Math.min(sorted.length - 1, Math.ceil(p * sorted.length) - 1)] ?? null;
 }
 
-/** Relative error of the speeds that were found by lines, in records fit to be judged. */
+/** Orders a record must show for its lines to allow a speed. */
+const visibleOrdersMin = 3;
+
+/** Relative error of the speeds found by lines, in records fit to be judged whose lines allow it. */
 export function speedErrors(outcomes: readonly CaseOutcome[]) {
+  const allows = (one: CaseOutcome) =>
+    whole(one) && one.verdict !== 'retake' && (one.visibleOrders ?? 0) >= visibleOrdersMin;
   const found = outcomes.filter(
-    (one) =>
-      whole(one) &&
-      one.verdict !== 'retake' &&
-      (one.speedSource === 'refined' || one.speedSource === 'estimated'),
+    (one) => allows(one) && (one.speedSource === 'refined' || one.speedSource === 'estimated'),
   );
   const errors = found.flatMap(({ speedError }) => (speedError === null ? [] : [speedError]));
-  const judged = outcomes.filter((one) => whole(one) && one.verdict !== 'retake').length;
+  const judged = outcomes.filter(allows).length;
   return {
     found: found.length,
     judged,

@@ -17,6 +17,7 @@ function outcome(changes: Partial<CaseOutcome>): CaseOutcome {
     severity: null,
     lookAlike: 'sound',
     physicsLeavesSign: null,
+    visibleOrders: 5,
     fault: null,
     expectsRetake: false,
     verdict: 'none',
