@@ -19,6 +19,10 @@ fit [FILE]
 limits "40 k5"…
   Prints the limit deviations of tolerance classes by ISO 286.
 
+evaluate [--machines N] [--seed N] [--noise N] [--real FOLDER] [--json FILE] [--fit]
+  Judges the screening on simulated machines it was not fitted on, and on real recordings in FOLDER
+  (with an index.json), each figure beside its target. --fit fits the weights of the score first.
+
 Exit status: 0 done, 1 some input could not be read or answered, 2 wrong arguments.
 A screening is a hint for a qualified analyst, not a diagnosis and not a release to run.
 `;
