@@ -82,7 +82,10 @@ export async function makeDataDirectory(programs, options) {
   ]);
   rmSync(boot, { force: true });
   if (code !== 0) {
-    throw new SetupError(outputInWords(`MariaDB could not be set up in ${data}.`, output));
+    // It ends with a page of general advice; the cause stands in the lines before.
+    const errors = output.split('\n').filter((line) => /error/i.test(line));
+    const told = errors.length > 0 ? errors.join('\n') : output;
+    throw new SetupError(outputInWords(`MariaDB could not be set up in ${data}.`, told));
   }
   writeFileSync(mark, new Date().toISOString());
   return 'made';

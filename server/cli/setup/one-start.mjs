@@ -1,6 +1,15 @@
-import { mkdirSync, readFileSync, realpathSync, rmSync, writeFileSync } from 'node:fs';
+import {
+  accessSync,
+  constants,
+  existsSync,
+  mkdirSync,
+  readFileSync,
+  realpathSync,
+  rmSync,
+  writeFileSync,
+} from 'node:fs';
 import { createServer } from 'node:net';
-import { join } from 'node:path';
+import { dirname, join } from 'node:path';
 import { commandLine, endProcess, isRunning, workingFolder } from './processes.mjs';
 import { SetupError } from './say.mjs';
 
@@ -29,6 +38,8 @@ function isStart(pid) {
  * @throws {SetupError} if another start has it
  */
 export function takePlace(dataDirectory) {
+  // Asked beforehand, since mkdir on a read-only file system speaks of a missing folder.
+  if (!existsSync(dataDirectory)) accessSync(dirname(dataDirectory), constants.W_OK);
   mkdirSync(dataDirectory, { recursive: true, mode: 0o700 });
   const path = join(dataDirectory, 'start.pid');
   for (;;) {

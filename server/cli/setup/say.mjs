@@ -28,11 +28,11 @@ export async function step(name, work, remark = () => 'done') {
 /** What programs say of a fault, and what that means for the person at the terminal. @type {readonly [RegExp, string][]} */
 const knownFaults = [
   [
-    /ENOSPC|No space left on device|Errcode: 28|errno: 28|You don't have enough free space/i,
+    /ENOSPC|No space left on device|(?:Errcode:|errno:|error) 28\b|You don't have enough free space/i,
     'The disk is full: free some space, then start again.',
   ],
   [
-    /EROFS|Read-only file system|Errcode: 30/i,
+    /EROFS|Read-only file system|(?:Errcode:|error) 30\b/i,
     'The project lies on a read-only file system: move it to one that can be written.',
   ],
   [
@@ -52,7 +52,7 @@ const knownFaults = [
     'No connection could be made. Check the network and the proxy settings, then start again.',
   ],
   [
-    /EACCES|EPERM|Permission denied|Errcode: 13/i,
+    /EACCES|EPERM|Permission denied|Errcode: 13\b/i,
     'This user may not write here. Run as the owner of the project folder, or change its owner.',
   ],
 ];

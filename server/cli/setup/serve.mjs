@@ -39,11 +39,12 @@ export async function serve(projectDirectory, mode) {
     const demo = ['1', 'true'].includes(environment.DEMO);
     if (demo) await step('Demo data', () => loadDemo(projectDirectory, environment), String);
     if (endings.begun()) return;
-    const serverAddress = await step(
+    const { address: serverAddress, said } = await step(
       'Server',
       () => startServer(projectDirectory, mode, environment, endings),
       () => 'listening',
     );
+    for (const line of said) process.stdout.write(`${line}\n`);
     let address = serverAddress;
     if (mode.beside) {
       const beside = mode.beside(serverAddress);
@@ -79,7 +80,7 @@ async function prepare(projectDirectory, endings) {
     process.stdout.write('Ended the server of an earlier start that was killed.\n');
   }
   await checkPort(host, port);
-  checkRoom(projectDirectory, existsSync(join(data, 'files')) ? 'later' : 'first');
+  checkRoom(data, existsSync(join(data, 'files')) ? 'later' : 'first');
   await step('npm packages', (note) => ensurePackages(projectDirectory, note), String);
 
   const secrets = installationSecrets(data);
@@ -146,7 +147,7 @@ async function loadDemo(projectDirectory, environment) {
  * @param {Mode} mode
  * @param {NodeJS.ProcessEnv} environment
  * @param {import('./endings.mjs').Endings} endings
- * @returns {Promise<string>} its address
+ * @returns {Promise<{ address: string, said: string[] }>}
  */
 function startServer(projectDirectory, mode, environment, endings) {
   return startServerProcess(projectDirectory, {

@@ -11,7 +11,7 @@ const endsWithinMs = 20_000;
  * @param {string} projectDirectory
  * @param {{ args: readonly string[], env: NodeJS.ProcessEnv, onSpawn: (child: import('node:child_process').ChildProcess) => void, onCrash: (how: string) => void }} options
  *   `onSpawn` hears of the process at once, `onCrash` when it ends by itself after it listened
- * @returns {Promise<string>} the address it listens on
+ * @returns {Promise<{ address: string, said: string[] }>} where it listens, and what else it said until then
  */
 export function startServerProcess(projectDirectory, { args, env, onSpawn, onCrash }) {
   const child = spawn(process.execPath, [...args, 'server/main.ts'], {
@@ -25,13 +25,12 @@ export function startServerProcess(projectDirectory, { args, env, onSpawn, onCra
   return new Promise((resolve, reject) => {
     let listening = false;
     /** @type {string[]} */
-    let early = [];
+    const early = [];
     const hear = (/** @type {NodeJS.WriteStream} */ to) => (/** @type {string} */ line) => {
       const address = /^listening on (\S+)/.exec(line)?.[1];
       if (address !== undefined) {
-        if (!listening) for (const said of early) process.stderr.write(`${said}\n`);
+        if (!listening) resolve({ address, said: early });
         listening = true;
-        resolve(address);
       } else if (listening) to.write(`${line}\n`);
       else early.push(line);
     };
@@ -41,7 +40,6 @@ export function startServerProcess(projectDirectory, { args, env, onSpawn, onCra
     child.on('close', (code, signal) => {
       if (listening) onCrash(signal === null ? `exit code ${code}` : `signal ${signal}`);
       else reject(new SetupError(outputInWords('The server could not start.', early.join('\n'))));
-      early = [];
     });
   });
 }
