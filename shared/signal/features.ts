@@ -22,6 +22,11 @@ export interface ScreeningFeatures {
   highOverLowDb: number;
   /** Median of how far orders 2–10 stand out, dB. */
   medianProminenceDb: number;
+  /** Mean of how far orders 1–10 stand out, 0 to 30 dB each, and how far 1× does. */
+  meanProminenceDb: number;
+  firstProminenceDb: number;
+  /** Mean size of the second differences of the levels from order to order, dB: a process or a resonance lifts single orders. */
+  unevennessDb: number;
   /** Half and third orders that stand out, and the level of the strongest against the strongest order, dB. */
   fractions: number;
   halfDb: number;
@@ -100,6 +105,13 @@ export function featuresOf(sources: FeatureSources): ScreeningFeatures {
     lowOrdersDb: db(powerOf(run2to10.filter(within(2, 3))), first ** 2),
     highOverLowDb: db(powerOf(run2to10.filter(within(4, 10))), low),
     medianProminenceDb: Math.max(-10, medianInPlace(prominences, prominences.length)),
+    meanProminenceDb: meanOf(
+      Array.from({ length: 10 }, (_, i) =>
+        clamp(whole.find((line) => line.order === i + 1)?.prominenceDb ?? 0, 0, 30),
+      ),
+    ),
+    firstProminenceDb: clamp(whole[0]?.order === 1 ? whole[0].prominenceDb : 0, -10, 60),
+    unevennessDb: unevenness(whole.filter(within(1, 10))),
     fractions: halves.length + thirds.length,
     halfDb: db(top(halves), strongest ** 2),
     thirdDb: db(top(thirds), strongest ** 2),
@@ -119,6 +131,20 @@ export function featuresOf(sources: FeatureSources): ScreeningFeatures {
           all
         : 0,
   };
+}
+
+const clamp = (value: number, low: number, high: number) => Math.min(high, Math.max(low, value));
+const meanOf = (values: readonly number[]) =>
+  values.reduce((sum, value) => sum + value, 0) / Math.max(1, values.length);
+
+function unevenness(lines: readonly OrderLine[]): number {
+  const levels = lines.map((line) => 20 * Math.log10(Math.max(line.velocityMmPerSRms, 1e-9)));
+  if (levels.length < 4) return 10;
+  return meanOf(
+    levels
+      .slice(2)
+      .map((level, i) => Math.abs(level - 2 * (levels[i + 1] ?? 0) + (levels[i] ?? 0))),
+  );
 }
 
 /** Synchronous power over all up to order 20, and steady over all power at orders 2 to 10. */

@@ -17,7 +17,7 @@ import type {
 } from './screening-types.ts';
 import type { SpectrumView } from './spectrum-view.ts';
 
-export const methodVersion = '1';
+export const methodVersion = '2';
 
 export const defaultLimits: ScreeningLimits = {
   suspectedScore: 0.5,
