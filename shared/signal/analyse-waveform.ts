@@ -92,7 +92,15 @@ export function analyseWaveform(input: ScreeningInput): WaveformAnalysis {
   const run = harmonicRun(orders);
   const revolution = averagedRevolution(tracked.velocity, speedHz, usableOrders);
   const truncation = findTruncation(revolution.displacementUm, values, clipping);
-  const features = featuresOf({ spectrum, usableOrders, orders, run, truncation, revolution });
+  const features = featuresOf({
+    spectrum,
+    usableOrders,
+    orders,
+    run,
+    truncation,
+    revolution,
+    machine,
+  });
   const shift = speedHz - speed.speedHz;
   const [low, high] = speed.intervalHz ?? [speedHz, speedHz];
   return {

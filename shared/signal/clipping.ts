@@ -67,12 +67,12 @@ const slopeCrowding = 8;
  * Whether the record was cut off before the instrument integrated it: then its steps from sample to
  * sample crowd at one extreme value, which integration and its high-pass leave nearly even.
  *
- * @param values - prepared samples in velocity (once) or displacement (twice integrated)
- * @param times - how often it was integrated
+ * Displacement is left alone: its second differences show the converter's steps.
+ *
+ * @param values - prepared samples in velocity
  */
-export function clippedBeforeIntegration(values: Float64Array, times: 1 | 2): boolean {
-  let steps = differences(values);
-  if (times === 2) steps = differences(steps);
+export function clippedBeforeIntegration(values: Float64Array): boolean {
+  const steps = differences(values);
   const sorted = steps.slice().sort();
   const [low, high] = [sorted[0] ?? 0, sorted[sorted.length - 1] ?? 0];
   const range = high - low;

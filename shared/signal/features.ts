@@ -2,7 +2,7 @@ import type { AveragedRevolution } from './averaged-revolution.ts';
 import { standsOut } from './harmonic-run.ts';
 import { medianInPlace } from './noise-floor.ts';
 import type { OrderSpectrum } from './order-spectra.ts';
-import type { HarmonicRun, OrderLine, Truncation } from './screening-types.ts';
+import type { HarmonicRun, MachineFacts, OrderLine, Truncation } from './screening-types.ts';
 import { momentsOf } from './turn-shape.ts';
 
 /** The numbers that the score is made of; each also stands in a sentence of the evidence. */
@@ -49,6 +49,8 @@ export interface ScreeningFeatures {
   displacementKurtosis: number;
   accelerationSkew: number;
   accelerationKurtosis: number;
+  /** 1 for a machine whose process itself gives running-speed families (reciprocating). */
+  familyByNature: number;
   /** Share of the orders' power that known sources explain, 0–1. */
   explainedShare: number;
 }
@@ -70,7 +72,11 @@ export interface FeatureSources {
   run: HarmonicRun;
   truncation: Truncation;
   revolution: AveragedRevolution;
+  machine?: MachineFacts;
 }
+
+/** Words in a machine's kind that tell of cranks and pistons. */
+const reciprocating = /reciprocating|piston|plunger|engine|diesel|crank/i;
 
 /** Takes the features from what the steps before have found. */
 export function featuresOf(sources: FeatureSources): ScreeningFeatures {
@@ -125,6 +131,7 @@ export function featuresOf(sources: FeatureSources): ScreeningFeatures {
     displacementKurtosis: displacement.kurtosis,
     accelerationSkew: Math.abs(acceleration.skewness),
     accelerationKurtosis: acceleration.kurtosis,
+    familyByNature: reciprocating.test(sources.machine?.assetKind ?? '') ? 1 : 0,
     explainedShare:
       all > 0
         ? powerOf(whole.filter((line) => line.explainedBy !== null && standsOut(line, strongest))) /

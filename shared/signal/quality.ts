@@ -12,7 +12,7 @@ const linesPerOrderMin = 6;
 const settlingFactor = 2.5;
 const stuckShareMax = 0.01;
 const cableJumpsMin = 2;
-const skiSlopeMax = 30;
+const skiSlopeMax = 25;
 
 const defect = (
   code: string,
@@ -85,9 +85,7 @@ export function qualityDefects(
       ),
     );
   }
-  const integrations = { acceleration: 0, velocity: 1, displacement: 2 } as const;
-  const times = integrations[prepared.quantity];
-  if (times !== 0 && clippedBeforeIntegration(values, times)) {
+  if (prepared.quantity === 'velocity' && clippedBeforeIntegration(values)) {
     found.push(
       defect(
         'overload-before-integration',

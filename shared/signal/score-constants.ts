@@ -20,6 +20,8 @@ export const scoreConstants = {
   /** A long run counts where the shaft rules the spectrum, and where it is strong. */
   perSteadyRun: 0.433,
   perStrongRun: 0.251,
+  /** Reciprocating machines show such families when sound: by hand, the set holds too few. */
+  perNature: 3,
   /** Orders that something known explains. */
   perUnexplained: 0.385,
 } as const;
