@@ -1,8 +1,9 @@
 // Stays beside a test run's MariaDB and takes it away when the run ends, however it ends: the pipe
 // to the run closes also when the run is killed, and then nobody else is left to clean up.
-import { rmSync } from 'node:fs';
+import { readFileSync, rmSync } from 'node:fs';
+import { join } from 'node:path';
 import { setTimeout as sleep } from 'node:timers/promises';
-import { endProcess, findProcesses } from './processes.mjs';
+import { endProcess, findProcesses, isRunning } from './processes.mjs';
 
 const directory = process.argv[2] ?? '';
 const shutDownWithinMs = 10_000;
@@ -12,8 +13,21 @@ for (const signal of /** @type {const} */ (['SIGINT', 'SIGTERM', 'SIGHUP'])) {
   process.on(signal, () => undefined);
 }
 
+/** The server's own word, for systems that do not show how a process was started. */
+function pidTold() {
+  try {
+    return Number(readFileSync(join(directory, 'mariadb.pid'), 'utf8'));
+  } catch {
+    return 0;
+  }
+}
+
 async function clearAway() {
-  const ours = () => findProcesses((words) => words.some((word) => word.includes(directory)));
+  const told = pidTold();
+  const ours = () => [
+    ...findProcesses((words) => words.some((word) => word.includes(directory))),
+    ...(told > 0 && isRunning(told) ? [told] : []),
+  ];
   await Promise.all(ours().map((pid) => endProcess(pid, shutDownWithinMs)));
   for (const pid of ours()) process.kill(pid, 'SIGKILL');
   await sleep(50);

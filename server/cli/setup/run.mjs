@@ -1,5 +1,6 @@
 import { spawn } from 'node:child_process';
 import { constants } from 'node:os';
+import { setTimeout as sleep } from 'node:timers/promises';
 
 /** What runs just now, with whether it may be broken off. @type {Map<import('node:child_process').ChildProcess, { mayEnd: boolean, gone: Promise<void> }>} */
 const running = new Map();
@@ -54,15 +55,31 @@ export function signalGroup(pid, signal) {
   }
 }
 
-/** Breaks off what `run` has going, and waits until it is gone. */
+/** Whether anything is left of a child and what it started. @param {number | undefined} pid */
+function groupIsThere(pid) {
+  if (pid === undefined) return false;
+  try {
+    process.kill(-pid, 0);
+    return true;
+  } catch {
+    return false;
+  }
+}
+
+/** Breaks off what `run` has going, and waits until it is gone with all it started. */
 export async function stopRunning() {
-  const patienceMs = 10_000;
+  const until = Date.now() + 10_000;
   await Promise.all(
-    [...running].map(async ([child, { mayEnd, gone }]) => {
-      if (mayEnd) signalGroup(child.pid, 'SIGTERM');
-      const impatient = setTimeout(() => mayEnd && signalGroup(child.pid, 'SIGKILL'), patienceMs);
+    [...running].map(async ([{ pid }, { mayEnd, gone }]) => {
+      if (!mayEnd) {
+        await gone;
+        return;
+      }
+      signalGroup(pid, 'SIGTERM');
+      // A child may end before what it started; a server of a test run waits for its database.
+      while (groupIsThere(pid) && Date.now() < until) await sleep(50);
+      signalGroup(pid, 'SIGKILL');
       await gone;
-      clearTimeout(impatient);
     }),
   );
 }
