@@ -8,9 +8,9 @@ import type { RealOutcome } from './real-recordings.ts';
 
 type ConstantName = keyof ScoreConstants;
 
-/** The constants the log-odds are linear in; the others are corners and caps, set by hand. */
-const fitted = (Object.keys(scoreConstants) as ConstantName[]).filter(
-  (name) => /^per[A-Z]/.test(name) || name === 'truncated' || name === 'synchronous',
+/** The constants the log-odds are linear in. */
+const fitted = (Object.keys(scoreConstants) as ConstantName[]).filter((name) =>
+  /^per[A-Z]/.test(name),
 );
 
 /** Ridge penalty on scaled weights. */
