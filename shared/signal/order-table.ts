@@ -1,5 +1,6 @@
 import { explanations, type Explanation } from './explained-orders.ts';
 import { chanceOfLine, medianInPlace } from './noise-floor.ts';
+import { noiseTilt } from './noise-tilt.ts';
 import type { OrderSpectrum } from './order-spectra.ts';
 import type { MachineFacts, OrderLine } from './screening-types.ts';
 import { plainVelocityRmsFactor } from './velocity-lines.ts';
@@ -12,7 +13,9 @@ const linesForThirds = 16;
 const floorReachOrders = 1.5;
 const floorLinesMin = 4;
 /** A median of neighbouring Hann lines is worth this share of as many independent ones (simulated). */
-const medianWorth = 0.4;
+const medianWorth = 0.3;
+/** The largest of three neighbouring Hann lines exceeds a level as often as one of so many independent ones (simulated: 2.4 at a chance of 0.2, 2.9 at 0.001). */
+const linesLookedAt = 2.7;
 /** Three neighbouring Hann lines of a tone together, over its power (Harris 1978). */
 const hannLobe = 1.5;
 
@@ -34,19 +37,32 @@ export interface OrderFloor {
   averages: number;
 }
 
+/** Whether a line belongs to a whole, half or (where it can be told apart) third order. */
+function orderLineTest({ linesPerOrder }: OrderSpectrum): (line: number) => boolean {
+  const grid = linesPerOrder >= linesForHalves ? 0.5 : 1;
+  const reach = 1.6 / linesPerOrder;
+  return (line) => {
+    const at = line / linesPerOrder;
+    return isNear(at, grid, reach) || (linesPerOrder > linesForThirds && isNear(at, 1 / 3, reach));
+  };
+}
+
 /**
  * Noise beside an order: the median of the averaged power between the whole, half and (where they
- * can be told apart) third orders, as far to one side as to the other. A gamma variable's median is
- * (1 − 1/9a)³ of its mean (Wilson and Hilferty 1931).
+ * can be told apart) third orders, as far to one side as to the other, levelled by the tilt. A gamma
+ * variable's median is (1 − 1/9a)³ of its mean (Wilson and Hilferty 1931).
+ *
+ * @param tilt - exponent of the noise's power over order
  */
-export function orderFloor({ power, averages, linesPerOrder }: OrderSpectrum, order: number) {
+export function orderFloor(spectrum: OrderSpectrum, order: number, tilt = 0) {
+  const { power, averages, linesPerOrder } = spectrum;
+  const isOrder = orderLineTest(spectrum);
   const centre = order * linesPerOrder;
   const lowest = Math.ceil(0.3 * linesPerOrder);
   const most = Math.min(
     Math.max(centre - lowest, 0.5 * linesPerOrder),
     Math.max(power.length - 1 - centre, 0.5 * linesPerOrder),
   );
-  const grid = linesPerOrder >= linesForHalves ? 0.5 : 1;
   const beside = new Float64Array(power.length);
   let count = 0;
   for (
@@ -58,10 +74,8 @@ export function orderFloor({ power, averages, linesPerOrder }: OrderSpectrum, or
     count = 0;
     const to = Math.min(power.length - 1, Math.floor(centre + reach));
     for (let k = Math.max(lowest, Math.ceil(centre - reach)); k <= to; k += 1) {
-      const at = k / linesPerOrder;
-      if (isNear(at, grid, 1.6 / linesPerOrder)) continue;
-      if (linesPerOrder > linesForThirds && isNear(at, 1 / 3, 1.6 / linesPerOrder)) continue;
-      beside[count++] = power[k] ?? 0;
+      if (isOrder(k)) continue;
+      beside[count++] = (power[k] ?? 0) * (tilt === 0 ? 1 : (k / centre) ** -tilt);
     }
   }
   const median = medianInPlace(beside, count);
@@ -89,6 +103,7 @@ export function orderTable(
   const known = explanations(speedHz, machine, usableHz);
   const widthHz = speedHz / linesPerOrder;
   const lines: OrderLine[] = [];
+  const tilt = noiseTilt(spectrum, orderLineTest(spectrum));
   for (const order of tableOrders) {
     const frequencyHz = order * speedHz;
     if (frequencyHz > usableHz) break;
@@ -100,7 +115,7 @@ export function orderTable(
       best = Math.max(best, power[k] ?? 0);
       sum += power[k] ?? 0;
     }
-    const floor = orderFloor(spectrum, order);
+    const floor = orderFloor(spectrum, order, order < 2 * floorReachOrders ? tilt : 0);
     const ratio = best / floor.power;
     const velocityMmPerSRms = Math.sqrt(Math.max(best, sum / hannLobe));
     lines.push({
@@ -110,7 +125,7 @@ export function orderTable(
       amplitudePeak: velocityMmPerSRms / plainVelocityRmsFactor(quantity, frequencyHz) / factor,
       floorMmPerSRms: Math.sqrt(floor.power),
       prominenceDb: 10 * Math.log10(Math.max(ratio, 1e-12)),
-      pNoise: chanceOfLine(ratio, 2, averages, floor.averages),
+      pNoise: chanceOfLine(ratio, linesLookedAt, averages, floor.averages),
       explainedBy: explanationOf(known, frequencyHz, widthHz)?.words ?? null,
     });
   }
