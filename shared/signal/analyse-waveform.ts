@@ -1,6 +1,7 @@
 import { averagedRevolution, type AveragedRevolution } from './averaged-revolution.ts';
 import { bandVelocity } from './band-velocity.ts';
 import { findClipping, type Clipping } from './clipping.ts';
+import { familyChance } from './family-chance.ts';
 import { featuresOf, type ScreeningFeatures } from './features.ts';
 import { findSpeed } from './find-speed.ts';
 import { harmonicRun } from './harmonic-run.ts';
@@ -78,7 +79,7 @@ export function analyseWaveform(input: ScreeningInput): WaveformAnalysis {
   const aboutHz = (input.toldSpeedRpm ?? machine?.nominalSpeedRpm ?? typicalSpeedHz * 60) / 60;
   const view = viewSpectrum(values, sampleRateHz, quantity, aboutHz * (machine?.shaftRatio ?? 1));
   const found = findSpeed(view, input.toldSpeedRpm, input.toldSpeedTolerance, machine);
-  const { supported: speedSupported, ...speed } = found;
+  const { supported: speedSupported, speedsTried, ...speed } = found;
   if (speed.speedHz === null) return { ...nothing, view };
   const durationS = values.length / sampleRateHz;
   const band = bandVelocity(view, durationS, speed.speedHz);
@@ -89,7 +90,7 @@ export function analyseWaveform(input: ScreeningInput): WaveformAnalysis {
   const { speedHz } = tracked;
   const usableOrders = view.usableHz / speedHz;
   const orders = orderTable(spectrum, speedHz, view.usableHz, machine, quantity, factor);
-  const run = harmonicRun(orders);
+  const run = harmonicRun(orders, speedsTried * familyChance(spectrum, orders), speedsTried);
   const revolution = averagedRevolution(tracked.velocity, speedHz, usableOrders);
   const truncation = findTruncation(revolution.displacementUm, values, clipping);
   const features = featuresOf({

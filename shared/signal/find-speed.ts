@@ -2,6 +2,9 @@ import type { MachineFacts, SpeedReading } from './screening-types.ts';
 import { peakNear, type SpectrumView } from './spectrum-view.ts';
 
 const defaultTolerance = 0.03;
+const flankShare = 0.03;
+/** Base-2 logarithm that the strongest of three noise lines passes once in ten times. */
+const noiseSays = 2.2;
 const ordersUsed = 12;
 const orderWeights = Array.from(
   { length: ordersUsed + 1 },
@@ -14,6 +17,8 @@ const sayMax = Math.log2(1 + 300);
 const outlierLines = 0.6;
 /** Standard error of an interpolated Hann line at a power ratio of 1, lines (close to the Cramér–Rao bound times 1.2). */
 const lineErrorAtUnity = 0.55;
+/** Speeds a line apart are as many independent ones to the family: its middle order moves so many lines. */
+const independentPerLine = 6;
 const supportRatio = 12;
 
 /** Every line's say: the logarithm of the strongest of three lines over the floor, capped. */
@@ -22,7 +27,10 @@ function sayings(view: SpectrumView): Float64Array {
   const say = new Float64Array(ratio.length);
   for (let i = 1; i < ratio.length - 1; i += 1) {
     const best = Math.max(ratio[i - 1] ?? 0, ratio[i] ?? 0, ratio[i + 1] ?? 0);
-    say[i] = Math.min(sayMax, Math.log2(1 + best));
+    // Above the cap a line still says a little: the middle of a strong line must beat its flanks.
+    // What noise says as a rule is taken off: over many orders it would outweigh one strong line.
+    const said = Math.max(0, Math.log2(1 + best) - noiseSays);
+    say[i] = Math.min(sayMax, said) + flankShare * said;
   }
   return say;
 }
@@ -85,18 +93,26 @@ function refine(view: SpectrumView, speedHz: number) {
  * within its tolerance, or one estimated within the machine's range.
  *
  * @param toldSpeedRpm - of the machine; the position's shaft turns at that times its ratio
+ * @returns also whether lines support the speed, and how many independent speeds it was chosen from
  */
 export function findSpeed(
   view: SpectrumView,
   toldSpeedRpm: number | undefined,
   tolerance: number | undefined,
   machine: MachineFacts | undefined,
-): SpeedReading & { supported: boolean } {
+): SpeedReading & { supported: boolean; speedsTried: number } {
   const ratio = machine?.shaftRatio ?? 1;
   const told = toldSpeedRpm !== undefined && toldSpeedRpm > 0 ? (toldSpeedRpm / 60) * ratio : null;
   const range = rangeOf(told, tolerance, machine, view);
   if (range === null) {
-    return { speedHz: null, source: 'none', intervalHz: null, alternatives: [], supported: false };
+    return {
+      speedHz: null,
+      source: 'none',
+      intervalHz: null,
+      alternatives: [],
+      supported: false,
+      speedsTried: 1,
+    };
   }
   const say = sayings(view);
   const rough = bestIn(say, view, range[0], range[1]);
@@ -105,7 +121,14 @@ export function findSpeed(
   const supported = support > 0 && inside;
   if (!supported) {
     if (told === null) {
-      return { speedHz: null, source: 'none', intervalHz: null, alternatives: [], supported };
+      return {
+        speedHz: null,
+        source: 'none',
+        intervalHz: null,
+        alternatives: [],
+        supported,
+        speedsTried: 1,
+      };
     }
     const width = told * (tolerance ?? defaultTolerance);
     return {
@@ -114,6 +137,7 @@ export function findSpeed(
       intervalHz: [told - width, told + width],
       alternatives: [],
       supported,
+      speedsTried: 1,
     };
   }
   return {
@@ -122,6 +146,7 @@ export function findSpeed(
     intervalHz: [speedHz - 1.96 * spread, speedHz + 1.96 * spread],
     alternatives: alternativesOf(say, view, speedHz, machine, told === null),
     supported,
+    speedsTried: Math.max(1, ((range[1] - range[0]) / view.stepHz) * independentPerLine),
   };
 }
 

@@ -18,10 +18,18 @@ const open = (line: OrderLine) => line.explainedBy === null;
 
 /**
  * The longest run of whole orders that stand out, how many do, and how they fall off. The chance of
- * a run by luck is that of independent lines: at most (N − L + 1)·pᴸ, with the largest chance of the
- * run's own lines as p.
+ * luck is the smaller of two, times two: that of the first orders lifted together, and that of an
+ * unbroken run of independent lines, at most (N − L + 1)·pᴸ, with the largest chance of the run's
+ * own lines as p, times the speeds it could have been found at.
+ *
+ * @param pFamily - chance of the family as a whole
+ * @param speedsTried - independent speeds among which the best was chosen
  */
-export function harmonicRun(orders: readonly OrderLine[]): HarmonicRun {
+export function harmonicRun(
+  orders: readonly OrderLine[],
+  pFamily = 1,
+  speedsTried = 1,
+): HarmonicRun {
   const strongest = Math.max(0, ...orders.map((line) => line.velocityMmPerSRms));
   const whole = orders.filter((line) => isWhole(line.order));
   const out = new Set(whole.filter((line) => standsOut(line, strongest)).map((line) => line.order));
@@ -39,13 +47,15 @@ export function harmonicRun(orders: readonly OrderLine[]): HarmonicRun {
   const inRun = whole.filter((line) => line.order >= best.from && line.order <= best.to);
   const worstP = Math.max(1e-300, ...inRun.map((line) => line.pNoise));
   const places = Math.max(1, whole.length - best.length + 1);
+  // A single line is no run.
+  const pRun = best.length < 2 ? 1 : speedsTried * places * worstP ** best.length;
   const fraction = (test: (order: number) => boolean, reach: number) =>
     orders.filter(
       (line) => test(line.order) && line.order < reach && open(line) && standsOut(line, strongest),
     ).length;
   return {
     ...best,
-    pChance: best.length === 0 ? 1 : Math.min(1, places * worstP ** best.length),
+    pChance: Math.min(1, 2 * Math.min(pRun, pFamily)),
     significantOfFirst10: [...out].filter((order) => order <= 10).length,
     significantOfFirst20: out.size,
     slopeDbPerOrder: slope(inRun),

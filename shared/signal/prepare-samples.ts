@@ -13,6 +13,9 @@ const toBase: Readonly<Record<Unit, number>> = {
   mil: 25.4,
 };
 
+/** No sensor reads as much in any unit: larger values are gaps, and their powers stay finite. */
+const largestSample = 1e12;
+
 export interface PreparedSamples {
   /** As recorded, as far as analysed. */
   raw: Float64Array;
@@ -27,7 +30,7 @@ export interface PreparedSamples {
 }
 
 /**
- * Makes samples fit to be transformed: gaps (non-finite values) bridged by straight lines and
+ * Makes samples fit to be transformed: gaps (values that are not finite or beyond all measure) bridged by straight lines and
  * counted, the mean taken out, the unit made m/s², mm/s or µm.
  *
  * @param samples - recorded values; not changed
@@ -40,7 +43,7 @@ export function prepareSamples(samples: Float64Array, unit: Unit): PreparedSampl
   let known = false;
   for (let i = 0; i < count; i += 1) {
     const value = samples[i] ?? Number.NaN;
-    if (!Number.isFinite(value)) {
+    if (!(Math.abs(value) < largestSample)) {
       gapCount += 1;
       gap += 1;
       longestGap = Math.max(longestGap, gap);

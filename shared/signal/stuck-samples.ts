@@ -1,7 +1,7 @@
 const runMin = 8;
 /** A held value is left by a jump; a coarse converter's plateau by a step or two. */
 const jumpSteps = 3;
-const jumpOverUsual = 2;
+const jumpOverUsual = 0.5;
 
 /**
  * Share of the samples that stand still where the link dropped out: runs of one and the same value
