@@ -10,7 +10,7 @@ function screenNoise(colour: (typeof noiseColours)[number], records: number, tol
   let [orders, below5, below1, runs, flagged] = [0, 0, 0, 0, 0];
   for (let seed = 1; seed <= records; seed += 1) {
     const input = {
-      samples: colouredNoise(colour, 8192, 7919 * seed),
+      samples: colouredNoise(colour, 8192, 7919 * seed + noiseColours.indexOf(colour)),
       sampleRateHz,
       unit: 'mm/s' as const,
       toldSpeedRpm: told ? 1500 : undefined,
@@ -36,7 +36,8 @@ describe('noise of any colour', () => {
       const found = screenNoise(colour, 50, true);
       const where = JSON.stringify({ colour, ...found });
       expect(found.flagged, where).toBe(0);
-      expect(found.runs, where).toBe(0);
+      // Of 50 chances of one in a thousand two come true once in a thousand times.
+      expect(found.runs, where).toBeLessThanOrEqual(1);
       // Sampling error of some 3,800 orders, neighbours sharing a floor: half a per cent at 5 %.
       expect(found.share5, where).toBeGreaterThan(0.02);
       expect(found.share5, where).toBeLessThan(0.055);
