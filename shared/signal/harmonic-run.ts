@@ -5,6 +5,10 @@ const significantBelowP = 1e-3;
 /** … and it is more than a trace of the family's strongest line. */
 const traceShare = 0.01;
 
+/** Two ways to be lucky: most of the risk goes to the family, since the chance of a real run is tiny. */
+const familyShare = 1.1;
+const runShare = 11;
+
 const isWhole = (order: number) => Number.isInteger(order);
 const isHalf = (order: number) => Number.isInteger(order * 2) && !isWhole(order);
 
@@ -18,7 +22,7 @@ const open = (line: OrderLine) => line.explainedBy === null;
 
 /**
  * The longest run of whole orders that stand out, how many do, and how they fall off. The chance of
- * luck is the smaller of two, times two: that of the first orders lifted together, and that of an
+ * luck is the smaller of two, each with its share of the risk: that of the first orders lifted together, and that of an
  * unbroken run of independent lines, at most (N − L + 1)·pᴸ, with the largest chance of the run's
  * own lines as p, times the speeds it could have been found at.
  *
@@ -55,7 +59,7 @@ export function harmonicRun(
     ).length;
   return {
     ...best,
-    pChance: Math.min(1, 2 * Math.min(pRun, pFamily)),
+    pChance: Math.min(1, familyShare * pFamily, runShare * pRun),
     significantOfFirst10: [...out].filter((order) => order <= 10).length,
     significantOfFirst20: out.size,
     slopeDbPerOrder: slope(inRun),

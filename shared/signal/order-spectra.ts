@@ -19,6 +19,7 @@ export interface OrderSpectrum {
   power: Float64Array;
   /** The same of the mean of the complex lines: what keeps its phase to the shaft. */
   coherentPower: Float64Array;
+  segmentCount: number;
   /** Independent averages the mean power is worth; 0 without segments. */
   averages: number;
 }
@@ -103,6 +104,7 @@ export function averageSegments({ linesPerOrder, segments }: OrderSegments): Ord
     linesPerOrder,
     power,
     coherentPower,
+    segmentCount: segments.length,
     averages: segments.length <= 1 ? segments.length : count / overlapLoss,
   };
 }
