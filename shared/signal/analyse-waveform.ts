@@ -12,6 +12,7 @@ import {
   type OrderSpectrum,
 } from './order-spectra.ts';
 import { orderTable } from './order-table.ts';
+import { phaseCorrection } from './phase-correction.ts';
 import { prepareSamples, type PreparedSamples } from './prepare-samples.ts';
 import type {
   HarmonicRun,
@@ -51,6 +52,8 @@ export interface OrderFamily {
 }
 
 const samplesMin = 16;
+/** Standard error of the speed over what the phases' noise alone would give (simulated: 1.1–1.4). */
+const errorOverBound = 1.4;
 /** Typical speed for the first look, before the speed is known, Hz. */
 const typicalSpeedHz = 25;
 
@@ -85,9 +88,11 @@ export function analyseWaveform(input: ScreeningInput): WaveformAnalysis {
   const band = bandVelocity(view, durationS, speed.speedHz);
   const tracked = trackAngle(band, speed.speedHz);
   const turns = segmentTurns(tracked.velocity.length / pointsPerTurn);
-  const spectrum = averageSegments(orderSegments(tracked.velocity, turns, turns / 2));
+  const segments = orderSegments(tracked.velocity, turns, turns / 2);
+  const spectrum = averageSegments(segments);
   if (spectrum.averages === 0) return { ...nothing, view, speed, speedSupported };
-  const { speedHz } = tracked;
+  const correction = phaseCorrection(tracked.velocity, segments);
+  const speedHz = tracked.speedHz * (1 + correction.shift);
   const usableOrders = view.usableHz / speedHz;
   const orders = orderTable(spectrum, speedHz, view.usableHz, machine, quantity, factor);
   const run = harmonicRun(orders, speedsTried * familyChance(spectrum, orders), speedsTried);
@@ -102,16 +107,28 @@ export function analyseWaveform(input: ScreeningInput): WaveformAnalysis {
     revolution,
     machine,
   });
-  const shift = speedHz - speed.speedHz;
-  const [low, high] = speed.intervalHz ?? [speedHz, speedHz];
+  const intervalHz = intervalOf(speed, speedHz, correction.error);
   return {
     prepared,
     clipping,
     view,
-    speed: { ...speed, speedHz, intervalHz: [low + shift, high + shift] },
+    speed: { ...speed, speedHz, intervalHz },
     speedSupported,
     family: { spectrum, orders, run, revolution, truncation, features, wander: tracked.wander },
   };
+}
+
+/** 95 % interval: by the phases where orders are strong enough to give it, else as found. */
+function intervalOf(
+  found: SpeedReading,
+  speedHz: number,
+  relativeError: number,
+): readonly [number, number] {
+  const half =
+    relativeError > 0
+      ? 1.96 * errorOverBound * relativeError * speedHz
+      : ((found.intervalHz?.[1] ?? 0) - (found.intervalHz?.[0] ?? 0)) / 2;
+  return [speedHz - half, speedHz + half];
 }
 
 /**

@@ -36,7 +36,7 @@ const rounds = 2;
 /** A correction of the mean speed by more lines of the whole record follows some other line. */
 const shiftMaxLines = 1.2;
 /** By how much the family must gain, in nepers of power over all orders, for the following to be believed. */
-const gainMin = 0.02;
+const gainMin = 0.15;
 const sharpOrders = 20;
 
 /**
