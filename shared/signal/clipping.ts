@@ -13,6 +13,10 @@ const bandShare = 0.02;
 const samplesMin = 6;
 const sampleShareMin = 5e-4;
 const runsMin = 2;
+/** Samples on the rail over those in the band below it; a sine's own dwelling reaches 1. */
+const crowding = 2;
+/** Values closer than this share of the range are one level of the converter. */
+const levelApart = 1e-6;
 
 /**
  * Whether the instrument cut the record off: it clips every excursion at one and the same value, so
@@ -30,8 +34,8 @@ export function findClipping(samples: Float64Array): Clipping {
   }
   const range = high - low;
   if (!(range > 0)) return { upper: false, lower: false, share: 0 };
-  const upper = rail(samples, (value) => (high - value) / range);
-  const lower = rail(samples, (value) => (value - low) / range);
+  const upper = rail(samples, high, range);
+  const lower = rail(samples, low, -range);
   return {
     upper: upper.clipped,
     lower: lower.clipped,
@@ -39,10 +43,13 @@ export function findClipping(samples: Float64Array): Clipping {
   };
 }
 
-function rail(samples: Float64Array, distance: (value: number) => number) {
-  let [count, below, runs, run] = [0, 0, 0, 0];
-  for (const value of samples) {
-    const away = distance(value);
+/** @param range - signed: from the rail back to the other extreme, taken away from `extreme` */
+function rail(samples: Float64Array, extreme: number, range: number) {
+  let [count, runs, run] = [0, 0, 0];
+  const levels = [1, 1, 1];
+  const [first, second, third] = [0, 1, 2];
+  for (let i = 0; i < samples.length; i += 1) {
+    const away = (extreme - (samples[i] ?? NaN)) / range;
     if (away <= railShare) {
       count += 1;
       run += 1;
@@ -50,13 +57,25 @@ function rail(samples: Float64Array, distance: (value: number) => number) {
       continue;
     }
     run = 0;
-    if (away <= bandShare) below += 1;
+    // The nearest levels in use below the rail: a coarse converter has few within the band.
+    if (!(away < (levels[third] ?? 1))) continue;
+    if (away < (levels[first] ?? 1) - levelApart) levels.unshift(away);
+    else if (away > (levels[first] ?? 1) + levelApart) {
+      if (away < (levels[second] ?? 1) - levelApart) levels.splice(1, 0, away);
+      else if (away > (levels[second] ?? 1) + levelApart) levels.splice(2, 0, away);
+    }
+    levels.length = 3;
   }
-  const clipped =
-    count >= Math.max(samplesMin, sampleShareMin * samples.length) &&
-    runs >= runsMin &&
-    count > 2 * below;
-  return { clipped, count };
+  if (count < Math.max(samplesMin, sampleShareMin * samples.length) || runs < runsMin) {
+    return { clipped: false, count };
+  }
+  const band = Math.max(bandShare, (levels[third] ?? 1) + levelApart);
+  let below = 0;
+  for (let i = 0; i < samples.length; i += 1) {
+    const away = (extreme - (samples[i] ?? NaN)) / range;
+    if (away > railShare && away <= band) below += 1;
+  }
+  return { clipped: count > crowding * below, count };
 }
 
 const slopeRailShare = 0.03;

@@ -44,7 +44,8 @@ export function realFft(samples: Float64Array): Float64Array {
   const n = samples.length;
   if (n < 2) return Float64Array.of(samples[0] ?? 0, 0);
   const half = Math.floor(n / 2) + 1;
-  if (!isPowerOfTwo(n)) return bluestein(samples, half);
+  if (!isPowerOfTwo(n))
+    return n % 2 === 0 ? packedTransform(samples, half) : oddTransform(samples, half);
   const out = new Float64Array(2 * n);
   if (n >= 4) planOf(n).realTransform(asNumbers(out), asNumbers(samples));
   else out.set([(samples[0] ?? 0) + (samples[1] ?? 0), 0, (samples[0] ?? 0) - (samples[1] ?? 0)]);
@@ -79,7 +80,8 @@ export function realFromLines(lines: Float64Array, length: number): Float64Array
 }
 
 function chirpOf(n: number): Chirp {
-  const m = nextPowerOfTwo(2 * n);
+  // A circular convolution of 2n − 1 points holds all differences of two indices.
+  const m = nextPowerOfTwo(2 * n - 1);
   const cos = new Float64Array(n);
   const sin = new Float64Array(n);
   const b = new Float64Array(2 * m);
@@ -99,15 +101,43 @@ function chirpOf(n: number): Chirp {
   return { cos, sin, kernel, convolutionLength: m };
 }
 
-function bluestein(samples: Float64Array, half: number): Float64Array {
+/**
+ * Even lengths: two neighbouring samples are one complex number, half as many are transformed, and
+ * the lines of even and odd samples are told apart by their symmetry.
+ */
+function packedTransform(samples: Float64Array, half: number): Float64Array {
+  const n = samples.length / 2;
+  const z = bluestein(samples, n);
+  const out = new Float64Array(2 * half);
+  for (let k = 0; k < half; k += 1) {
+    const [i, j] = [2 * (k % n), 2 * ((n - k) % n)];
+    const [zr, zi, yr, yi] = [z[i] ?? 0, z[i + 1] ?? 0, z[j] ?? 0, z[j + 1] ?? 0];
+    const [evenRe, evenIm] = [0.5 * (zr + yr), 0.5 * (zi - yi)];
+    const [oddRe, oddIm] = [0.5 * (zi + yi), 0.5 * (yr - zr)];
+    const angle = (-Math.PI * k) / n;
+    const [c, s] = [Math.cos(angle), Math.sin(angle)];
+    out[2 * k] = evenRe + oddRe * c - oddIm * s;
+    out[2 * k + 1] = evenIm + oddRe * s + oddIm * c;
+  }
+  return out;
+}
+
+function oddTransform(samples: Float64Array, half: number): Float64Array {
   const n = samples.length;
+  const complex = new Float64Array(2 * n);
+  for (let i = 0; i < n; i += 1) complex[2 * i] = samples[i] ?? 0;
+  return bluestein(complex, n).slice(0, 2 * half);
+}
+
+/** Transform of `n` interleaved complex numbers by the chirp. */
+function bluestein(complex: Float64Array, n: number): Float64Array {
   const { cos, sin, kernel, convolutionLength: m } = kept(chirps, chirpsMax, n, () => chirpOf(n));
   const plan = planOf(m);
   const a = new Float64Array(2 * m);
   for (let k = 0; k < n; k += 1) {
-    const x = samples[k] ?? 0;
-    a[2 * k] = x * (cos[k] ?? 0);
-    a[2 * k + 1] = -x * (sin[k] ?? 0);
+    const [re, im, c, s] = [complex[2 * k] ?? 0, complex[2 * k + 1] ?? 0, cos[k] ?? 0, sin[k] ?? 0];
+    a[2 * k] = re * c + im * s;
+    a[2 * k + 1] = im * c - re * s;
   }
   const fa = new Float64Array(2 * m);
   plan.transform(asNumbers(fa), asNumbers(a));
@@ -117,8 +147,8 @@ function bluestein(samples: Float64Array, half: number): Float64Array {
     fa[k + 1] = aRe * bIm + aIm * bRe;
   }
   plan.inverseTransform(asNumbers(a), asNumbers(fa));
-  const out = new Float64Array(2 * half);
-  for (let k = 0; k < half; k += 1) {
+  const out = new Float64Array(2 * n);
+  for (let k = 0; k < n; k += 1) {
     const [re, im, c, s] = [a[2 * k] ?? 0, a[2 * k + 1] ?? 0, cos[k] ?? 0, sin[k] ?? 0];
     out[2 * k] = re * c + im * s;
     out[2 * k + 1] = im * c - re * s;

@@ -40,13 +40,14 @@ export function phaseCorrection(
     used.reduce((sum, { order, noise }) => {
       const turn = -2 * Math.PI * order * shift * hopTurns;
       const at = 2 * order * shortTurns;
-      let [re, im] = [0, 0];
-      short.forEach((lines, s) => {
-        const [c, d] = [Math.cos(turn * s), Math.sin(turn * s)];
+      const [stepRe, stepIm] = [Math.cos(turn), Math.sin(turn)];
+      let [re, im, c, d] = [0, 0, 1, 0];
+      for (const lines of short) {
         const [a, b] = [lines[at] ?? 0, lines[at + 1] ?? 0];
         re += a * c - b * d;
         im += a * d + b * c;
-      });
+        [c, d] = [c * stepRe - d * stepIm, c * stepIm + d * stepRe];
+      }
       return sum + (re * re + im * im) / noise;
     }, 0);
   const step = reachLines / (top * turns) / steps;

@@ -117,8 +117,9 @@ function verdictOf(score: number | null, limits: ScreeningLimits): Verdict {
 /** The spectrum as it is plotted: peak values in the recorded unit. */
 function plotSpectrum(view: SpectrumView | null, prepared: PreparedSamples) {
   if (view === null) return { stepHz: 1, amplitudePeak: new Float32Array(0) };
-  return {
-    stepHz: view.stepHz,
-    amplitudePeak: Float32Array.from(view.amplitudePeak, (value) => value / prepared.factor),
-  };
+  const amplitudePeak = new Float32Array(view.amplitudePeak.length);
+  for (let k = 0; k < amplitudePeak.length; k += 1) {
+    amplitudePeak[k] = (view.amplitudePeak[k] ?? 0) / prepared.factor;
+  }
+  return { stepHz: view.stepHz, amplitudePeak };
 }
