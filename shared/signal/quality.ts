@@ -1,6 +1,7 @@
 import type { WaveformAnalysis } from './analyse-waveform.ts';
 import { countCableJumps } from './cable-jumps.ts';
 import { clippedBeforeIntegration } from './clipping.ts';
+import { countLevels } from './converter-levels.ts';
 import type { QualityDefect, ScreeningInput, ScreeningLimits } from './screening-types.ts';
 import { settlingDrift, skiSlopeRatio } from './slow-drift.ts';
 import { stuckShare } from './stuck-samples.ts';
@@ -11,6 +12,8 @@ const linesPerOrderMin = 6;
 /** A record that has not settled drifts by more than this many of its own rms. */
 const settlingFactor = 2.5;
 const stuckShareMax = 0.01;
+/** Eight levels are three bits: their steps alone make lines at every order. */
+const levelsMin = 10;
 const cableJumpsMin = 2;
 const skiSlopeMax = 25;
 
@@ -82,6 +85,17 @@ export function qualityDefects(
         true,
         `The instrument cut the record off on ${side}: ${(clipping.share * 100).toFixed(1)} % of the samples sit on one and the same extreme value.`,
         'Set a larger range, let the input settle, and measure again.',
+      ),
+    );
+  }
+  const levels = countLevels(prepared.raw, levelsMin);
+  if (levels < levelsMin) {
+    found.push(
+      defect(
+        'few-levels',
+        true,
+        `The record has ${levels} different values only: its steps hide the vibration.`,
+        'Set a smaller range, so that the signal fills a good part of it, and measure again.',
       ),
     );
   }
