@@ -78,37 +78,60 @@ function rail(samples: Float64Array, extreme: number, range: number) {
   return { clipped: count > crowding * below, count };
 }
 
-const slopeRailShare = 0.03;
-const slopeSamplesMin = 0.03;
-const slopeCrowding = 8;
+/** On the rail: this near to the extreme step, over the range of steps; the integrator's high-pass lets the rail drift. */
+const stepRailShare = 0.075;
+/** A step counts as held where it differs from the one before by less than this share of the usual. */
+const heldShare = 0.1;
+const heldMin = 0.45;
+/** Steps so near to their extreme are this much more than those beside them where wide noise was cut off. */
+const crowdShare = 0.02;
+const crowdMin = 0.08;
+const crowdFactor = 8;
+const stepsMin = 8;
+const stepShareMin = 1e-3;
+/** Differences below this share of the peak are rounding. */
+const roundingShare = 1e-9;
+/** With fewer of the converter's own steps in the largest one, equal steps mean nothing. */
+const quantaMin = 120;
 
 /**
- * Whether the record was cut off before the instrument integrated it: then its steps from sample to
- * sample crowd at one extreme value, which integration and its high-pass leave nearly even.
+ * Whether the record was cut off before the instrument integrated it. Its steps from sample to
+ * sample (their differences, if integrated twice) then stand still at the rail, where those of a
+ * sound record pass their extreme. The high-pass of the integrator tilts the rail, so that standing
+ * still tells it, not one value.
  *
- * Displacement is left alone: its second differences show the converter's steps.
- *
- * @param values - prepared samples in velocity
+ * @param values - prepared samples in velocity (once integrated) or displacement (twice)
  */
-export function clippedBeforeIntegration(values: Float64Array): boolean {
-  const steps = differences(values);
-  const sorted = steps.slice().sort();
-  const [low, high] = [sorted[0] ?? 0, sorted[sorted.length - 1] ?? 0];
-  const range = high - low;
-  if (!(range > 0)) return false;
-  const near = (from: number, to: number, up: boolean) => {
-    let count = 0;
-    for (const step of steps) {
-      const away = (up ? high - step : step - low) / range;
-      if (away >= from && away < to) count += 1;
+export function clippedBeforeIntegration(values: Float64Array, times: 1 | 2 = 1): boolean {
+  const steps = times === 1 ? differences(values) : differences(differences(values));
+  let [low, high, smallest, squares, peak] = [Infinity, -Infinity, Infinity, 0, 0];
+  for (let i = 0; i < values.length; i += 1) peak = Math.max(peak, Math.abs(values[i] ?? 0));
+  for (let i = 1; i < steps.length; i += 1) {
+    const step = steps[i] ?? 0;
+    if (step > high) high = step;
+    if (step < low) low = step;
+    const change = Math.abs(step - (steps[i - 1] ?? 0));
+    if (change < smallest && change > roundingShare * peak) smallest = change;
+    squares += change * change;
+  }
+  if (!(high - low > quantaMin * smallest)) return false;
+  const reach = stepRailShare * (high - low);
+  const crowdReach = crowdShare * (high - low);
+  const held = heldShare * Math.sqrt(squares / steps.length);
+  return [high, low].some((rail) => {
+    let [onRail, still, crowd, beside] = [0, 0, 0, 0];
+    for (let i = 1; i < steps.length; i += 1) {
+      const step = steps[i] ?? 0;
+      const away = Math.abs(step - rail);
+      if (away > reach) continue;
+      if (away < crowdReach) crowd += 1;
+      else if (away < 2 * crowdReach) beside += 1;
+      onRail += 1;
+      if (Math.abs(step - (steps[i - 1] ?? 0)) < held) still += 1;
     }
-    return count / steps.length;
-  };
-  return [true, false].some((up) => {
-    const share = near(0, slopeRailShare, up);
     return (
-      share > slopeSamplesMin &&
-      share > slopeCrowding * near(slopeRailShare, 2 * slopeRailShare, up)
+      (onRail >= Math.max(stepsMin, stepShareMin * steps.length) && still > heldMin * onRail) ||
+      (crowd > crowdMin * steps.length && crowd > crowdFactor * beside)
     );
   });
 }

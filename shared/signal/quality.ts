@@ -99,7 +99,10 @@ export function qualityDefects(
       ),
     );
   }
-  if (prepared.quantity === 'velocity' && clippedBeforeIntegration(values)) {
+  if (
+    prepared.quantity !== 'acceleration' &&
+    clippedBeforeIntegration(values, prepared.quantity === 'velocity' ? 1 : 2)
+  ) {
     found.push(
       defect(
         'overload-before-integration',
