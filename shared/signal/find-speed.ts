@@ -88,9 +88,19 @@ function refine(view: SpectrumView, speedHz: number) {
   return { speedHz: current, spread, support };
 }
 
+const notFound = {
+  speedHz: null,
+  source: 'none',
+  intervalHz: null,
+  alternatives: [],
+  supported: false,
+  speedsTried: 1,
+} as const;
+
 /**
  * Running speed of the position's shaft from the whole family of its orders: a told speed refined
- * within its tolerance, or one estimated within the machine's range.
+ * within its tolerance, or one estimated within the machine's range; where no line tells, the told
+ * or else the nominal speed stands.
  *
  * @param toldSpeedRpm - of the machine; the position's shaft turns at that times its ratio
  * @returns also whether lines support the speed, and how many independent speeds it was chosen from
@@ -104,40 +114,24 @@ export function findSpeed(
   const ratio = machine?.shaftRatio ?? 1;
   const told = toldSpeedRpm !== undefined && toldSpeedRpm > 0 ? (toldSpeedRpm / 60) * ratio : null;
   const range = rangeOf(told, tolerance, machine, view);
-  if (range === null) {
-    return {
-      speedHz: null,
-      source: 'none',
-      intervalHz: null,
-      alternatives: [],
-      supported: false,
-      speedsTried: 1,
-    };
-  }
+  if (range === null) return notFound;
   const say = sayings(view);
   const rough = bestIn(say, view, range[0], range[1]);
   const { speedHz, spread, support } = refine(view, rough.speedHz);
   const inside = speedHz >= range[0] * 0.999 && speedHz <= range[1] * 1.001;
   const supported = support > 0 && inside;
   if (!supported) {
-    if (told === null) {
-      return {
-        speedHz: null,
-        source: 'none',
-        intervalHz: null,
-        alternatives: [],
-        supported,
-        speedsTried: 1,
-      };
+    const nominalRpm = machine?.nominalSpeedRpm;
+    const assumed = told ?? (nominalRpm === undefined ? null : (nominalRpm / 60) * ratio);
+    if (assumed === null) {
+      return notFound;
     }
-    const width = told * (tolerance ?? defaultTolerance);
+    const width = assumed * (tolerance ?? defaultTolerance);
     return {
-      speedHz: told,
-      source: 'told',
-      intervalHz: [told - width, told + width],
-      alternatives: [],
-      supported,
-      speedsTried: 1,
+      ...notFound,
+      speedHz: assumed,
+      source: told === null ? 'estimated' : 'told',
+      intervalHz: told === null ? range : [assumed - width, assumed + width],
     };
   }
   return {

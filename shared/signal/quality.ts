@@ -146,14 +146,16 @@ export function qualityDefects(
     );
   }
   if (view === null) return found;
-  if (speedHz === null || (told && !speedSupported)) {
+  if (speedHz === null || !speedSupported) {
     found.push(
       defect(
         'speed-unsupported',
         speedHz === null,
         speedHz === null
           ? 'No running speed is told and none can be found in the lines.'
-          : 'No line supports the told running speed.',
+          : told
+            ? 'No line supports the told running speed.'
+            : 'No running speed is told and no line gives it away: the nominal speed was taken.',
         'Measure the speed with a strobe or tachometer and tell it.',
       ),
     );
