@@ -1,9 +1,11 @@
 import type { Clipping } from './clipping.ts';
 import type { Truncation } from './screening-types.ts';
 
-/** Near the extreme: within this share of the half range. */
-const nearShare = 0.1;
-/** Share of a turn that a sine spends there: arccos(0.9)/π. */
+/** Near the extreme: within this share of the half range. Narrow, since a second order also rounds a crest. */
+const nearShare = 0.03;
+/** The same for marking the record, which carries more than the average. */
+const markShare = 0.1;
+/** Share of a turn that a sine spends there: arccos(0.97)/π. */
 const sineShare = Math.acos(1 - nearShare) / Math.PI;
 /** A side counts as truncated where it dwells this much longer than a sine. */
 const dwellFactor = 1.6;
@@ -51,7 +53,7 @@ function extremeRanges(values: Float64Array, side: Truncation['side']): [number,
     if (value < low) low = value;
     if (value > high) high = value;
   }
-  const reach = (nearShare * (high - low)) / 2;
+  const reach = (markShare * (high - low)) / 2;
   const ranges: [number, number][] = [];
   let start = -1;
   for (let i = 0; i <= values.length && ranges.length < rangesMax; i += 1) {
