@@ -1,0 +1,107 @@
+import { remedyOf, type Column } from './import-columns.ts';
+
+export type CellValue = string | number | boolean | null;
+type CellFault = { reason: string; remedy: string };
+
+/** What spreadsheets take for the beginning of a formula, the full-width signs among it. */
+const formulaStart = /^'*[=+\-@\t\r\n＝＋－＠]/;
+const guarded = /^'+[=+\-@\t\r\n＝＋－＠]/;
+
+/**
+ * Makes a text harmless for a spreadsheet: what begins with = + - @, tab or a line break gets an
+ * apostrophe in front, and so does what begins with apostrophes and then one of these. `unguard`
+ * takes exactly one apostrophe away from every text of that form, so each text comes back
+ * unchanged: `=A1` → `'=A1`, `'=A1` → `''=A1`, while `'s` stays `'s`. Numbers are never guarded:
+ * they are written by number columns alone, and no number is a formula. The guard holds where the
+ * file is opened with the separator it was written with.
+ */
+export const guard = (text: string): string => (formulaStart.test(text) ? `'${text}` : text);
+
+/** Takes back what `guard` did. */
+export const unguard = (text: string): string => (guarded.test(text) ? text.slice(1) : text);
+
+/** A value as it stands in an exported file. */
+export function writeCell(column: Column, value: CellValue): string {
+  if (value === null) return '';
+  if (column.cell === 'number') return String(value);
+  if (column.cell === 'yes or no') return value ? 'yes' : 'no';
+  return guard(String(value));
+}
+
+const yesWords = new Set(['yes', 'true', '1']);
+const noWords = new Set(['no', 'false', '0']);
+const pointNumber = /^[+-]?(\d+\.?\d*|\.\d+)(e[+-]?\d+)?$/i;
+const commaNumber = /^[+-]?(\d+,\d*|,\d+)(e[+-]?\d+)?$/i;
+const dottedDate = /^(\d{1,2})\.(\d{1,2})\.(\d{4})$/;
+
+/** Whether the cell of a number column is written with a decimal comma. */
+export const hasDecimalComma = (raw: string): boolean => commaNumber.test(unguard(raw).trim());
+
+/**
+ * Reads a cell: an empty one is null. In a file with decimal commas a point is refused, since it
+ * could as well part the thousands; dates are YYYY-MM-DD, or D.M.YYYY as spreadsheets save them
+ * where days come first.
+ */
+export function readCell(
+  column: Column,
+  raw: string,
+  decimalComma: boolean,
+): { value: CellValue } | { fault: CellFault } {
+  const text = unguard(raw).trim();
+  if (text === '') return { value: null };
+  const lower = text.toLowerCase();
+  switch (column.cell) {
+    case 'text':
+      return { value: text };
+    case 'number':
+      return readNumber(column, text, decimalComma);
+    case 'yes or no':
+      if (yesWords.has(lower)) return { value: true };
+      if (noWords.has(lower)) return { value: false };
+      return wrong(column, `"${text}" is neither yes nor no.`);
+    case 'date': {
+      const [, day = '', month = '', year = ''] = dottedDate.exec(text) ?? [];
+      const iso = year === '' ? text : `${year}-${month.padStart(2, '0')}-${day.padStart(2, '0')}`;
+      return isDay(iso)
+        ? { value: iso }
+        : wrong(column, `"${text}" is not a date of the calendar.`);
+    }
+    case 'word': {
+      const found = column.words?.find((one) => one.toLowerCase() === lower);
+      return found === undefined ? wrong(column, `"${text}" is not known here.`) : { value: found };
+    }
+  }
+}
+
+function readNumber(column: Column, text: string, decimalComma: boolean) {
+  const fitting = decimalComma ? text.replace(',', '.') : text;
+  if (pointNumber.test(fitting) && !(decimalComma && text.includes('.'))) {
+    const value = Number(fitting);
+    if (Number.isFinite(value)) return { value };
+  }
+  if (decimalComma && pointNumber.test(text)) {
+    return wrong(
+      column,
+      `"${text}" has a decimal point, other cells of this file a decimal comma.`,
+      'Write every number of the file with the same decimal sign, and no sign between thousands.',
+    );
+  }
+  if (commaNumber.test(text)) {
+    return wrong(
+      column,
+      `"${text}" has a decimal comma in a file with commas between its cells.`,
+      'Write a decimal point, or save the file with semicolons between its cells.',
+    );
+  }
+  return wrong(column, `"${text}" is not a number.`);
+}
+
+const wrong = (column: Column, reason: string, remedy = remedyOf(column)) => ({
+  fault: { reason, remedy },
+});
+
+function isDay(iso: string): boolean {
+  if (!/^\d{4}-\d\d-\d\d$/.test(iso)) return false;
+  const moment = new Date(`${iso}T00:00:00Z`);
+  return !Number.isNaN(moment.getTime()) && moment.toISOString().startsWith(iso);
+}
