@@ -10,6 +10,8 @@ import { MeasuringPoint } from './entities/measuring-point.entity.ts';
 import { Membership } from './entities/membership.entity.ts';
 import { OutboxMail } from './entities/outbox-mail.entity.ts';
 import { RefreshToken } from './entities/refresh-token.entity.ts';
+import { RegisterImportRow } from './entities/register-import-row.entity.ts';
+import { RegisterImport } from './entities/register-import.entity.ts';
 import { RejectedFile } from './entities/rejected-file.entity.ts';
 import { RoutePoint } from './entities/route-point.entity.ts';
 import { Route } from './entities/route.entity.ts';
@@ -34,6 +36,8 @@ export const entities = [
   Membership,
   OutboxMail,
   RefreshToken,
+  RegisterImport,
+  RegisterImportRow,
   RejectedFile,
   Route,
   RoutePoint,

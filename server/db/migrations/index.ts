@@ -3,6 +3,7 @@ import { CreateRegister1796083201000 } from './1796083201000-create-register.ts'
 import { CreateSurveys1796083202000 } from './1796083202000-create-surveys.ts';
 import { CreateFindings1796083203000 } from './1796083203000-create-findings.ts';
 import { CreateMail1796083204000 } from './1796083204000-create-mail.ts';
+import { CreateRegisterImports1796133109617 } from './1796133109617-create-register-imports.ts';
 
 /** Every migration, oldest first. */
 export const migrations = [
@@ -11,4 +12,5 @@ export const migrations = [
   CreateSurveys1796083202000,
   CreateFindings1796083203000,
   CreateMail1796083204000,
+  CreateRegisterImports1796133109617,
 ];
