@@ -17,6 +17,11 @@ const runsMin = 2;
 const crowding = 2;
 /** Values closer than this share of the range are one level of the converter. */
 const levelApart = 1e-6;
+/** A slow crest fills the band as well, yet a sine has a quarter only of what lies in sixteen rail widths in the first of them. */
+const nearBand = 16;
+const nearShare = 0.6;
+/** Two equal samples a crest come of sampling in step with it; three, or a rail with noise on it, don't. */
+const longRun = 3;
 
 /**
  * Whether the instrument cut the record off: it clips every excursion at one and the same value, so
@@ -45,15 +50,17 @@ export function findClipping(samples: Float64Array): Clipping {
 
 /** @param range - signed: from the rail back to the other extreme, taken away from `extreme` */
 function rail(samples: Float64Array, extreme: number, range: number) {
-  let [count, runs, run] = [0, 0, 0];
+  let [count, runs, run, longest, same] = [0, 0, 0, 0, 0];
   const levels = [1, 1, 1];
   const [first, second, third] = [0, 1, 2];
   for (let i = 0; i < samples.length; i += 1) {
     const away = (extreme - (samples[i] ?? NaN)) / range;
     if (away <= railShare) {
       count += 1;
+      if (away === 0) same += 1;
       run += 1;
       if (run === 2) runs += 1;
+      longest = Math.max(longest, run);
       continue;
     }
     run = 0;
@@ -70,74 +77,14 @@ function rail(samples: Float64Array, extreme: number, range: number) {
     return { clipped: false, count };
   }
   const band = Math.max(bandShare, (levels[third] ?? 1) + levelApart);
-  let below = 0;
+  const nearEnd = Math.min(0.5, nearBand * Math.max(railShare, levels[first] ?? 1));
+  let [below, near] = [0, 0];
   for (let i = 0; i < samples.length; i += 1) {
     const away = (extreme - (samples[i] ?? NaN)) / range;
     if (away > railShare && away <= band) below += 1;
+    if (away <= nearEnd) near += 1;
   }
-  return { clipped: count > crowding * below, count };
-}
-
-/** On the rail: this near to the extreme step, over the range of steps; the integrator's high-pass lets the rail drift. */
-const stepRailShare = 0.075;
-/** A step counts as held where it differs from the one before by less than this share of the usual. */
-const heldShare = 0.1;
-const heldMin = 0.45;
-/** Steps so near to their extreme are this much more than those beside them where wide noise was cut off. */
-const crowdShare = 0.02;
-const crowdMin = 0.08;
-const crowdFactor = 8;
-const stepsMin = 8;
-const stepShareMin = 1e-3;
-/** Differences below this share of the peak are rounding. */
-const roundingShare = 1e-9;
-/** With fewer of the converter's own steps in the largest one, equal steps mean nothing. */
-const quantaMin = 120;
-
-/**
- * Whether the record was cut off before the instrument integrated it. Its steps from sample to
- * sample (their differences, if integrated twice) then stand still at the rail, where those of a
- * sound record pass their extreme. The high-pass of the integrator tilts the rail, so that standing
- * still tells it, not one value.
- *
- * @param values - prepared samples in velocity (once integrated) or displacement (twice)
- */
-export function clippedBeforeIntegration(values: Float64Array, times: 1 | 2 = 1): boolean {
-  const steps = times === 1 ? differences(values) : differences(differences(values));
-  let [low, high, smallest, squares, peak] = [Infinity, -Infinity, Infinity, 0, 0];
-  for (let i = 0; i < values.length; i += 1) peak = Math.max(peak, Math.abs(values[i] ?? 0));
-  for (let i = 1; i < steps.length; i += 1) {
-    const step = steps[i] ?? 0;
-    if (step > high) high = step;
-    if (step < low) low = step;
-    const change = Math.abs(step - (steps[i - 1] ?? 0));
-    if (change < smallest && change > roundingShare * peak) smallest = change;
-    squares += change * change;
-  }
-  if (!(high - low > quantaMin * smallest)) return false;
-  const reach = stepRailShare * (high - low);
-  const crowdReach = crowdShare * (high - low);
-  const held = heldShare * Math.sqrt(squares / steps.length);
-  return [high, low].some((rail) => {
-    let [onRail, still, crowd, beside] = [0, 0, 0, 0];
-    for (let i = 1; i < steps.length; i += 1) {
-      const step = steps[i] ?? 0;
-      const away = Math.abs(step - rail);
-      if (away > reach) continue;
-      if (away < crowdReach) crowd += 1;
-      else if (away < 2 * crowdReach) beside += 1;
-      onRail += 1;
-      if (Math.abs(step - (steps[i - 1] ?? 0)) < held) still += 1;
-    }
-    return (
-      (onRail >= Math.max(stepsMin, stepShareMin * steps.length) && still > heldMin * onRail) ||
-      (crowd > crowdMin * steps.length && crowd > crowdFactor * beside)
-    );
-  });
-}
-
-function differences(values: Float64Array): Float64Array {
-  const out = new Float64Array(Math.max(0, values.length - 1));
-  for (let i = 0; i < out.length; i += 1) out[i] = (values[i + 1] ?? 0) - (values[i] ?? 0);
-  return out;
+  const inStep = longest < longRun && 2 * same > count;
+  const crowded = count > crowding * below || (!inStep && count > nearShare * near);
+  return { clipped: crowded, count };
 }

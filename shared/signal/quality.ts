@@ -1,6 +1,6 @@
 import type { WaveformAnalysis } from './analyse-waveform.ts';
 import { countCableJumps } from './cable-jumps.ts';
-import { clippedBeforeIntegration } from './clipping.ts';
+import { clippedBeforeIntegration } from './clipping-before-integration.ts';
 import { countLevels } from './converter-levels.ts';
 import type { QualityDefect, ScreeningInput, ScreeningLimits } from './screening-types.ts';
 import { settlingDrift, skiSlopeRatio } from './slow-drift.ts';

@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { countCableJumps } from '#shared/signal/cable-jumps.ts';
-import { clippedBeforeIntegration, findClipping } from '#shared/signal/clipping.ts';
+import { clippedBeforeIntegration } from '#shared/signal/clipping-before-integration.ts';
+import { findClipping } from '#shared/signal/clipping.ts';
 import { settlingDrift } from '#shared/signal/slow-drift.ts';
 import { stuckShare } from '#shared/signal/stuck-samples.ts';
 import { uniform } from './test-signals.ts';
