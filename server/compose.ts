@@ -24,6 +24,9 @@ import { MachineService } from './features/register/machine.service.ts';
 import { PositionService } from './features/register/position.service.ts';
 import { routeRoutes } from './features/register/route.routes.ts';
 import { RouteService } from './features/register/route.service.ts';
+import { ExportService } from './features/register-import/export.service.ts';
+import { ImportService } from './features/register-import/import.service.ts';
+import { registerImportRoutes } from './features/register-import/register-import.routes.ts';
 import { reviewRoutes } from './features/review/review.routes.ts';
 import { ReviewService } from './features/review/review.service.ts';
 import { seatRoutes } from './features/seats/seat.routes.ts';
@@ -136,6 +139,12 @@ export function compose(
     },
     now,
   );
+  const imports = new ImportService({
+    database,
+    checks: fitChecks,
+    logError: (err, message) => logger.error({ err }, message),
+    now,
+  });
   const demoMails = new DemoMailRepository(database.db);
 
   const routes = [
@@ -145,6 +154,7 @@ export function compose(
     ...machineRoutes(machines),
     ...positionRoutes(positions),
     ...routeRoutes(walkRoutes),
+    ...registerImportRoutes(imports, new ExportService(database), () => files.incomingDirectory()),
     ...surveyRoutes(surveys),
     ...uploadRoutes(uploads, {
       directory: () => files.incomingDirectory(),
@@ -193,6 +203,8 @@ export function compose(
       await files.clearIncoming();
       await queue.start();
       background.push(queue);
+      await imports.start();
+      background.push(imports);
       let smtpUrl = config.smtpUrl;
       if (smtpUrl === undefined) {
         const fake = new FakeSmtpServer((mail) => demoMails.add(mail), logger);

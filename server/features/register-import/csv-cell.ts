@@ -1,4 +1,4 @@
-import { remedyOf, type Column } from './import-columns.ts';
+import { isNumeric, remedyOf, type Column } from './import-columns.ts';
 
 export type CellValue = string | number | boolean | null;
 type CellFault = { reason: string; remedy: string };
@@ -23,7 +23,7 @@ export const unguard = (text: string): string => (guarded.test(text) ? text.slic
 /** A value as it stands in an exported file. */
 export function writeCell(column: Column, value: CellValue): string {
   if (value === null) return '';
-  if (column.cell === 'number') return String(value);
+  if (isNumeric(column)) return String(value);
   if (column.cell === 'yes or no') return value ? 'yes' : 'no';
   return guard(String(value));
 }
@@ -54,6 +54,7 @@ export function readCell(
     case 'text':
       return { value: text };
     case 'number':
+    case 'whole number':
       return readNumber(column, text, decimalComma);
     case 'yes or no':
       if (yesWords.has(lower)) return { value: true };
@@ -77,6 +78,9 @@ function readNumber(column: Column, text: string, decimalComma: boolean) {
   const fitting = decimalComma ? text.replace(',', '.') : text;
   if (pointNumber.test(fitting) && !(decimalComma && text.includes('.'))) {
     const value = Number(fitting);
+    if (column.cell === 'whole number' && !Number.isSafeInteger(value)) {
+      return wrong(column, `"${text}" is not a whole number.`);
+    }
     if (Number.isFinite(value)) return { value };
   }
   if (decimalComma && pointNumber.test(text)) {

@@ -31,7 +31,7 @@ import type { RegisterKind } from '#shared/contracts/register-import.ts';
  */
 export interface ColumnSpec {
   header: string;
-  cell: 'text' | 'number' | 'yes or no' | 'date' | 'word';
+  cell: 'text' | 'number' | 'whole number' | 'yes or no' | 'date' | 'word';
   part: 'key' | 'needed' | 'kept' | 'clearable';
   words?: readonly string[];
   unit?: string;
@@ -60,6 +60,11 @@ const word = (header: string, words: readonly string[], part: Part = 'clearable'
   words,
 });
 const yesOrNo = (header: string): ColumnSpec => ({ header, cell: 'yes or no', part: 'kept' });
+const whole = (header: string, part: Part = 'clearable'): ColumnSpec => ({
+  header,
+  cell: 'whole number',
+  part,
+});
 /** A number with its unit in brackets after the header's name. */
 const number = (name: string, unit = '', part: Part = 'clearable'): ColumnSpec => ({
   header: unit === '' ? name : `${name} [${unit}]`,
@@ -81,8 +86,8 @@ const machineColumns: Record<MachineField, ColumnSpec> = {
   speedMaxRpm: number('highest speed', 'r/min'),
   lineFrequencyHz: number('line frequency', 'Hz'),
   mounting: word('mounting', mountings),
-  bladeCount: number('blades'),
-  gearTeethCount: number('gear teeth'),
+  bladeCount: whole('blades'),
+  gearTeethCount: whole('gear teeth'),
   beltFrequencyHz: number('belt frequency', 'Hz'),
   criticality: word('criticality', criticalities, 'kept'),
   nextPlannedStopOn: date('next planned stop'),
@@ -114,7 +119,7 @@ const positionColumns: Record<'machineTag' | keyof CreateBearingPositionRequest,
   innerRingC: number('inner ring temperature', '°C'),
   outerRingC: number('outer ring temperature', '°C'),
   housingC: number('housing temperature', '°C'),
-  sequence: number('sequence', '', 'kept'),
+  sequence: whole('sequence', 'kept'),
 };
 
 type RecordField = 'machineTag' | 'positionCode' | keyof CreateFitRecordRequest;
@@ -148,11 +153,16 @@ export const columnsOf: Readonly<Record<RegisterKind, readonly Column[]>> = {
   points: listed(pointColumns),
 };
 
+export const isNumeric = ({ cell }: Column): boolean =>
+  cell === 'number' || cell === 'whole number';
+
 /** What to do about a cell of this column. */
 export function remedyOf(column: Column): string {
   switch (column.cell) {
     case 'number':
       return `Write a number${column.unit ? ` in ${column.unit}` : ''}, without the unit.`;
+    case 'whole number':
+      return 'Write a whole number.';
     case 'yes or no':
       return 'Write yes or no.';
     case 'date':

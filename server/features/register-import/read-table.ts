@@ -7,7 +7,7 @@ import {
   type RegisterKind,
 } from '#shared/contracts/register-import.ts';
 import { hasDecimalComma } from './csv-cell.ts';
-import { columnsOf, type Column } from './import-columns.ts';
+import { columnsOf, isNumeric, type Column } from './import-columns.ts';
 
 const separators: Readonly<Record<CsvSeparator, string>> = {
   comma: ',',
@@ -65,7 +65,7 @@ export async function openTable(text: string, kind: RegisterKind): Promise<Table
 }
 
 const commaIn = ({ cells }: RawRow, columns: Column[]) =>
-  columns.some((column, index) => column.cell === 'number' && hasDecimalComma(cells[index] ?? ''));
+  columns.some((column, index) => isNumeric(column) && hasDecimalComma(cells[index] ?? ''));
 
 /** Hands the rows with content on, some hundred at a time; others may work in between. */
 export async function readRows(
