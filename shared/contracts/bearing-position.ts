@@ -37,6 +37,21 @@ export const housingMaterials = ['steel', 'cast iron', 'aluminium'] as const;
 export const housingMaterial = z.enum(housingMaterials);
 export type HousingMaterial = z.infer<typeof housingMaterial>;
 
+/** How the shaft seat carries the inner ring; the housing seat is always cylindrical. */
+export const shaftSeatForms = [
+  'cylindrical',
+  'adapter sleeve',
+  'withdrawal sleeve',
+  'tapered shaft',
+] as const;
+export const shaftSeatForm = z.enum(shaftSeatForms);
+export type ShaftSeatForm = z.infer<typeof shaftSeatForm>;
+
+/** Diameter over length of a tapered bore: 1:12, or 1:30 for the wide series. */
+export const seatTapers = ['1:12', '1:30'] as const;
+export const seatTaper = z.enum(seatTapers);
+export type SeatTaper = z.infer<typeof seatTaper>;
+
 const temperatureC = numberBetween(-100, 500, '°C');
 const diameterMm = numberBetween(1, 3000, 'mm');
 
@@ -57,6 +72,15 @@ const positionFields = {
   loadLevel: loadLevel.nullable(),
   shaftMaterial: shaftMaterial.nullable(),
   housingMaterial: housingMaterial.nullable(),
+  shaftSeatForm,
+  /** Null on a tapered seat counts as 1:12. */
+  seatTaper: seatTaper.nullable(),
+  /** Bore of a hollow shaft; null for a solid one. */
+  shaftBoreMm: diameterMm.nullable(),
+  /** Wall round the bore; null counts as very thick. */
+  housingWallMm: numberBetween(1, 1000, 'mm').nullable(),
+  radialLoadN: numberBetween(0, 10_000_000, 'N').nullable(),
+  heatThroughShaft: z.boolean(),
   splitHousing: z.boolean(),
   mustSlide: z.boolean(),
   shaftC: temperatureC.nullable(),
@@ -91,6 +115,12 @@ export const createBearingPositionRequest = z
     loadLevel: positionFields.loadLevel.default(null),
     shaftMaterial: positionFields.shaftMaterial.default(null),
     housingMaterial: positionFields.housingMaterial.default(null),
+    shaftSeatForm: positionFields.shaftSeatForm.default('cylindrical'),
+    seatTaper: positionFields.seatTaper.default(null),
+    shaftBoreMm: positionFields.shaftBoreMm.default(null),
+    housingWallMm: positionFields.housingWallMm.default(null),
+    radialLoadN: positionFields.radialLoadN.default(null),
+    heatThroughShaft: positionFields.heatThroughShaft.default(false),
     splitHousing: positionFields.splitHousing.default(false),
     mustSlide: positionFields.mustSlide.default(false),
     shaftC: positionFields.shaftC.default(null),

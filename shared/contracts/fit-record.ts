@@ -24,6 +24,21 @@ export const seatConditions = [
 export const seatCondition = z.enum(seatConditions);
 export type SeatCondition = z.infer<typeof seatCondition>;
 
+/** Whether a loose fit is held by adhesive on purpose, as on some small mass-made machines. */
+export const seatBondings = ['bonded', 'not bonded'] as const;
+export const seatBonding = z.enum(seatBondings);
+export type SeatBonding = z.infer<typeof seatBonding>;
+
+/** In which unit the diameters of a record were read; they are kept in millimetres all the same. */
+export const diameterUnits = ['mm', 'in'] as const;
+export const diameterUnit = z.enum(diameterUnits);
+export type DiameterUnit = z.infer<typeof diameterUnit>;
+
+/** Whether a seat is told as it was met or as it was left after the work. */
+export const seatStages = ['as found', 'as left'] as const;
+export const seatStage = z.enum(seatStages);
+export type SeatStage = z.infer<typeof seatStage>;
+
 const diameterMm = numberBetween(1, 3000, 'mm');
 
 export const createFitRecordRequest = z
@@ -34,18 +49,36 @@ export const createFitRecordRequest = z
     toleranceClass: line(8, 'a tolerance class such as k5').nullable().default(null),
     seatMeasuredMm: diameterMm.nullable().default(null),
     ringMeasuredMm: diameterMm.nullable().default(null),
+    diameterUnit: diameterUnit.default('mm'),
+    /** Of a tapered seat, which is judged by these instead of diameters. */
+    driveUpMm: numberBetween(0, 100, 'mm').nullable().default(null),
+    clearanceReductionUm: numberBetween(0, 2000, 'µm').nullable().default(null),
+    bonding: seatBonding.nullable().default(null),
     condition: seatCondition.nullable().default(null),
     note: paragraph(2000).nullable().default(null),
   })
   .refine(
     (record) =>
-      record.toleranceClass !== null || record.seatMeasuredMm !== null || record.condition !== null,
+      [
+        record.toleranceClass,
+        record.seatMeasuredMm,
+        record.driveUpMm,
+        record.clearanceReductionUm,
+        record.bonding,
+        record.condition,
+      ].some((value) => value !== null),
     {
       path: ['toleranceClass'],
-      message: 'Enter at least a tolerance class, a measured diameter or a condition.',
+      message: 'Enter at least a tolerance class, a measured diameter, a drive-up or a condition.',
     },
   );
 export type CreateFitRecordRequest = z.infer<typeof createFitRecordRequest>;
+
+/** Entered by hand; a second record of a seat and date must say that it corrects the first. */
+export const addFitRecordRequest = createFitRecordRequest.safeExtend({
+  correctsSameDay: z.boolean().default(false),
+});
+export type AddFitRecordRequest = z.infer<typeof addFitRecordRequest>;
 
 export const fitRecordResponse = z.object({
   id: z.int(),
@@ -56,7 +89,13 @@ export const fitRecordResponse = z.object({
   toleranceClass: z.string().nullable(),
   seatMeasuredMm: z.number().nullable(),
   ringMeasuredMm: z.number().nullable(),
+  diameterUnit,
+  driveUpMm: z.number().nullable(),
+  clearanceReductionUm: z.number().nullable(),
+  bonding: seatBonding.nullable(),
   condition: seatCondition.nullable(),
+  /** Of an inspection: before or after the work. */
+  stage: seatStage.nullable(),
   note: z.string().nullable(),
   inspectionId: z.int().nullable(),
   recordedByName: z.string(),

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { numberBetween, paragraph } from './fields.ts';
-import { seatCondition, seatName } from './fit-record.ts';
+import { seatCondition, seatName, seatStage } from './fit-record.ts';
 import { listQuery, listResponse } from './list.ts';
 import { seatAssessmentsResponse } from './seat-assessment.ts';
 
@@ -30,11 +30,6 @@ export type SeatReading = z.infer<typeof seatReading>;
 export const inspectionOutcomes = ['loose', 'not loose', 'not clear'] as const;
 export const inspectionOutcome = z.enum(inspectionOutcomes);
 export type InspectionOutcome = z.infer<typeof inspectionOutcome>;
-
-/** Whether a seat is told as it was met or as it was left after the work. */
-export const seatStages = ['as found', 'as left'] as const;
-export const seatStage = z.enum(seatStages);
-export type SeatStage = z.infer<typeof seatStage>;
 
 export const reportedSeat = z.strictObject({
   seat: seatName,

@@ -17,6 +17,7 @@ export const fitFaultCodes = [
   'below_absolute_zero',
   'negative',
   'measured_in_inches',
+  'measured_in_millimetres',
   'factor_1000',
   'far_from_nominal',
 ] as const;

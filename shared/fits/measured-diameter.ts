@@ -14,7 +14,8 @@ function isNear(value: number, target: number): boolean {
  * before it is taken for wear.
  *
  * @returns deviation from the nominal size, µm
- * @throws {FitInputError} `not_finite`; `measured_in_inches` (about nominal / 25.4), `factor_1000`
+ * @throws {FitInputError} `not_finite`; `measured_in_inches` (about nominal / 25.4),
+ *   `measured_in_millimetres` (about nominal × 25.4: millimetres given as inches), `factor_1000`
  *   (about 1000 times or a thousandth of the nominal), `far_from_nominal` (off by more than 1 % and
  *   0.5 mm)
  *
@@ -30,6 +31,13 @@ export function measuredDeviationUm(measuredMm: number, nominalMm: number, field
       'measured_in_inches',
       field,
       `${measuredMm} looks like inches (${(measuredMm * mmPerInch).toFixed(3)} mm); the nominal size is ${nominalMm} mm.`,
+    );
+  }
+  if (isNear(measuredMm, nominalMm * mmPerInch)) {
+    throw new FitInputError(
+      'measured_in_millimetres',
+      field,
+      `${Number((measuredMm / mmPerInch).toFixed(4))} looks like millimetres taken for inches; the nominal size is ${nominalMm} mm.`,
     );
   }
   if (isNear(measuredMm, nominalMm * 1000) || isNear(measuredMm * 1000, nominalMm)) {

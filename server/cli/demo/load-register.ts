@@ -11,7 +11,7 @@ import type { MachineService } from '#server/features/register/machine.service.t
 import type { PositionService } from '#server/features/register/position.service.ts';
 import type { RouteService } from '#server/features/register/route.service.ts';
 import { createBearingPositionRequest } from '#shared/contracts/bearing-position.ts';
-import { createFitRecordRequest } from '#shared/contracts/fit-record.ts';
+import { addFitRecordRequest } from '#shared/contracts/fit-record.ts';
 import { createMachineRequest } from '#shared/contracts/machine.ts';
 import { createRouteRequest } from '#shared/contracts/route.ts';
 
@@ -108,7 +108,7 @@ export async function loadRegister(
         await services.positions.addFitRecord(
           lead,
           created.position.id,
-          createFitRecordRequest.parse(record),
+          addFitRecordRequest.parse(record),
         );
       }
     }

@@ -15,7 +15,9 @@ import type {
   LoadLevel,
   PositionKind,
   RingLoad,
+  SeatTaper,
   ShaftMaterial,
+  ShaftSeatForm,
 } from '#shared/contracts/bearing-position.ts';
 import { Machine } from './machine.entity.ts';
 
@@ -79,6 +81,27 @@ export class BearingPosition {
 
   @Column({ type: 'varchar', length: 16, nullable: true })
   housingMaterial: HousingMaterial | null;
+
+  @Column({ type: 'varchar', length: 20, default: 'cylindrical' })
+  shaftSeatForm: ShaftSeatForm;
+
+  @Column({ type: 'varchar', length: 4, nullable: true })
+  seatTaper: SeatTaper | null;
+
+  /** Bore of a hollow shaft; null for a solid one. */
+  @Column({ type: 'double', nullable: true })
+  shaftBoreMm: number | null;
+
+  /** Wall round the bore; null where it is thick or not known. */
+  @Column({ type: 'double', nullable: true })
+  housingWallMm: number | null;
+
+  @Column({ type: 'double', nullable: true })
+  radialLoadN: number | null;
+
+  /** Heat reaches the bearing along its shaft: the outer ring stays cooler. */
+  @Column({ type: 'boolean', default: false })
+  heatThroughShaft: boolean;
 
   @Column({ type: 'boolean', default: false })
   splitHousing: boolean;

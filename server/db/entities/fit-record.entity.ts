@@ -7,7 +7,14 @@ import {
   PrimaryGeneratedColumn,
   type Relation,
 } from 'typeorm';
-import type { FitSource, SeatCondition, SeatName } from '#shared/contracts/fit-record.ts';
+import type {
+  DiameterUnit,
+  FitSource,
+  SeatBonding,
+  SeatCondition,
+  SeatName,
+  SeatStage,
+} from '#shared/contracts/fit-record.ts';
 import { BearingPosition } from './bearing-position.entity.ts';
 import { User } from './user.entity.ts';
 
@@ -42,11 +49,30 @@ export class FitRecord {
   @Column({ type: 'double', nullable: true })
   ringMeasuredMm: number | null;
 
+  /** Unit in which the diameters were read; they are kept in millimetres. */
+  @Column({ type: 'varchar', length: 2, default: 'mm' })
+  diameterUnit: DiameterUnit;
+
+  /** Axial drive-up on a tapered seat. */
+  @Column({ type: 'double', nullable: true })
+  driveUpMm: number | null;
+
+  /** Loss of radial internal clearance when driven up on a tapered seat. */
+  @Column({ type: 'double', nullable: true })
+  clearanceReductionUm: number | null;
+
+  @Column({ type: 'varchar', length: 12, nullable: true })
+  bonding: SeatBonding | null;
+
   @Column({ type: 'varchar', length: 32, nullable: true })
   condition: SeatCondition | null;
 
   @Column({ type: 'text', nullable: true })
   note: string | null;
+
+  /** Of an inspection: before or after the work. */
+  @Column({ type: 'varchar', length: 8, nullable: true })
+  stage: SeatStage | null;
 
   /** The inspection that measured it, where one did. */
   @Column({ type: 'int', nullable: true })

@@ -4,6 +4,7 @@ import { CreateSurveys1796083202000 } from './1796083202000-create-surveys.ts';
 import { CreateFindings1796083203000 } from './1796083203000-create-findings.ts';
 import { CreateMail1796083204000 } from './1796083204000-create-mail.ts';
 import { CreateRegisterImports1796133109617 } from './1796133109617-create-register-imports.ts';
+import { AddSeatDepth1796133730464 } from './1796133730464-add-seat-depth.ts';
 
 /** Every migration, oldest first. */
 export const migrations = [
@@ -13,4 +14,5 @@ export const migrations = [
   CreateFindings1796083203000,
   CreateMail1796083204000,
   CreateRegisterImports1796133109617,
+  AddSeatDepth1796133730464,
 ];

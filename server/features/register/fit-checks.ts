@@ -3,6 +3,7 @@ import { FitInputError } from '#shared/fits/fit-input-error.ts';
 import { measuredDeviationUm } from '#shared/fits/measured-diameter.ts';
 import { resolvePosition } from '#shared/fits/resolve-position.ts';
 import { seatClassLimitsUm } from '#shared/fits/seat-class-limits.ts';
+import { shaftTaperOf } from '#shared/fits/tapered-position.ts';
 import type { FitChecks } from './position.service.ts';
 
 type Fault = { path: string; message: string };
@@ -28,6 +29,7 @@ function faultOf(check: () => unknown): Fault[] {
 }
 
 type Sizes = Parameters<FitChecks['recordFaults']>[0];
+type NewRecord = Parameters<FitChecks['recordFaults']>[1];
 
 /** The designation's own sizes where the tables know it; a maker's own designation tells nothing. */
 function knownDesignation(designation: string | null) {
@@ -47,6 +49,26 @@ function nominalOf(position: Sizes, seat: 'shaft' | 'housing'): number | null {
     : (position.outsideMm ?? bearing?.D ?? null);
 }
 
+const unless = (value: unknown, path: string, message: string): Fault[] =>
+  value === null ? [] : [{ path, message }];
+
+/** A tapered seat is judged by its drive-up, a cylindrical one by diameters: never by the other's. */
+function formFaults(position: Sizes, record: NewRecord): Fault[] {
+  if (record.seat === 'shaft' && shaftTaperOf(position) !== null) {
+    const message =
+      'The shaft seat is tapered: record the drive-up or the loss of internal clearance instead of diameters.';
+    return [
+      ...unless(record.seatMeasuredMm, 'seatMeasuredMm', message),
+      ...unless(record.ringMeasuredMm, 'ringMeasuredMm', message),
+    ];
+  }
+  const message = `The ${record.seat} seat is cylindrical: drive-up and loss of clearance belong to a tapered shaft seat.`;
+  return [
+    ...unless(record.driveUpMm, 'driveUpMm', message),
+    ...unless(record.clearanceReductionUm, 'clearanceReductionUm', message),
+  ];
+}
+
 /** Checks of fit data that the register makes before anything is written. */
 export const fitChecks: FitChecks = {
   positionFaults: (position) => {
@@ -62,12 +84,15 @@ export const fitChecks: FitChecks = {
         ...(known && position.designation !== null ? { designation: position.designation } : {}),
         ...(position.boreMm === null ? {} : { d: position.boreMm }),
         ...(position.outsideMm === null ? {} : { D: position.outsideMm }),
+        ...(position.shaftBoreMm == null ? {} : { shaftBoreMm: position.shaftBoreMm }),
       }),
     );
   },
   recordFaults: (position, record) => {
     const nominalMm = nominalOf(position, record.seat);
     const { toleranceClass } = record;
+    const misplaced = formFaults(position, record);
+    if (misplaced.length > 0) return misplaced;
     if (nominalMm === null) {
       if (toleranceClass === null && record.seatMeasuredMm === null) return [];
       return [

@@ -7,7 +7,7 @@ import {
   updateBearingPositionRequest,
 } from '#shared/contracts/bearing-position.ts';
 import { id } from '#shared/contracts/fields.ts';
-import { createFitRecordRequest } from '#shared/contracts/fit-record.ts';
+import { addFitRecordRequest } from '#shared/contracts/fit-record.ts';
 import {
   createMachineRequest,
   machineListQuery,
@@ -111,7 +111,7 @@ export const positionRoutes = (positions: PositionService) => [
     status: 201,
     access: only('lead'),
     params: positionParams,
-    body: createFitRecordRequest,
+    body: addFitRecordRequest,
     response: bearingPositionResponse,
     handle: async ({ principal, params, body }) =>
       presentWhole(await positions.addFitRecord(principal, params.positionId, body)),

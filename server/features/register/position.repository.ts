@@ -62,6 +62,18 @@ export class PositionRepository {
     });
   }
 
+  /** Keeps the position's row for this transaction. */
+  async lock(id: number): Promise<void> {
+    await this.db.findOne(BearingPosition, { where: { id }, lock: { mode: 'pessimistic_write' } });
+  }
+
+  fitRecordCount(
+    bearingPositionId: number,
+    { seat, recordedOn }: Pick<FitRecord, 'seat' | 'recordedOn'>,
+  ): Promise<number> {
+    return this.db.count(FitRecord, { where: { bearingPositionId, seat, recordedOn } });
+  }
+
   async insertFitRecord(record: NewFitRecord): Promise<number> {
     const result = await this.db.insert(FitRecord, record);
     return (result.identifiers[0] as { id: number }).id;

@@ -8,7 +8,7 @@ import type {
   CreateBearingPositionRequest,
   UpdateBearingPositionRequest,
 } from '#shared/contracts/bearing-position.ts';
-import type { CreateFitRecordRequest } from '#shared/contracts/fit-record.ts';
+import type { AddFitRecordRequest, CreateFitRecordRequest } from '#shared/contracts/fit-record.ts';
 import type { CreateMeasuringPointRequest } from '#shared/contracts/measuring-point.ts';
 import { maySeeMachine } from './machine.policy.ts';
 import { MachineRepository } from './machine.repository.ts';
@@ -21,10 +21,14 @@ export interface FitChecks {
     designation: string | null;
     boreMm: number | null;
     outsideMm: number | null;
+    shaftBoreMm?: number | null;
   }) => { path: string; message: string }[];
   /** Faults of a fit record: unknown class, a diameter a factor off. */
   recordFaults: (
-    position: Pick<BearingPosition, 'designation' | 'boreMm' | 'outsideMm'>,
+    position: Pick<
+      BearingPosition,
+      'designation' | 'boreMm' | 'outsideMm' | 'shaftSeatForm' | 'seatTaper'
+    >,
     record: CreateFitRecordRequest,
   ) => { path: string; message: string }[];
 }
@@ -108,7 +112,7 @@ export class PositionService {
   async addFitRecord(
     principal: SitePrincipal,
     positionId: number,
-    request: CreateFitRecordRequest,
+    { correctsSameDay, ...request }: AddFitRecordRequest,
   ) {
     const position = await this.seen(principal, positionId);
     if (position.kind === 'plain') {
@@ -120,9 +124,15 @@ export class PositionService {
     }
     refuse(this.checks.recordFaults(position, request));
     await this.database.transaction(async (db) => {
-      await new PositionRepository(db).insertFitRecord({
+      const repository = new PositionRepository(db);
+      // Held until the end: two people who record the same seat at once are told apart.
+      await repository.lock(positionId);
+      const sameDay = await repository.fitRecordCount(positionId, request);
+      if (sameDay > 0 && !correctsSameDay) refuseSecond(request);
+      await repository.insertFitRecord({
         ...request,
         bearingPositionId: positionId,
+        stage: null,
         inspectionId: null,
         recordedByUserId: principal.userId,
         createdAt: now,
@@ -168,6 +178,11 @@ const entryOf = (principal: SitePrincipal, positionId: number) => ({
 function refuse(faults: { path: string; message: string }[]): void {
   const first = faults[0];
   if (first !== undefined) throw new AppError('validation', first.message, { fields: faults });
+}
+
+function refuseSecond({ seat, recordedOn }: CreateFitRecordRequest): never {
+  const message = `The ${seat} seat already has a record of ${recordedOn}. Give the new one its own date, or say that it corrects that one.`;
+  throw new AppError('conflict', message, { fields: [{ path: 'recordedOn', message }] });
 }
 
 const refuseTaken = (path: string, message: string) => (error: unknown) => {

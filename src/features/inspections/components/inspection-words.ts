@@ -1,8 +1,5 @@
-import type {
-  InspectionListItem,
-  InspectionOutcome,
-  SeatStage,
-} from '#shared/contracts/inspection.ts';
+import type { SeatStage } from '#shared/contracts/fit-record.ts';
+import type { InspectionListItem, InspectionOutcome } from '#shared/contracts/inspection.ts';
 
 export const seatWords = { shaft: 'Shaft seat', housing: 'Housing seat' } as const;
 

@@ -1,11 +1,14 @@
-import type { SeatCondition, SeatName } from '#shared/contracts/fit-record.ts';
+import {
+  seatStages,
+  type SeatCondition,
+  type SeatName,
+  type SeatStage,
+} from '#shared/contracts/fit-record.ts';
 import {
   planes,
   readingDirectionsDeg,
-  seatStages,
   type InspectionOutcome,
   type SeatReading,
-  type SeatStage,
 } from '#shared/contracts/inspection.ts';
 import { parseDecimal } from '#src/lib/numbers.ts';
 

@@ -1,5 +1,8 @@
-import { seatConditions, type SeatCondition } from '#shared/contracts/fit-record.ts';
-import type { SeatStage } from '#shared/contracts/inspection.ts';
+import {
+  seatConditions,
+  type SeatCondition,
+  type SeatStage,
+} from '#shared/contracts/fit-record.ts';
 import type { SeatAssessment } from '#shared/contracts/seat-assessment.ts';
 import { conditionWords } from '#shared/fits/condition-words.ts';
 import { Field } from '#src/components/field.tsx';

@@ -27,6 +27,10 @@ const fresh: CreateFitRecordRequest = {
   toleranceClass: null,
   seatMeasuredMm: null,
   ringMeasuredMm: null,
+  diameterUnit: 'mm',
+  driveUpMm: null,
+  clearanceReductionUm: null,
+  bonding: null,
   condition: null,
   note: null,
 };

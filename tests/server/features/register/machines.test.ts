@@ -93,9 +93,9 @@ describe('editing a machine', () => {
   });
 });
 
-describe('fit records', () => {
-  const drawing = { seat: 'shaft', recordedOn: '2026-05-04', source: 'drawing' };
+const drawing = { seat: 'shaft', recordedOn: '2026-05-04', source: 'drawing' };
 
+describe('fit records', () => {
   it('are added and shown newest first', async () => {
     const { site, lead, as, path } = await plant();
     const machine = await buildMachine(dataSource(), site);
@@ -121,6 +121,15 @@ describe('fit records', () => {
     ['a diameter in inches', { seatMeasuredMm: 2.3622 }, 'seatMeasuredMm'],
     ['a date in the future', { toleranceClass: 'k5', recordedOn: '2999-01-01' }, 'recordedOn'],
     ['nothing but a date', {}, 'toleranceClass'],
+    ['a negative drive-up', { driveUpMm: -0.5 }, 'driveUpMm'],
+    ['a negative loss of clearance', { clearanceReductionUm: -10 }, 'clearanceReductionUm'],
+    ['a drive-up on a cylindrical seat', { driveUpMm: 0.5 }, 'driveUpMm'],
+    [
+      'millimetres taken for inches',
+      { seatMeasuredMm: 1524, diameterUnit: 'in' },
+      'seatMeasuredMm',
+    ],
+    ['a diameter a thousand times too large', { ringMeasuredMm: 60_000 }, 'ringMeasuredMm'],
   ])('refuse %s, naming the field', async (_what, change, field) => {
     const { site, lead, as, path } = await plant();
     const machine = await buildMachine(dataSource(), site);
@@ -134,7 +143,96 @@ describe('fit records', () => {
   });
 });
 
+describe('a second fit record of one seat and date', () => {
+  it('is refused at the date, unless it says that it corrects the first', async () => {
+    const { site, lead, as, path } = await plant();
+    const machine = await buildMachine(dataSource(), site);
+    const position = await buildPosition(dataSource(), machine);
+    const records = `${path}/positions/${position.id}/fit-records`;
+    await as(lead).post(records, { ...drawing, toleranceClass: 'k5' });
+    const second = { ...drawing, toleranceClass: 'm5' };
+    const refused = await as(lead).post(records, second);
+    expect(refused.status).toBe(409);
+    expect(refused.body.error.fields[0]).toMatchObject({
+      path: 'recordedOn',
+      message: expect.stringMatching(/shaft seat already has a record/) as string,
+    });
+    const corrected = await as(lead).post(records, { ...second, correctsSameDay: true });
+    expect(corrected.status).toBe(201);
+    // Nothing is overwritten: both stand, the later word first.
+    expect(
+      corrected.body.fitRecords.map((one: { toleranceClass: string }) => one.toleranceClass),
+    ).toEqual(['m5', 'k5']);
+    const other = await as(lead).post(records, {
+      ...drawing,
+      seat: 'housing',
+      toleranceClass: 'H7',
+    });
+    expect(other.status).toBe(201);
+  });
+
+  it('is taken once where two people send it at the same moment', async () => {
+    const { site, lead, as, path } = await plant();
+    const machine = await buildMachine(dataSource(), site);
+    const position = await buildPosition(dataSource(), machine);
+    const send = () =>
+      as(lead).post(`${path}/positions/${position.id}/fit-records`, {
+        ...drawing,
+        toleranceClass: 'k5',
+      });
+    const answers = await Promise.all([send(), send()]);
+    expect(answers.map(({ status }) => status).sort()).toEqual([201, 409]);
+  });
+});
+
+describe('a tapered shaft seat', () => {
+  it('keeps a drive-up and refuses diameters, naming the field', async () => {
+    const { site, lead, as, path } = await plant();
+    const machine = await buildMachine(dataSource(), site);
+    const sleeve = await as(lead).post(`${path}/machines/${machine.id}/positions`, {
+      code: 'DE',
+      name: 'Drive end',
+      designation: '22220',
+      shaftSeatForm: 'adapter sleeve',
+      seatTaper: '1:12',
+      shaftBoreMm: 30,
+      housingWallMm: 25,
+      radialLoadN: 12_000,
+    });
+    expect(sleeve.body).toMatchObject({ shaftSeatForm: 'adapter sleeve', housingWallMm: 25 });
+    const records = `${path}/positions/${sleeve.body.id}/fit-records`;
+    const kept = await as(lead).post(records, {
+      ...drawing,
+      source: 'mounting',
+      driveUpMm: 0.7,
+      clearanceReductionUm: 45,
+    });
+    expect(kept.status).toBe(201);
+    expect(kept.body.fitRecords[0]).toMatchObject({ driveUpMm: 0.7, clearanceReductionUm: 45 });
+    const refused = await as(lead).post(records, {
+      ...drawing,
+      recordedOn: '2026-07-01',
+      seatMeasuredMm: 100.01,
+    });
+    expect(refused.status).toBe(422);
+    expect(refused.body.error.fields[0].path).toBe('seatMeasuredMm');
+  });
+});
+
 describe('bearing positions', () => {
+  it('refuse a shaft bore as large as the seat', async () => {
+    const { site, lead, as, path } = await plant();
+    const machine = await buildMachine(dataSource(), site);
+    const answer = await as(lead).post(`${path}/machines/${machine.id}/positions`, {
+      code: 'DE',
+      name: 'Drive end',
+      designation: '6312',
+      shaftBoreMm: 60,
+    });
+    expect(answer.status).toBe(422);
+    expect(answer.body.error.fields[0].path).toBe('shaftBoreMm');
+  });
+
   it('refuse sizes that contradict the designation', async () => {
     const { site, lead, as, path } = await plant();
     const machine = await buildMachine(dataSource(), site);
