@@ -68,7 +68,9 @@ export function readCell(
         : wrong(column, `"${text}" is not a date of the calendar.`);
     }
     case 'word': {
-      const found = column.words?.find((one) => one.toLowerCase() === lower);
+      // Spreadsheets save the taper 1:12 as the time of day 01:12.
+      const word = lower.replace(/^0(?=\d:)/, '');
+      const found = column.words?.find((one) => one.toLowerCase() === word);
       return found === undefined ? wrong(column, `"${text}" is not known here.`) : { value: found };
     }
   }

@@ -85,7 +85,9 @@ export function fieldFaults(
   faults: readonly { path: string; message: string }[],
 ): RowFault[] {
   return faults.map(({ path, message }) => {
-    const column = columnOf(columns, path);
+    // A fault of the whole row is told at its first column.
+    const column = columns.find(({ key }) => key === path) ?? columns[0];
+    if (column === undefined) throw new Error('A file without columns has no rows.');
     const raw = row.raw[path] ?? '';
     const quoted = raw === '' || message.includes(raw) ? '' : `"${raw.slice(0, 60)}": `;
     return { column: column.header, reason: `${quoted}${message}`, remedy: remedyOf(column) };

@@ -1,4 +1,5 @@
 import type { BearingPosition } from '#server/db/entities/bearing-position.entity.ts';
+import type { CreateBearingPositionRequest } from '#shared/contracts/bearing-position.ts';
 import type { RowFault } from '#shared/contracts/register-import.ts';
 import type { CreateFitRecordRequest } from '#shared/contracts/fit-record.ts';
 import type { GivenRow } from './given-row.ts';
@@ -8,13 +9,8 @@ type FieldFault = { path: string; message: string };
 
 /** The checks that the register's forms make of fit data. */
 export interface RegisterChecks {
-  positionFaults: (
-    position: Pick<BearingPosition, 'designation' | 'boreMm' | 'outsideMm'>,
-  ) => FieldFault[];
-  recordFaults: (
-    position: Pick<BearingPosition, 'designation' | 'boreMm' | 'outsideMm'>,
-    record: CreateFitRecordRequest,
-  ) => FieldFault[];
+  positionFaults: (position: CreateBearingPositionRequest) => FieldFault[];
+  recordFaults: (position: BearingPosition, record: CreateFitRecordRequest) => FieldFault[];
 }
 
 /** What a dry run carries from one batch of rows to the next. */

@@ -121,7 +121,9 @@ function lineEndingOf(text: string): '\r\n' | '\n' | '\r' {
   return '\n';
 }
 
-const nameOf = (header: string) => header.trim().toLowerCase().replace(/\s+/g, ' ');
+/** Case, blanks and the two characters for micro make no difference. */
+const nameOf = (header: string) =>
+  header.trim().toLowerCase().replace(/\s+/g, ' ').replace('\u03BC', '\u00B5');
 
 /** The separator with which most names of the header are known ones. */
 function readHeader(text: string, kind: RegisterKind) {

@@ -61,7 +61,7 @@ export async function writePlanned(
       // Who recorded it and when isn't part of what the file says.
       const known =
         kind === 'fit-records'
-          ? { inspectionId: null, recordedByUserId: principal.userId, createdAt: now }
+          ? { inspectionId: null, stage: null, recordedByUserId: principal.userId, createdAt: now }
           : kind === 'machines'
             ? { version: 1 }
             : {};

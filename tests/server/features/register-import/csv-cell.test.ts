@@ -85,6 +85,7 @@ describe('reading a cell', () => {
 
   it('takes words and yes or no whatever their case, and an empty cell for nothing', () => {
     expect(valueOf(kind, 'PUMP')).toBe('pump');
+    expect(valueOf(columnOf('seatTaper'), '01:12')).toBe('1:12');
     expect(valueOf(kind, 'pumpe')).toMatch(/^wrong/);
     expect([valueOf(split, 'TRUE'), valueOf(split, 'no')]).toEqual([true, false]);
     expect(valueOf(power, '  ')).toBeNull();

@@ -66,6 +66,9 @@ describe('an exported register', () => {
         shaftC: -12.5,
         shaftRatio: 1 / 3,
         splitHousing: index % 2 === 0,
+        shaftSeatForm: index % 2 === 0 ? 'cylindrical' : 'adapter sleeve',
+        seatTaper: index % 2 === 0 ? null : '1:12',
+        radialLoadN: 1e-7 * index,
       });
       await buildPoint(dataSource(), position, 'axial');
       for (const seatMeasuredMm of [60.012, 60.1 + 0.2 / 3]) {
@@ -78,6 +81,10 @@ describe('an exported register', () => {
           toleranceClass: 'k5',
           seatMeasuredMm,
           ringMeasuredMm: null,
+          diameterUnit: 'in',
+          driveUpMm: 0.35,
+          clearanceReductionUm: 25,
+          bonding: 'not bonded',
           condition: 'fretting corrosion',
           note: text,
           inspectionId: null,
