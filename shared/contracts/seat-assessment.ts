@@ -1,5 +1,6 @@
 import { z } from 'zod';
-import { seatCondition, seatName } from './fit-record.ts';
+import { seatTaper } from './bearing-position.ts';
+import { seatBonding, seatCondition, seatName } from './fit-record.ts';
 
 const rangeUm = z.tuple([z.number(), z.number()]);
 const spreadUm = z.object({ min: z.number(), mean: z.number(), max: z.number() });
@@ -15,6 +16,11 @@ export const seatAssessment = z.object({
   /** Nominal diameter of the seat: d for the shaft, D for the housing. */
   nominalMm: z.number().nullable(),
   toleranceClass: z.string().nullable(),
+  /** Null for a cylindrical seat. A tapered one has drive-up and loss of clearance, no fit. */
+  taper: seatTaper.nullable(),
+  driveUpMm: z.number().nullable(),
+  clearanceReductionUm: z.number().nullable(),
+  bonding: seatBonding.nullable(),
   /** Limit deviations of the shaft or housing bore from the nominal size, lower and upper. */
   seatLimitsUm: rangeUm.nullable(),
   /** Limit deviations of the bearing's bore or outside diameter. */
@@ -26,6 +32,8 @@ export const seatAssessment = z.object({
   /** From measured diameters, with the standard uncertainty where it is known. */
   measuredUm: z.object({ value: z.number(), uncertainty: z.number().nullable() }).nullable(),
   runningUm: spreadUm.nullable(),
+  /** Interference that the radial load asks for, shaft seat alone. */
+  neededUm: z.number().nullable(),
   recommendedClass: z.string().nullable(),
   recommendationReason: z.string().nullable(),
   /** Null where a class is on record and nothing to compare it with. */
@@ -55,6 +63,23 @@ export const neighbourSeat = z.object({
 export const seatAssessmentsResponse = z.object({
   /** Empty for a plain bearing, which has no seats. */
   seats: z.array(seatAssessment),
+  /** Radial internal clearance of the bearing, as far as it can be said. */
+  internalClearanceUm: z
+    .object({
+      unmounted: spreadUm,
+      mounted: spreadUm.nullable(),
+      running: spreadUm.nullable(),
+    })
+    .nullable(),
+  /** Heating the inner ring to mount it; null where there is nothing to heat for. */
+  mounting: z
+    .object({
+      heatToC: z.number(),
+      limitC: z.number(),
+      allowed: z.boolean(),
+      advice: z.string(),
+    })
+    .nullable(),
   /** Empty outside a finding. */
   neighbours: z.array(neighbourSeat),
   /** Which seat fits the evidence, or which record is missing first. */

@@ -14,6 +14,8 @@ export interface SuspectSeat {
   fit?: SeatFit;
   /** Recorded class, for the reason. */
   toleranceClass?: string;
+  /** What is on record where no chance can be said of it, e.g. "bonded on purpose". */
+  recordedAs?: string;
   /** Level of the harmonic run at the neighbour over that at the finding, where both were measured. */
   levelRatio?: number;
 }
@@ -59,7 +61,7 @@ function odds(chance: number): number {
 }
 
 function isRecorded(seat: SuspectSeat): boolean {
-  return seat.fit?.chanceOfClearance !== undefined;
+  return seat.fit?.chanceOfClearance !== undefined || seat.recordedAs !== undefined;
 }
 
 function placeFactor(seat: SuspectSeat): number {
@@ -85,6 +87,9 @@ function joined(parts: readonly string[]): string {
 
 function recordClause(seat: SuspectSeat): string {
   const chance = seat.fit?.chanceOfClearance;
+  if (chance === undefined && seat.recordedAs !== undefined) {
+    return `${seat.recordedAs}, which allows no figure for its chance of running loose`;
+  }
   if (chance === undefined) return 'nothing that tells its fit is on record';
   const named = seat.toleranceClass ? `${seat.toleranceClass} on record, ` : '';
   return `${named}${percent(chance)} chance that it runs with more clearance than it should`;
@@ -128,7 +133,7 @@ function conclude(
  * are those of its chance of running loose (`chanceOfClearance`; 0.15 where nothing is recorded),
  * times a factor for neighbours; each joint's odds are multiplied by the likelihood of the signs
  * given that joint, the signs taken as independent. Shares of the sum are the suspicions. A seat
- * without a record keeps its place in the order but gets no figure, and no ranking is confident
+ * without a chance keeps its place in the order but gets no figure, and no ranking is confident
  * unless both seats of the position are on record. Checked on simulated positions with known loose
  * seats (`fixtures/fits/simulated-positions.ts`); the figures of this model are assumptions marked
  * beside them.
@@ -158,14 +163,14 @@ export function rankSeats(suspects: readonly SuspectSeat[], signs: FindingSigns)
   const elsewhere = elsewhereWeight / total;
   const first = ranked[0];
   const isConfident =
-    first !== undefined && ownRecorded && isRecorded(first.seat) && first.share >= confidentFrom;
+    first?.seat.fit?.chanceOfClearance !== undefined && ownRecorded && first.share >= confidentFrom;
   return {
     seats: ranked.map(({ seat, share }, index) => ({
       key: seat.key,
       positionName: seat.positionName,
       seat: seat.seat,
       rank: index + 1,
-      suspicion: isRecorded(seat) ? share : null,
+      suspicion: seat.fit?.chanceOfClearance === undefined ? null : share,
       reason: reasonFor(seat, signs),
     })),
     elsewhere: suspects.some(isRecorded) ? elsewhere : null,

@@ -21,6 +21,10 @@ export const aSeat = (overrides: Partial<SeatAssessment> = {}): SeatAssessment =
   seat: 'shaft',
   nominalMm: 60,
   toleranceClass: 'k5',
+  taper: null,
+  driveUpMm: null,
+  clearanceReductionUm: null,
+  bonding: null,
   seatLimitsUm: [2, 15],
   ringLimitsUm: [-15, 0],
   seatLimitsMm: [60.002, 60.015],
@@ -28,6 +32,7 @@ export const aSeat = (overrides: Partial<SeatAssessment> = {}): SeatAssessment =
   probableUm: { min: 6, max: 26 },
   measuredUm: null,
   runningUm: null,
+  neededUm: null,
   recommendedClass: 'k5',
   recommendationReason: 'The load rotates relative to the inner ring.',
   verdict: 'as recommended',
@@ -43,6 +48,8 @@ export const aSeat = (overrides: Partial<SeatAssessment> = {}): SeatAssessment =
 
 const seats = {
   seats: [aSeat()],
+  internalClearanceUm: null,
+  mounting: null,
   neighbours: [],
   conclusion: 'The shaft seat of Pump, drive end explains the finding best.',
   cautions: [],

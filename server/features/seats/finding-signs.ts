@@ -5,7 +5,8 @@ import type { FindingSigns } from '#shared/fits/seat-signs.ts';
 /** Orders of the run that carries looseness; 1× belongs to unbalance as well. */
 const runOrders = { from: 2, to: 10 } as const;
 
-function runLevelMmPerS(screening: Screening): number {
+/** Velocity of orders 2 to 10 together, mm/s rms. */
+export function runLevelMmPerS(screening: Screening): number {
   const squares = screening.result.orders
     .filter(({ order }) => Number.isInteger(order))
     .filter(({ order }) => order >= runOrders.from && order <= runOrders.to)

@@ -1,7 +1,8 @@
 import type { BearingPosition } from '#server/db/entities/bearing-position.entity.ts';
 import { bearingByDesignation } from '#shared/fits/bearing-designation.ts';
 import { FitInputError } from '#shared/fits/fit-input-error.ts';
-import type { PositionFit, SeatHistory } from '#shared/fits/fit-types.ts';
+import type { PositionFit, SeatHistory, SeatName } from '#shared/fits/fit-types.ts';
+import { shaftTaperOf } from '#shared/fits/tapered-position.ts';
 import type { SeatRecord } from './seat-record.ts';
 
 const msPerYear = 365.25 * 24 * 3600 * 1000;
@@ -13,12 +14,44 @@ function known<T extends object>(values: { [Key in keyof T]: T[Key] | null | und
   ) as Partial<T>;
 }
 
-function historyOf(record: SeatRecord, now: Date): SeatHistory {
+/** What the register and the findings tell of a position besides its own row. */
+export interface PositionPast {
+  records: Readonly<Record<SeatName, SeatRecord>>;
+  /** When each finding of looseness was opened that nobody has repaired or dismissed. */
+  unrepairedFindingsAt: readonly Date[];
+  now: Date;
+}
+
+/** A finding counts for a seat until its wear stands in a newer measurement. */
+function earlierFindings(record: SeatRecord, openedAt: readonly Date[]): number {
+  const measuredMs = record.measuredOn === null ? -Infinity : Date.parse(record.measuredOn);
+  return openedAt.filter((opened) => opened.getTime() > measuredMs).length;
+}
+
+function historyOf(
+  seat: SeatName,
+  { records, unrepairedFindingsAt, now }: PositionPast,
+): SeatHistory {
+  const record = records[seat];
   const sinceMs = record.inServiceSince === null ? null : Date.parse(record.inServiceSince);
   return known<SeatHistory>({
     yearsInService: sinceMs === null ? null : Math.max(0, (now.getTime() - sinceMs) / msPerYear),
     condition: record.condition,
+    earlierFindings: earlierFindings(record, unrepairedFindingsAt) || null,
   });
+}
+
+/** Drive-up and loss of clearance where the ring sits on a taper; null on a cylindrical seat. */
+function taperedSeatOf(position: BearingPosition, shaft: SeatRecord): PositionFit['shaftTapered'] {
+  const taper = shaftTaperOf(position);
+  if (taper === null) return undefined;
+  return {
+    taper,
+    ...known<{ driveUpMm: number; clearanceReductionUm: number }>({
+      driveUpMm: shaft.driveUpMm,
+      clearanceReductionUm: shaft.clearanceReductionUm,
+    }),
+  };
 }
 
 /** The bearing's d, D and B as recorded, else as its designation gives them; null where neither does. */
@@ -35,6 +68,9 @@ export function bearingSizeOf(
   };
 }
 
+const housingOutsideMm = (boreMm: number | null, wallMm: number | null) =>
+  boreMm === null || wallMm === null ? null : boreMm + 2 * wallMm;
+
 function tableSizeOf(designation: string | null) {
   if (designation === null) return null;
   try {
@@ -46,13 +82,9 @@ function tableSizeOf(designation: string | null) {
 }
 
 /** A bearing position and its records as the fit functions take them. */
-export function positionFitOf(
-  position: BearingPosition,
-  shaft: SeatRecord,
-  housing: SeatRecord,
-  now: Date,
-): PositionFit {
+export function positionFitOf(position: BearingPosition, past: PositionPast): PositionFit {
   if (position.kind === 'plain') return { plain: true };
+  const { shaft, housing } = past.records;
   const size = bearingSizeOf(position);
   const speedRpm = position.machine?.nominalSpeedRpm ?? null;
   const temperaturesC = known<NonNullable<PositionFit['temperaturesC']>>({
@@ -82,12 +114,19 @@ export function positionFitOf(
       innerLoad: position.innerLoad,
       outerLoad: position.outerLoad,
       loadLevel: position.loadLevel,
+      shaftBoreMm: position.shaftBoreMm,
+      housingOutsideMm: housingOutsideMm(size.outsideMm, position.housingWallMm),
+      radialLoadN: position.radialLoadN,
+      shaftTapered: taperedSeatOf(position, shaft),
       speedRpm: speedRpm === null ? null : speedRpm * position.shaftRatio,
     }),
     ...(Object.keys(temperaturesC).length > 0 ? { temperaturesC } : {}),
     splitHousing: position.splitHousing,
     mustSlide: position.mustSlide,
-    shaftHistory: historyOf(shaft, now),
-    housingHistory: historyOf(housing, now),
+    heatThroughShaft: position.heatThroughShaft,
+    shaftBonded: shaft.bonding === 'bonded',
+    housingBonded: housing.bonding === 'bonded',
+    shaftHistory: historyOf('shaft', past),
+    housingHistory: historyOf('housing', past),
   };
 }

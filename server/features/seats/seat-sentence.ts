@@ -19,8 +19,23 @@ function verdictWords(fit: SeatFit): string {
     : words[fit.verdict];
 }
 
+/** What is on record of a seat that has no chance of clearance, for the ranking; null where nothing is. */
+export function recordedWithoutChance(record: SeatRecord): string | null {
+  if (record.bonding === 'bonded') return 'bonded with adhesive on purpose';
+  if (record.clearanceReductionUm !== null) return null;
+  return record.driveUpMm === null ? null : `driven up ${record.driveUpMm} mm on its taper`;
+}
+
 /** What the records of one seat mean, in one sentence, outside any finding. */
 export function seatSentence(seat: SeatName, fit: SeatFit | undefined, record: SeatRecord): string {
+  const bonded =
+    record.bonding === 'bonded'
+      ? ' It is bonded with adhesive on purpose: the bond holds the ring, so its clearance is no fault by itself.'
+      : '';
+  return `${fitSentence(seat, fit, record)}${bonded}`;
+}
+
+function fitSentence(seat: SeatName, fit: SeatFit | undefined, record: SeatRecord): string {
   const name = seat === 'shaft' ? 'The shaft seat' : 'The housing seat';
   if (fit === undefined) return `${name} can't be judged: its nominal size is not on record.`;
   if (fit.verdict === 'not recorded') {

@@ -1,5 +1,5 @@
-import type { SeatAssessment } from '#shared/contracts/seat-assessment.ts';
-import type { LimitsUm, SeatFit, SeatName } from '#shared/fits/fit-types.ts';
+import type { SeatAssessment, SeatAssessmentsResponse } from '#shared/contracts/seat-assessment.ts';
+import type { LimitsUm, PositionAssessment, SeatFit, SeatName } from '#shared/fits/fit-types.ts';
 import type { SeatRecord } from './seat-record.ts';
 
 /** Standard uncertainty of a diameter taken with a micrometer in the plant; see shared/fits/seat-fit. */
@@ -29,6 +29,7 @@ export interface SeatFacts {
   seat: SeatName;
   nominalMm: number | null;
   record: SeatRecord;
+  taper: SeatAssessment['taper'];
   fit: SeatFit | undefined;
   sentence: string;
   suspicionRank: number | null;
@@ -42,6 +43,10 @@ export function presentSeat(facts: SeatFacts): SeatAssessment {
     seat,
     nominalMm,
     toleranceClass: record.toleranceClass,
+    taper: facts.taper,
+    driveUpMm: record.driveUpMm,
+    clearanceReductionUm: record.clearanceReductionUm,
+    bonding: record.bonding,
     seatLimitsUm: pair(fit?.seatLimitsUm),
     ringLimitsUm: pair(fit?.ringLimitsUm),
     seatLimitsMm: asDiameters(fit?.seatLimitsUm, nominalMm),
@@ -49,6 +54,7 @@ export function presentSeat(facts: SeatFacts): SeatAssessment {
     probableUm: fit?.probableUm ?? null,
     measuredUm: fit === undefined ? null : measured(fit, record),
     runningUm: fit?.runningUm ?? null,
+    neededUm: fit?.neededUm ?? null,
     recommendedClass: fit?.recommendedClass ?? null,
     recommendationReason: fit?.reason ?? null,
     verdict: fit === undefined ? 'not recorded' : (fit.verdict ?? null),
@@ -59,5 +65,30 @@ export function presentSeat(facts: SeatFacts): SeatAssessment {
     suspicionRank: facts.suspicionRank,
     suspicion: facts.suspicion,
     sentence: facts.sentence,
+  };
+}
+
+/** What the whole bearing has left of its clearance, and how it is mounted. */
+export function presentBearing(
+  assessment: PositionAssessment,
+): Pick<SeatAssessmentsResponse, 'internalClearanceUm' | 'mounting' | 'cautions'> {
+  const { internalClearanceUm: clearance, mounting } = assessment;
+  return {
+    internalClearanceUm: clearance
+      ? {
+          unmounted: clearance.unmounted,
+          mounted: clearance.mounted ?? null,
+          running: clearance.running ?? null,
+        }
+      : null,
+    mounting: mounting
+      ? {
+          heatToC: mounting.heatToC,
+          limitC: mounting.limitC,
+          allowed: mounting.allowed,
+          advice: mounting.advice,
+        }
+      : null,
+    cautions: [...assessment.cautions],
   };
 }

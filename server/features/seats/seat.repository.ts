@@ -1,7 +1,10 @@
-import { In } from 'typeorm';
+import { In, Not } from 'typeorm';
 import type { Db } from '#server/db/database.ts';
 import { BearingPosition } from '#server/db/entities/bearing-position.entity.ts';
+import { FindingScreening } from '#server/db/entities/finding-screening.entity.ts';
+import { Finding } from '#server/db/entities/finding.entity.ts';
 import { FitRecord } from '#server/db/entities/fit-record.entity.ts';
+import { Screening } from '#server/db/entities/screening.entity.ts';
 
 /** What the assessment of a position's seats is made from. */
 export class SeatRepository {
@@ -34,5 +37,36 @@ export class SeatRepository {
       where: { bearingPositionId: In(positionIds) },
       order: { recordedOn: 'DESC', id: 'DESC' },
     });
+  }
+
+  /** Findings that nobody has repaired or dismissed, without the one these screenings belong to. */
+  async unrepairedFindings(
+    positionIds: number[],
+    exceptScreeningIds: number[],
+  ): Promise<Pick<Finding, 'bearingPositionId' | 'openedAt'>[]> {
+    const links =
+      exceptScreeningIds.length === 0
+        ? []
+        : await this.db.find(FindingScreening, { where: { screeningId: In(exceptScreeningIds) } });
+    return this.db.find(Finding, {
+      where: {
+        id: Not(In(links.map(({ findingId }) => findingId))),
+        bearingPositionId: In(positionIds),
+        state: In(['open', 'inspecting', 'monitoring']),
+      },
+    });
+  }
+
+  /** The present screenings of the positions in the surveys, with their points. */
+  screeningsOf(positionIds: number[], surveyIds: number[]): Promise<Screening[]> {
+    if (positionIds.length === 0 || surveyIds.length === 0) return Promise.resolve([]);
+    return this.db
+      .createQueryBuilder(Screening, 'screening')
+      .innerJoinAndSelect('screening.waveform', 'waveform')
+      .innerJoinAndSelect('waveform.measuringPoint', 'point')
+      .where('waveform.surveyId IN (:...surveyIds)', { surveyIds })
+      .andWhere('point.bearingPositionId IN (:...positionIds)', { positionIds })
+      .andWhere('screening.run = waveform.screeningRun')
+      .getMany();
   }
 }

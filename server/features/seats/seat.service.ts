@@ -1,6 +1,7 @@
 import type { SitePrincipal } from '#server/auth/principal.ts';
 import type { Database } from '#server/db/database.ts';
 import type { BearingPosition } from '#server/db/entities/bearing-position.entity.ts';
+import type { Finding } from '#server/db/entities/finding.entity.ts';
 import type { FitRecord } from '#server/db/entities/fit-record.entity.ts';
 import type { Screening } from '#server/db/entities/screening.entity.ts';
 import { notFound } from '#server/http/app-error.ts';
@@ -9,11 +10,13 @@ import { assessSeats } from '#shared/fits/assess-seats.ts';
 import { FitInputError } from '#shared/fits/fit-input-error.ts';
 import type { PositionAssessment, SeatFit, SeatName } from '#shared/fits/fit-types.ts';
 import { rankSeats, type RankedSeat, type SuspectSeat } from '#shared/fits/seat-ranking.ts';
+import { shaftTaperOf } from '#shared/fits/tapered-position.ts';
 import { findingSignsOf } from './finding-signs.ts';
-import { bearingSizeOf, positionFitOf } from './position-fit.ts';
+import { levelsOf, newestSurveyOf } from './neighbour-levels.ts';
+import { bearingSizeOf, positionFitOf, type PositionPast } from './position-fit.ts';
 import { seatRecordOf, type SeatRecord } from './seat-record.ts';
-import { seatSentence } from './seat-sentence.ts';
-import { presentSeat } from './seat.presenter.ts';
+import { recordedWithoutChance, seatSentence } from './seat-sentence.ts';
+import { presentBearing, presentSeat } from './seat.presenter.ts';
 import { SeatRepository } from './seat.repository.ts';
 
 const seats = ['shaft', 'housing'] as const satisfies readonly SeatName[];
@@ -21,8 +24,8 @@ const seats = ['shaft', 'housing'] as const satisfies readonly SeatName[];
 interface Assessed {
   position: BearingPosition;
   records: Record<SeatName, SeatRecord>;
+  assessment: PositionAssessment;
   fits: Record<SeatName, SeatFit | undefined>;
-  cautions: string[];
   /** What in the register contradicts itself, in words; null where nothing does. */
   fault: string | null;
 }
@@ -59,36 +62,53 @@ export class SeatService {
     const train = await repository.ofMachine(position.machineId);
     const place = train.findIndex(({ id }) => id === positionId);
     const nearby = [train[place - 1], train[place + 1]].filter((next) => next !== undefined);
-    const records = await repository.recordsOf([positionId, ...nearby.map(({ id }) => id)]);
-    const own = this.assessOne(position, records);
+    const ids = [positionId, ...nearby.map(({ id }) => id)];
+    const records = await repository.recordsOf(ids);
+    const findings = await repository.unrepairedFindings(
+      ids,
+      screenings.map(({ id }) => id),
+    );
+    const own = this.assessOne(position, records, findings);
     if (position.kind === 'plain') {
       return {
         seats: [],
         neighbours: [],
         conclusion:
           'A plain bearing has no seats of its own: check clearance, liner and pedestal instead.',
-        cautions: own.cautions,
+        ...presentBearing(own.assessment),
       };
     }
     if (screenings.length === 0) return presentAlone(own);
     const neighbours = nearby
       .filter(({ kind }) => kind === 'rolling')
-      .map((next) => this.assessOne(next, records));
-    return presentRanked(own, neighbours, screenings);
+      .map((next) => this.assessOne(next, records, findings));
+    const newest = newestSurveyOf(screenings);
+    const levels = levelsOf(await repository.screeningsOf(ids, newest === null ? [] : [newest]));
+    return presentRanked(own, neighbours, screenings, levels);
   }
 
-  private assessOne(position: BearingPosition, allRecords: readonly FitRecord[]): Assessed {
+  private assessOne(
+    position: BearingPosition,
+    allRecords: readonly FitRecord[],
+    findings: readonly Pick<Finding, 'bearingPositionId' | 'openedAt'>[],
+  ): Assessed {
     const ownRecords = allRecords.filter((record) => record.bearingPositionId === position.id);
     const records = {
       shaft: seatRecordOf(ownRecords, 'shaft'),
       housing: seatRecordOf(ownRecords, 'housing'),
     };
-    const { assessment, fault } = tryAssess(position, records, this.now());
+    const { assessment, fault } = tryAssess(position, {
+      records,
+      unrepairedFindingsAt: findings
+        .filter(({ bearingPositionId }) => bearingPositionId === position.id)
+        .map(({ openedAt }) => openedAt),
+      now: this.now(),
+    });
     return {
       position,
       records,
+      assessment,
       fits: { shaft: assessment.shaftSeat, housing: assessment.housingSeat },
-      cautions: [...assessment.cautions],
       fault,
     };
   }
@@ -97,12 +117,10 @@ export class SeatService {
 /** A record that contradicts the bearing is told, not thrown: the finding must still open. */
 function tryAssess(
   position: BearingPosition,
-  records: Record<SeatName, SeatRecord>,
-  now: Date,
+  past: PositionPast,
 ): { assessment: PositionAssessment; fault: string | null } {
   try {
-    const fit = positionFitOf(position, records.shaft, records.housing, now);
-    return { assessment: assessSeats(fit), fault: null };
+    return { assessment: assessSeats(positionFitOf(position, past)), fault: null };
   } catch (error) {
     if (!(error instanceof FitInputError)) throw error;
     return { assessment: { cautions: [] }, fault: error.message };
@@ -122,6 +140,7 @@ function presentSeats(own: Assessed, ranked: readonly RankedSeat[]) {
       seat,
       nominalMm: nominalOf(own, seat),
       record: own.records[seat],
+      taper: seat === 'shaft' ? shaftTaperOf(own.position) : null,
       fit: own.fits[seat],
       sentence: rank?.reason ?? seatSentence(seat, own.fits[seat], own.records[seat]),
       suspicionRank: rank?.rank ?? null,
@@ -143,18 +162,27 @@ function presentAlone(own: Assessed): SeatAssessmentsResponse {
       : missing.length === 0
         ? 'Both seats are on record.'
         : `The record of the ${missing.join(' and the ')} seat is missing: get the drawing, or measure at the next opening.`;
-  return { seats: presentSeats(own, []), neighbours: [], conclusion, cautions: own.cautions };
+  return {
+    seats: presentSeats(own, []),
+    neighbours: [],
+    conclusion,
+    ...presentBearing(own.assessment),
+  };
 }
 
 function presentRanked(
   own: Assessed,
   neighbours: readonly Assessed[],
   screenings: readonly Screening[],
+  levels: ReadonlyMap<number, number>,
 ): SeatAssessmentsResponse {
+  const ownLevel = levels.get(own.position.id);
   const suspects = [own, ...neighbours].flatMap((assessed) =>
     seats.map((seat): SuspectSeat => {
       const fit = assessed.fits[seat];
       const { toleranceClass } = assessed.records[seat];
+      const recordedAs = recordedWithoutChance(assessed.records[seat]);
+      const level = assessed === own ? undefined : levels.get(assessed.position.id);
       return {
         key: keyOf(assessed, seat),
         positionName: assessed.position.name,
@@ -162,6 +190,8 @@ function presentRanked(
         isNeighbour: assessed !== own,
         ...(fit === undefined ? {} : { fit }),
         ...(toleranceClass === null ? {} : { toleranceClass }),
+        ...(recordedAs === null ? {} : { recordedAs }),
+        ...(level === undefined || !ownLevel ? {} : { levelRatio: level / ownLevel }),
       };
     }),
   );
@@ -179,6 +209,6 @@ function presentRanked(
         sentence: seat.reason,
       })),
     conclusion: own.fault === null ? ranking.conclusion : faultSentence(own.fault),
-    cautions: own.cautions,
+    ...presentBearing(own.assessment),
   };
 }

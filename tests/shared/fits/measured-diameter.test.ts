@@ -9,6 +9,7 @@ describe('a measured diameter', () => {
 
   it.each([
     [2.3622, 'measured_in_inches'],
+    [1524, 'measured_in_millimetres'],
     [60_010, 'factor_1000'],
     [0.06, 'factor_1000'],
     [61, 'far_from_nominal'],

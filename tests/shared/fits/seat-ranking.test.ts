@@ -117,6 +117,19 @@ describe('ranking', () => {
     expect(lifting.seats[0]?.reason).toContain('one side');
   });
 
+  it('asks for no record of a seat that is recorded without a chance, and gives it no figure', () => {
+    const [shaft, housing] = suspects('M-DE', false, { ...sound, shaftBonded: true });
+    if (shaft === undefined || housing === undefined) throw new Error('Two seats expected.');
+    const asked = rankSeats([shaft, housing], { kind: 'seat' });
+    expect(asked.firstGap).toBe('M-DE:shaft');
+    const bonded = { ...shaft, recordedAs: 'bonded with adhesive on purpose' };
+    const ranking = rankSeats([bonded, housing], { kind: 'seat' });
+    const ranked = ranking.seats.find(({ key }) => key === 'M-DE:shaft');
+    expect(ranking.firstGap).toBeNull();
+    expect(ranked?.suspicion).toBeNull();
+    expect(ranked?.reason).toMatch(/bonded with adhesive on purpose, which allows no figure/);
+  });
+
   it('prefers the position of the finding to its neighbour, unless that one is much louder', () => {
     const both = (levelRatio?: number): SuspectSeat[] => [
       {

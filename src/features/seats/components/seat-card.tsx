@@ -4,6 +4,7 @@ import { DescriptionList, type Description } from '#src/components/description-l
 import { Figure } from '#src/components/figure.tsx';
 import { Term } from '#src/components/term.tsx';
 import { formatDay } from '#src/lib/dates.ts';
+import { formatEntered, formatFixed } from '#src/lib/numbers.ts';
 import { limitsMmText, percentText, seatPartsWords, seatWords, verdictText } from './seat-words.ts';
 
 /** One seat: its gauge, what its records mean, and its place among the suspects. */
@@ -22,18 +23,20 @@ export function SeatCard({ seat }: { seat: SeatAssessment }) {
       </header>
       <div className="flex flex-col gap-3 p-4">
         <p className="max-w-prose">{seat.sentence}</p>
-        <FitGauge
-          title={`${title}: fit`}
-          data={{
-            seat: seat.seat,
-            seatLimitsUm: seat.seatLimitsUm,
-            ringLimitsUm: seat.ringLimitsUm,
-            seatClass: seat.toleranceClass,
-            interferenceUm: seat.interferenceUm,
-            measuredUm: seat.measuredUm,
-            runningUm: seat.runningUm,
-          }}
-        />
+        {seat.taper === null && (
+          <FitGauge
+            title={`${title}: fit`}
+            data={{
+              seat: seat.seat,
+              seatLimitsUm: seat.seatLimitsUm,
+              ringLimitsUm: seat.ringLimitsUm,
+              seatClass: seat.toleranceClass,
+              interferenceUm: seat.interferenceUm,
+              measuredUm: seat.measuredUm,
+              runningUm: seat.runningUm,
+            }}
+          />
+        )}
         <DescriptionList columns={2} items={factsOf(seat)} />
         {seat.recommendationReason !== null && (
           <p className="max-w-prose text-sm text-ink-soft">{seat.recommendationReason}</p>
@@ -58,15 +61,39 @@ function Suspicion({ seat }: { seat: SeatAssessment }) {
   );
 }
 
+const entered = (value: number | null, unit: string) => (
+  <Figure value={value === null ? null : formatEntered(value)} unit={unit} />
+);
+
+/** What a cylindrical seat is judged by. */
+const classFacts = (seat: SeatAssessment): Description[] => [
+  { label: 'Class on record', value: <Figure value={seat.toleranceClass} /> },
+  { label: 'Limits at 20 °C', value: <Figure value={limitsMmText(seat)} unit="mm" /> },
+  { label: 'Class the load asks for', value: <Figure value={seat.recommendedClass} /> },
+  ...(seat.neededUm === null
+    ? []
+    : [
+        {
+          label: 'Interference the load needs',
+          value: <Figure value={formatFixed(seat.neededUm, 1)} unit="µm" />,
+        },
+      ]),
+];
+
+/** What a tapered seat is judged by instead. */
+const taperFacts = (seat: SeatAssessment): Description[] => [
+  { label: 'Taper of the bore', value: <Figure value={seat.taper} /> },
+  { label: 'Driven up', value: entered(seat.driveUpMm, 'mm') },
+  { label: 'Loss of internal clearance', value: entered(seat.clearanceReductionUm, 'µm') },
+];
+
 function factsOf(seat: SeatAssessment): Description[] {
   return [
-    {
-      label: 'Nominal size',
-      value: <Figure value={seat.nominalMm === null ? null : `${seat.nominalMm}`} unit="mm" />,
-    },
-    { label: 'Class on record', value: <Figure value={seat.toleranceClass} /> },
-    { label: 'Limits at 20 °C', value: <Figure value={limitsMmText(seat)} unit="mm" /> },
-    { label: 'Class the load asks for', value: <Figure value={seat.recommendedClass} /> },
+    { label: 'Nominal size', value: entered(seat.nominalMm, 'mm') },
+    ...(seat.taper === null ? classFacts(seat) : taperFacts(seat)),
+    ...(seat.bonding === null
+      ? []
+      : [{ label: 'Adhesive', value: seat.bonding === 'bonded' ? 'Bonded on purpose' : 'None' }]),
     { label: 'Judged', value: verdictText(seat) },
     {
       label: (

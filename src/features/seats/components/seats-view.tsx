@@ -1,5 +1,6 @@
 import type { SeatAssessmentsResponse } from '#shared/contracts/seat-assessment.ts';
 import { Notice } from '#src/components/notice.tsx';
+import { BearingFacts } from './bearing-facts.tsx';
 import { SeatCard } from './seat-card.tsx';
 import { percentText, seatWords } from './seat-words.ts';
 
@@ -16,6 +17,7 @@ export function SeatsView({ assessment }: { assessment: SeatAssessmentsResponse 
           <SeatCard key={seat.seat} seat={seat} />
         ))}
       </div>
+      <BearingFacts assessment={assessment} />
       {assessment.neighbours.length > 0 && (
         <details>
           <summary className="cursor-pointer text-sm">
