@@ -27,6 +27,12 @@ export interface ScreeningFeatures {
   firstProminenceDb: number;
   /** Mean size of the second differences of the levels from order to order, dB: a process or a resonance lifts single orders. */
   unevennessDb: number;
+  /** How far the levels of orders 1–10 scatter about a straight line over order, dB rms. */
+  roughnessDb: number;
+  /** How far the strongest order stands above the stronger of the two beside it, dB. */
+  aloneDb: number;
+  /** Velocity of 3×, mm/s rms. */
+  thirdMmPerS: number;
   /** Half and third orders that stand out, and the level of the strongest against the strongest order, dB. */
   fractions: number;
   halfDb: number;
@@ -118,6 +124,9 @@ export function featuresOf(sources: FeatureSources): ScreeningFeatures {
     ),
     firstProminenceDb: clamp(whole[0]?.order === 1 ? whole[0].prominenceDb : 0, -10, 60),
     unevennessDb: unevenness(whole.filter(within(1, 10))),
+    roughnessDb: roughness(whole.filter(within(1, 10))),
+    aloneDb: alone(whole),
+    thirdMmPerS: whole.find((line) => line.order === 3)?.velocityMmPerSRms ?? 0,
     fractions: halves.length + thirds.length,
     halfDb: db(top(halves), strongest ** 2),
     thirdDb: db(top(thirds), strongest ** 2),
@@ -144,8 +153,35 @@ const clamp = (value: number, low: number, high: number) => Math.min(high, Math.
 const meanOf = (values: readonly number[]) =>
   values.reduce((sum, value) => sum + value, 0) / Math.max(1, values.length);
 
+const levelsDb = (lines: readonly OrderLine[]) =>
+  lines.map((line) => 20 * Math.log10(Math.max(line.velocityMmPerSRms, 1e-9)));
+
+function roughness(lines: readonly OrderLine[]): number {
+  const levels = levelsDb(lines);
+  if (levels.length < 4) return 10;
+  const middle = (levels.length - 1) / 2;
+  const mean = meanOf(levels);
+  const [above, below] = [0, 1].map((power) =>
+    levels.reduce(
+      (sum, level, i) => sum + (i - middle) ** (power + 1) * (power ? 1 : level - mean),
+      0,
+    ),
+  ) as [number, number];
+  return Math.sqrt(
+    meanOf(levels.map((level, i) => (level - mean - (above / below) * (i - middle)) ** 2)),
+  );
+}
+
+function alone(lines: readonly OrderLine[]): number {
+  const levels = levelsDb(lines);
+  const top = Math.max(...levels, -180);
+  const at = levels.indexOf(top);
+  const beside = Math.max(levels[at - 1] ?? -180, levels[at + 1] ?? -180);
+  return Math.min(60, top - beside);
+}
+
 function unevenness(lines: readonly OrderLine[]): number {
-  const levels = lines.map((line) => 20 * Math.log10(Math.max(line.velocityMmPerSRms, 1e-9)));
+  const levels = levelsDb(lines);
   if (levels.length < 4) return 10;
   return meanOf(
     levels

@@ -30,10 +30,9 @@ export function scoreParts(
     half: (c.perHalf * clamp(f.halfDb + 40, 0, 50)) / 20,
     steadyRun: (c.perSteadyRun * 2 * run * f.synchronousShare) / 5,
     strongRun: (c.perStrongRun * run * clamp(logOver(f.runMmPerS, 0.05), 0, 4)) / 10,
-    fewAbove:
-      -c.perFewAbove *
-      clamp((-20 - f.highOverLowDb) / 10, 0, 1) *
-      clamp((-25 - f.halfDb) / 10, 0, 1),
+    third: (c.perThird * clamp(logOver(f.thirdMmPerS, 1) + 6, 0, 7)) / 2,
+    alone: (-c.perAlone * clamp(f.aloneDb - 10, 0, 30)) / 10,
+    rough: (-c.perRough * Math.min(f.roughnessDb, 20)) / 5,
     nature: -c.perNature * f.familyByNature,
     explained: -c.perUnexplained * f.explainedShare,
   };

@@ -38,6 +38,8 @@ const shiftMaxLines = 1.2;
 /** By how much the family must gain, in nepers of power over all orders, for the following to be believed. */
 const gainMin = 0.15;
 const sharpOrders = 20;
+/** Deviations this much larger than noise alone gives are wander. */
+const wanderOverNoise = 5;
 
 /**
  * Follows the phase of the strongest low order from segment to segment (demodulation), takes what
@@ -51,6 +53,7 @@ export function trackAngle(band: BandVelocity, speedHz: number): TrackedRecord {
   let velocity = toShaftAngle(band, speedHz, deviation);
   let trackedOrder: number | null = null;
   let current = speedHz;
+  let noiseTurns = Infinity;
   let sharp = sharpness(velocity);
   const durationS = band.mmPerS.length / band.rateHz;
   for (let round = 0; round < rounds; round += 1) {
@@ -80,9 +83,10 @@ export function trackAngle(band: BandVelocity, speedHz: number): TrackedRecord {
     if (sharper < sharp + gainMin) break;
     [current, deviation, velocity, sharp] = [tried, followed, resampled, sharper];
     trackedOrder = phase.order;
+    noiseTurns = phase.noiseTurns;
   }
   return {
-    speedHz: current,
+    speedHz: current + meanDriftHz(deviation, noiseTurns),
     velocity,
     deviation,
     trackedOrder,
@@ -173,6 +177,17 @@ function takeLine(values: Float64Array): { slope: number; rest: Float64Array } {
   const slope = below > 0 ? above / below : 0;
   const mean = sum / Math.max(1, values.length);
   return { slope, rest: values.map((value, i) => value - mean - slope * (i - middle)) };
+}
+
+/**
+ * The least-squares line through a shaft angle that wanders is not its mean speed, which is what the
+ * record's turns over its duration give; where nothing but noise is left, the line is the better.
+ */
+function meanDriftHz({ stepS, turns }: AngleDeviation, noiseTurns: number): number {
+  if (turns.length < segmentsMin) return 0;
+  const rms = Math.sqrt(turns.reduce((sum, turn) => sum + turn * turn, 0) / turns.length);
+  if (!(rms > wanderOverNoise * noiseTurns)) return 0;
+  return ((turns.at(-1) ?? 0) - (turns[0] ?? 0)) / ((turns.length - 1) * stepS);
 }
 
 function at({ fromS, stepS, turns }: AngleDeviation, timeS: number): number {
