@@ -18,6 +18,7 @@ export interface CaseOutcome {
   lookAlike: LookAlikeName;
   /** Null for a machine that is not loose, or a broken record. */
   physicsLeavesSign: boolean | null;
+  risenOrders: number | null;
   visibleOrders: number | null;
   fault: RecordFault | null;
   expectsRetake: boolean;
@@ -55,6 +56,7 @@ export function screenCase(
     severity: label.severity,
     lookAlike: label.lookAlike,
     physicsLeavesSign: label.physicsLeavesSign,
+    risenOrders: label.risenOrders,
     visibleOrders: label.visibleOrders,
     fault: label.fault,
     expectsRetake: label.expectsRetake,

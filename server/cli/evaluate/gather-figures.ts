@@ -1,5 +1,5 @@
 import type { CaseOutcome } from './case-outcome.ts';
-import type { Figure, MethodFigures } from './evaluation-figures.ts';
+import type { Figure, MethodFigures } from '#shared/signal/method-figures.ts';
 import {
   calibration,
   calibrationError,
@@ -12,6 +12,7 @@ import {
   predictiveValue,
   recall,
   recallByKind,
+  recallBySigns,
   retakes,
   speedErrors,
   tightCases,
@@ -138,6 +139,7 @@ export function gatherFigures(
     waveforms: cases.length,
     figures,
     recallByKind: recallByKind(cases),
+    recallBySigns: recallBySigns(cases),
     withoutSign: {
       name: 'loose machines that leave no sign',
       cases: withoutSign.length,

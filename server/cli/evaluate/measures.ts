@@ -76,6 +76,31 @@ export function recallByKind(outcomes: readonly CaseOutcome[]): Share[] {
   );
 }
 
+const signRanges = [
+  [0, 2],
+  [3, 4],
+  [5, 7],
+  [8, Infinity],
+] as const;
+
+/** Recall by how much the looseness shows at all: orders it raised. */
+export function recallBySigns(outcomes: readonly CaseOutcome[]): Share[] {
+  const loose = looseCases(outcomes);
+  return signRanges.map(([from, to]) =>
+    share(
+      to === Infinity
+        ? `${from} orders and more raised`
+        : from === 0
+          ? `at most ${to} orders raised`
+          : `${from} to ${to} orders raised`,
+      loose.filter(
+        ({ risenOrders }) => risenOrders !== null && risenOrders >= from && risenOrders <= to,
+      ),
+      flagged,
+    ),
+  );
+}
+
 export function falseAlarms(outcomes: readonly CaseOutcome[]): Share[] {
   const tight = tightCases(outcomes);
   const names = [...new Set(tight.map(({ lookAlike }) => lookAlike))].sort();

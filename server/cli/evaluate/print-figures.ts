@@ -3,7 +3,7 @@ import {
   type Figure,
   type MethodFigures,
   type ShareRow,
-} from './evaluation-figures.ts';
+} from '#shared/signal/method-figures.ts';
 
 /** The evaluation as a table for the terminal: each figure beside its target. */
 export function printFigures(figures: MethodFigures): string {
@@ -16,6 +16,9 @@ export function printFigures(figures: MethodFigures): string {
     'Looseness found, by kind and severity',
     ...figures.recallByKind.map(shareLine),
     shareLine(figures.withoutSign),
+    '',
+    'Looseness found, by how many orders it raised',
+    ...figures.recallBySigns.map(shareLine),
     '',
     'False alarms, by look-alike',
     ...figures.falseAlarms.map(shareLine),

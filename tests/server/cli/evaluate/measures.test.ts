@@ -7,6 +7,7 @@ import {
   percentile,
   predictiveValue,
   recall,
+  recallBySigns,
   retakes,
 } from '#server/cli/evaluate/measures.ts';
 
@@ -17,6 +18,7 @@ function outcome(changes: Partial<CaseOutcome>): CaseOutcome {
     severity: null,
     lookAlike: 'sound',
     physicsLeavesSign: null,
+    risenOrders: null,
     visibleOrders: 5,
     fault: null,
     expectsRetake: false,
@@ -47,6 +49,20 @@ describe('the measures of an evaluation', () => {
   it('leave out loose machines that leave no sign', () => {
     const [all] = recall([loose({ verdict: 'likely' }), loose({ physicsLeavesSign: false })]);
     expect(all).toMatchObject({ cases: 1, hits: 1 });
+  });
+
+  it('tell recall by how many orders the looseness raised', () => {
+    const ranges = recallBySigns([
+      loose({ verdict: 'likely', risenOrders: 9 }),
+      loose({ verdict: 'none', risenOrders: 2 }),
+      loose({ verdict: 'suspected', risenOrders: 2 }),
+    ]);
+    expect(ranges.map(({ cases, hits }) => [cases, hits])).toEqual([
+      [2, 1],
+      [0, 0],
+      [0, 0],
+      [1, 1],
+    ]);
   });
 
   it('count false alarms on sound records of tight machines only', () => {

@@ -25,6 +25,8 @@ export interface MethodFigures {
   seed: number;
   figures: Figure[];
   recallByKind: ShareRow[];
+  /** The same by how many of the watched orders the looseness raised. */
+  recallBySigns: ShareRow[];
   /** Loose machines whose looseness does not reach the record: share that is flagged all the same. */
   withoutSign: ShareRow;
   falseAlarms: ShareRow[];
@@ -37,6 +39,7 @@ export interface MethodFigures {
   realRecordings: { source: string; loose: boolean; flagged: ShareRow; retakes: number }[];
 }
 
+/** Whether a figure reaches its target; null where there is none, or nothing was measured. */
 export function meetsTarget({ value, target }: Figure): boolean | null {
   if (value === null || target === null) return null;
   return target.bound === 'at least' ? value >= target.value : value <= target.value;
