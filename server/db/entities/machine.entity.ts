@@ -14,6 +14,12 @@ import { User } from './user.entity.ts';
 /** A driven train with a tag, e.g. a motor and a pump on one base. */
 @Entity('machine')
 @Index('machine_site_tag', ['siteId', 'tag'], { unique: true })
+// One for each sort of the list, with what a search or filter looks at besides.
+@Index('machine_site_tag_name', ['siteId', 'tag', 'name'])
+@Index('machine_site_name', ['siteId', 'name', 'tag', 'kind', 'criticality'])
+@Index('machine_site_stop', ['siteId', 'nextPlannedStopOn', 'tag', 'name', 'kind', 'criticality'])
+@Index('machine_site_kind', ['siteId', 'kind', 'tag', 'name', 'criticality'])
+@Index('machine_site_criticality', ['siteId', 'criticality', 'tag', 'name', 'kind'])
 export class Machine {
   @PrimaryGeneratedColumn({ type: 'int' })
   id: number;

@@ -5,6 +5,7 @@ import { CreateFindings1796083203000 } from './1796083203000-create-findings.ts'
 import { CreateMail1796083204000 } from './1796083204000-create-mail.ts';
 import { CreateRegisterImports1796133109617 } from './1796133109617-create-register-imports.ts';
 import { AddSeatDepth1796133730464 } from './1796133730464-add-seat-depth.ts';
+import { IndexMachineList1796134294616 } from './1796134294616-index-machine-list.ts';
 
 /** Every migration, oldest first. */
 export const migrations = [
@@ -15,4 +16,5 @@ export const migrations = [
   CreateMail1796083204000,
   CreateRegisterImports1796133109617,
   AddSeatDepth1796133730464,
+  IndexMachineList1796134294616,
 ];

@@ -9,6 +9,7 @@ import type {
   UpdateMachineRequest,
 } from '#shared/contracts/machine.ts';
 import type { SiteRole } from '#shared/contracts/session.ts';
+import { MachineListRepository } from './machine-list.repository.ts';
 import { maySeeMachine } from './machine.policy.ts';
 import { MachineRepository } from './machine.repository.ts';
 import { PositionRepository } from './position.repository.ts';
@@ -30,7 +31,7 @@ export class MachineService {
 
   list(principal: SitePrincipal, query: MachineListQuery) {
     const ownerUserId = principal.role === 'owner' ? principal.userId : null;
-    return new MachineRepository(this.database.db).list(principal.siteId, ownerUserId, query);
+    return new MachineListRepository(this.database.db).list(principal.siteId, ownerUserId, query);
   }
 
   async whole(principal: SitePrincipal, machineId: number): Promise<MachineWhole> {
