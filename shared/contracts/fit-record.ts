@@ -39,7 +39,8 @@ export const seatStages = ['as found', 'as left'] as const;
 export const seatStage = z.enum(seatStages);
 export type SeatStage = z.infer<typeof seatStage>;
 
-const diameterMm = numberBetween(1, 3000, 'mm');
+// Wide on purpose: a slip of unit is told from the nominal size, in words that help.
+const diameterMm = numberBetween(0.001, 5_000_000, 'mm');
 
 export const createFitRecordRequest = z
   .strictObject({

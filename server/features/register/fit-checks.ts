@@ -1,6 +1,7 @@
 import { bearingByDesignation } from '#shared/fits/bearing-designation.ts';
 import { FitInputError } from '#shared/fits/fit-input-error.ts';
 import { measuredDeviationUm } from '#shared/fits/measured-diameter.ts';
+import { nominalSeatMm } from '#shared/fits/nominal-seat.ts';
 import { resolvePosition } from '#shared/fits/resolve-position.ts';
 import { seatClassLimitsUm } from '#shared/fits/seat-class-limits.ts';
 import { shaftTaperOf } from '#shared/fits/tapered-position.ts';
@@ -40,13 +41,6 @@ function knownDesignation(designation: string | null) {
     if (error instanceof FitInputError) return undefined;
     throw error;
   }
-}
-
-function nominalOf(position: Sizes, seat: 'shaft' | 'housing'): number | null {
-  const bearing = knownDesignation(position.designation);
-  return seat === 'shaft'
-    ? (position.boreMm ?? bearing?.d ?? null)
-    : (position.outsideMm ?? bearing?.D ?? null);
 }
 
 const unless = (value: unknown, path: string, message: string): Fault[] =>
@@ -89,7 +83,7 @@ export const fitChecks: FitChecks = {
     );
   },
   recordFaults: (position, record) => {
-    const nominalMm = nominalOf(position, record.seat);
+    const nominalMm = nominalSeatMm(position, record.seat);
     const { toleranceClass } = record;
     const misplaced = formFaults(position, record);
     if (misplaced.length > 0) return misplaced;

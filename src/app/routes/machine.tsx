@@ -13,6 +13,7 @@ import { machineQuery, useCreatePosition } from '#src/features/register/api/mach
 import { MachineFacts } from '#src/features/register/components/machine-facts.tsx';
 import { PositionForm } from '#src/features/register/components/position-form.tsx';
 import { PositionPanel } from '#src/features/register/components/position-panel.tsx';
+import { shaftsOf } from '#src/features/register/components/machine-shafts.ts';
 import { capital } from '#src/features/register/components/machine-words.ts';
 import { PositionSeats } from '#src/features/seats/components/position-seats.tsx';
 import { toApiError } from '#src/lib/api-error.ts';
@@ -33,6 +34,7 @@ export function MachinePage() {
   const { data: machine } = useSuspenseQuery(machineQuery(siteId, machineId));
   const create = useCreatePosition(siteId, machineId);
   const [adding, setAdding] = useState(false);
+  const shafts = shaftsOf(machine);
   const addButton = machine.can.edit && (
     <Button icon="plus" onClick={() => setAdding(true)}>
       Bearing position
@@ -95,6 +97,7 @@ export function MachinePage() {
             key={position.id}
             siteId={siteId}
             position={position}
+            shafts={shafts}
             mayEdit={machine.can.edit}
             seats={<PositionSeats siteId={siteId} positionId={position.id} />}
           />
@@ -102,6 +105,7 @@ export function MachinePage() {
       </div>
       <Dialog wide title="New bearing position" open={adding} onOpenChange={setAdding}>
         <PositionForm
+          shafts={shafts}
           saving={create.isPending}
           failure={create.isError ? toApiError(create.error) : null}
           onSave={(body) => create.mutate(body, { onSuccess: () => setAdding(false) })}

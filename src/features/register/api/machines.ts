@@ -4,7 +4,7 @@ import {
   type CreateBearingPositionRequest,
   type UpdateBearingPositionRequest,
 } from '#shared/contracts/bearing-position.ts';
-import type { CreateFitRecordRequest } from '#shared/contracts/fit-record.ts';
+import type { AddFitRecordRequest } from '#shared/contracts/fit-record.ts';
 import {
   machineListResponse,
   machineResponse,
@@ -73,4 +73,4 @@ export const useAddPoint = (siteId: number, positionId: number) =>
   useChangeBelow<{ direction: Direction }>(siteId, `/positions/${positionId}/points`, 'POST');
 
 export const useAddFitRecord = (siteId: number, positionId: number) =>
-  useChangeBelow<CreateFitRecordRequest>(siteId, `/positions/${positionId}/fit-records`, 'POST');
+  useChangeBelow<AddFitRecordRequest>(siteId, `/positions/${positionId}/fit-records`, 'POST');

@@ -1,13 +1,14 @@
-import { zodResolver } from '@hookform/resolvers/zod';
 import { useForm, type FieldErrors } from 'react-hook-form';
 import {
-  createFitRecordRequest,
+  diameterUnits,
   fitSources,
+  seatBondings,
   seatConditions,
   seatNames,
-  type CreateFitRecordRequest,
+  type AddFitRecordRequest,
 } from '#shared/contracts/fit-record.ts';
 import { Button } from '#src/components/button.tsx';
+import { Checkbox } from '#src/components/checkbox.tsx';
 import { DateInput } from '#src/components/date-input.tsx';
 import { Field } from '#src/components/field.tsx';
 import { FormErrorSummary } from '#src/components/form-error-summary.tsx';
@@ -17,10 +18,11 @@ import { Textarea } from '#src/components/textarea.tsx';
 import { TextInput } from '#src/components/text-input.tsx';
 import type { ApiError } from '#src/lib/api-error.ts';
 import { asNumber, asTextOrNull } from '#src/lib/form-values.ts';
-import { faultsOf } from './form-faults.ts';
+import { fitRecordResolver, isTaperedSeat, type RecordedPosition } from './fit-record-draft.ts';
+import { faultAt, faultsOf } from './form-faults.ts';
 import { optionsOf } from './machine-words.ts';
 
-const fresh: CreateFitRecordRequest = {
+const fresh: AddFitRecordRequest = {
   seat: 'shaft',
   recordedOn: '',
   source: 'drawing',
@@ -33,24 +35,34 @@ const fresh: CreateFitRecordRequest = {
   bonding: null,
   condition: null,
   note: null,
+  correctsSameDay: false,
 };
+
+const unitWords = { mm: 'Millimetres', in: 'Inches' } as const;
 
 /** What is known of one seat on one date. Records are added, never overwritten. */
 export function FitRecordForm({
+  position,
   saving,
   failure,
   onSave,
 }: {
+  position: RecordedPosition;
   saving: boolean;
   failure: ApiError | null;
-  onSave: (record: CreateFitRecordRequest) => void;
+  onSave: (record: AddFitRecordRequest) => void;
 }) {
-  const form = useForm({ resolver: zodResolver(createFitRecordRequest), defaultValues: fresh });
+  const form = useForm({ resolver: fitRecordResolver(position), defaultValues: fresh });
   const { register, formState, watch } = form;
   const errors: FieldErrors = formState.errors;
-  const error = (name: keyof CreateFitRecordRequest) => errors[name]?.message as string | undefined;
+  const error = (name: keyof AddFitRecordRequest) => faultAt(name, errors, failure);
   const send = form.handleSubmit(onSave);
-  const onShaft = watch('seat') === 'shaft';
+  const [seat, recordedOn, unit] = watch(['seat', 'recordedOn', 'diameterUnit']);
+  const onShaft = seat === 'shaft';
+  const isTapered = isTaperedSeat(position, seat);
+  const hasSameDay = position.fitRecords.some(
+    (record) => record.seat === seat && record.recordedOn === recordedOn,
+  );
   return (
     <form
       noValidate
@@ -84,22 +96,17 @@ export function FitRecordForm({
           <TextInput {...register('toleranceClass', asTextOrNull)} />
         </Field>
         <Field
-          id="seatMeasuredMm"
-          label={onShaft ? 'Shaft, mean diameter' : 'Housing bore, mean diameter'}
-          hint="Measured at 20 °C"
+          id="bonding"
+          label="Adhesive"
+          hint="Between ring and seat, on purpose"
           optional
-          error={error('seatMeasuredMm')}
+          error={error('bonding')}
         >
-          <NumberInput unit="mm" {...register('seatMeasuredMm', asNumber)} />
-        </Field>
-        <Field
-          id="ringMeasuredMm"
-          label={onShaft ? 'Bearing bore, mean' : 'Bearing outside diameter, mean'}
-          hint="Measured at 20 °C"
-          optional
-          error={error('ringMeasuredMm')}
-        >
-          <NumberInput unit="mm" {...register('ringMeasuredMm', asNumber)} />
+          <Select
+            placeholder="Not known"
+            options={optionsOf(seatBondings)}
+            {...register('bonding', asTextOrNull)}
+          />
         </Field>
         <Field id="condition" label="Condition" optional error={error('condition')}>
           <Select
@@ -109,6 +116,64 @@ export function FitRecordForm({
           />
         </Field>
       </div>
+      {isTapered ? (
+        <fieldset className="grid gap-4 phone:grid-cols-3">
+          <legend className="lettering mb-2 text-ink-faint">Driven up on its taper</legend>
+          <Field
+            id="driveUpMm"
+            label="Drive-up"
+            hint="Along the shaft, from where all parts touched"
+            optional
+            error={error('driveUpMm')}
+          >
+            <NumberInput unit="mm" {...register('driveUpMm', asNumber)} />
+          </Field>
+          <Field
+            id="clearanceReductionUm"
+            label="Loss of internal clearance"
+            hint="Before less after, by feeler gauge"
+            optional
+            error={error('clearanceReductionUm')}
+          >
+            <NumberInput unit="µm" {...register('clearanceReductionUm', asNumber)} />
+          </Field>
+        </fieldset>
+      ) : (
+        <fieldset className="grid gap-4 phone:grid-cols-3">
+          <legend className="lettering mb-2 text-ink-faint">
+            Measured at 20 °C, mean diameters
+          </legend>
+          <Field id="diameterUnit" label="Unit" error={error('diameterUnit')}>
+            <Select
+              options={diameterUnits.map((one) => ({ value: one, label: unitWords[one] }))}
+              {...register('diameterUnit')}
+            />
+          </Field>
+          <Field
+            id="seatMeasuredMm"
+            label={onShaft ? 'Shaft' : 'Housing bore'}
+            optional
+            error={error('seatMeasuredMm')}
+          >
+            <NumberInput unit={unit} {...register('seatMeasuredMm', asNumber)} />
+          </Field>
+          <Field
+            id="ringMeasuredMm"
+            label={onShaft ? 'Bearing bore' : 'Bearing outside diameter'}
+            optional
+            error={error('ringMeasuredMm')}
+          >
+            <NumberInput unit={unit} {...register('ringMeasuredMm', asNumber)} />
+          </Field>
+        </fieldset>
+      )}
+      {hasSameDay && (
+        <Checkbox
+          label="It corrects the record of this seat and date"
+          hint="The earlier one stays in the seat's history, and no longer counts where the two differ"
+          {...register('correctsSameDay')}
+        />
+      )}
       <Field id="note" label="Note" optional error={error('note')}>
         <Textarea {...register('note', asTextOrNull)} />
       </Field>

@@ -1,13 +1,41 @@
-import type { FitRecordResponse } from '#shared/contracts/fit-record.ts';
+import type { DiameterUnit, FitRecordResponse } from '#shared/contracts/fit-record.ts';
 import { DataTable, type DataTableColumn } from '#src/components/data-table.tsx';
 import { Figure } from '#src/components/figure.tsx';
 import { formatDay } from '#src/lib/dates.ts';
-import { formatFixed } from '#src/lib/numbers.ts';
+import { formatEntered } from '#src/lib/numbers.ts';
+import { diameterText } from './fit-record-draft.ts';
 import { capital } from './machine-words.ts';
 
-const diameter = (value: number | null) => (
-  <Figure value={value === null ? null : formatFixed(value, 3)} unit="mm" />
+/** In the unit in which it was read, with the millimetres that it is kept in. */
+function diameter(value: number | null, unit: DiameterUnit) {
+  if (value === null || unit === 'mm') {
+    return <Figure value={value === null ? null : diameterText(value, 'mm')} unit="mm" />;
+  }
+  return (
+    <span className="flex flex-col items-end">
+      <Figure value={diameterText(value, unit)} unit={unit} />
+      <Figure className="text-xs text-ink-faint" value={diameterText(value, 'mm')} unit="mm" />
+    </span>
+  );
+}
+
+/** Loss of clearance tells more than the drive-up, so it stands first. */
+const driveUp = ({ clearanceReductionUm, driveUpMm }: FitRecordResponse) => (
+  <span className="flex flex-col items-end">
+    {clearanceReductionUm !== null && (
+      <Figure value={formatEntered(clearanceReductionUm)} unit="µm" />
+    )}
+    {driveUpMm !== null && <Figure value={formatEntered(driveUpMm)} unit="mm" />}
+    {clearanceReductionUm === null && driveUpMm === null && <Figure value={null} />}
+  </span>
 );
+
+const driveUpColumn: DataTableColumn<FitRecordResponse> = {
+  id: 'driveUp',
+  header: 'Clearance lost, drive-up',
+  align: 'end',
+  cell: driveUp,
+};
 
 const columns: DataTableColumn<FitRecordResponse>[] = [
   {
@@ -23,17 +51,31 @@ const columns: DataTableColumn<FitRecordResponse>[] = [
     id: 'seatMm',
     header: 'Shaft or bore',
     align: 'end',
-    cell: (row) => diameter(row.seatMeasuredMm),
+    cell: (row) => diameter(row.seatMeasuredMm, row.diameterUnit),
   },
-  { id: 'ringMm', header: 'Ring', align: 'end', cell: (row) => diameter(row.ringMeasuredMm) },
+  {
+    id: 'ringMm',
+    header: 'Ring',
+    align: 'end',
+    cell: (row) => diameter(row.ringMeasuredMm, row.diameterUnit),
+  },
   {
     id: 'condition',
     header: 'Condition',
     cell: (row) => (row.condition === null ? <Figure value={null} /> : capital(row.condition)),
   },
   { id: 'by', header: 'Recorded by', cell: (row) => row.recordedByName },
-  { id: 'note', header: 'Note', cell: (row) => row.note ?? '' },
+  {
+    id: 'note',
+    header: 'Note',
+    cell: (row) => [row.bonding && capital(row.bonding), row.note].filter(Boolean).join('. '),
+  },
 ];
+
+const isDrivenUp = (row: FitRecordResponse) =>
+  row.driveUpMm !== null || row.clearanceReductionUm !== null;
+/** A column more where a seat is tapered; it would stand empty everywhere else. */
+const withDriveUp = columns.toSpliced(6, 0, driveUpColumn);
 
 /** The fit records of a position's two seats, newest first. */
 export function FitRecordTable({
@@ -46,7 +88,7 @@ export function FitRecordTable({
   return (
     <DataTable
       label={`Fit records of ${positionCode}`}
-      columns={columns}
+      columns={records.some(isDrivenUp) ? withDriveUp : columns}
       rows={records}
       rowId={(row) => row.id}
       empty={

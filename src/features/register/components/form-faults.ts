@@ -15,3 +15,14 @@ export function faultsOf(errors: FieldErrors, failure: ApiError | null): FormFau
       : { inputId: fault.path, message: fault.message },
   );
 }
+
+/** What is wrong at one input: what the form found, else what the server refused. */
+export function faultAt(
+  name: string,
+  errors: FieldErrors,
+  failure: ApiError | null,
+): string | undefined {
+  const own = errors[name]?.message;
+  if (typeof own === 'string') return own;
+  return failure?.fields.find(({ path }) => path === name)?.message;
+}

@@ -15,6 +15,7 @@ import { useAddFitRecord, useAddPoint, useUpdatePosition } from '../api/machines
 import { FitRecordForm } from './fit-record-form.tsx';
 import { FitRecordTable } from './fit-record-table.tsx';
 import { capital } from './machine-words.ts';
+import { type Shaft } from './machine-shafts.ts';
 import { PositionForm } from './position-form.tsx';
 
 const sizeOf = (position: BearingPositionResponse): string | null =>
@@ -37,15 +38,49 @@ function loadsInWords(position: BearingPositionResponse): string | null {
   return parts.length === 0 ? null : capital(parts.join(', '));
 }
 
+/** What the rings sit on and in. */
+function partsInWords(position: BearingPositionResponse): string | null {
+  const bore = position.shaftBoreMm === null ? '' : ` with a ${position.shaftBoreMm} mm bore`;
+  const wall = position.housingWallMm === null ? '' : `, ${position.housingWallMm} mm wall`;
+  const shaft =
+    position.shaftMaterial === null && bore === ''
+      ? null
+      : `${position.shaftMaterial ?? ''} shaft${bore}`;
+  const housing =
+    position.housingMaterial === null && wall === '' && !position.splitHousing
+      ? null
+      : `${position.splitHousing ? 'split ' : ''}${position.housingMaterial ?? ''} housing${wall}`;
+  const seat =
+    position.shaftSeatForm === 'cylindrical'
+      ? null
+      : `ring on ${position.shaftSeatForm === 'adapter sleeve' ? 'an' : 'a'} ${position.shaftSeatForm} ${position.seatTaper ?? ''}`;
+  const parts = [shaft, seat, housing].filter((part) => part !== null).map((part) => part.trim());
+  return parts.length === 0 ? null : capital(parts.join(', '));
+}
+
+function ShaftSpeed({ ratio, shafts }: { ratio: number; shafts: readonly Shaft[] }) {
+  const speedRpm = shafts.find((shaft) => shaft.ratio === ratio)?.speedRpm ?? null;
+  if (ratio === 1) return figure(speedRpm, 'r/min');
+  return (
+    <>
+      {figure(speedRpm === null ? null : Math.round(speedRpm * 10) / 10, 'r/min')}, ratio{' '}
+      <Figure value={formatEntered(ratio)} />
+    </>
+  );
+}
+
 /** One bearing position: its bearing, points and fit records; `seats` shows what the records mean. */
 export function PositionPanel({
   siteId,
   position,
+  shafts,
   mayEdit,
   seats,
 }: {
   siteId: number;
   position: BearingPositionResponse;
+  /** Of the whole machine. */
+  shafts: readonly Shaft[];
   mayEdit: boolean;
   seats: ReactNode;
 }) {
@@ -125,20 +160,10 @@ export function PositionPanel({
             { label: 'd × D × B', value: <Figure value={sizeOf(position)} unit="mm" /> },
             { label: 'Load', value: loadsInWords(position) },
             {
-              label: 'Shaft speed ratio',
-              value: <Figure value={formatEntered(position.shaftRatio)} />,
+              label: 'Shaft speed',
+              value: <ShaftSpeed ratio={position.shaftRatio} shafts={shafts} />,
             },
-            {
-              label: 'Materials',
-              value:
-                [
-                  position.shaftMaterial && `${position.shaftMaterial} shaft`,
-                  position.housingMaterial &&
-                    `${position.splitHousing ? 'split ' : ''}${position.housingMaterial} housing`,
-                ]
-                  .filter(Boolean)
-                  .join(', ') || null,
-            },
+            { label: 'Shaft and housing', value: partsInWords(position) },
             {
               label: 'Running temperatures',
               value: (
@@ -178,6 +203,7 @@ export function PositionPanel({
       >
         <PositionForm
           position={editable}
+          shafts={shafts}
           saving={update.isPending}
           failure={update.isError ? toApiError(update.error) : null}
           onSave={(body) => update.mutate(body, { onSuccess: close })}
@@ -191,6 +217,7 @@ export function PositionPanel({
         onOpenChange={(isOpen) => !isOpen && close()}
       >
         <FitRecordForm
+          position={position}
           saving={addRecord.isPending}
           failure={addRecord.isError ? toApiError(addRecord.error) : null}
           onSave={(body) => addRecord.mutate(body, { onSuccess: close })}
