@@ -15,6 +15,14 @@ const pages: Readonly<Record<string, Load>> = {
     const { machineEditLoader, MachineNewPage } = await import('./routes/machine-edit.tsx');
     return { loader: machineEditLoader, Component: MachineNewPage };
   },
+  'machines/import': async () => {
+    const { MachineImportPage } = await import('./routes/machine-import.tsx');
+    return { Component: MachineImportPage };
+  },
+  'machines/import/:importId': async () => {
+    const { importLoader, ImportPage } = await import('./routes/machine-import.tsx');
+    return { loader: importLoader, Component: ImportPage };
+  },
   'machines/:machineId': async () => {
     const { machineLoader, MachinePage } = await import('./routes/machine.tsx');
     return { loader: machineLoader, Component: MachinePage };

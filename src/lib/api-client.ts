@@ -53,6 +53,14 @@ export async function requestNothing(path: string, options: RequestOptions = {})
   await send(path, options);
 }
 
+/** Loads a file, to be saved by the person who asked for it. */
+export async function downloadFile(path: string, accept: string): Promise<Blob> {
+  const answer = await send(path, {}, accept);
+  return answer.blob().catch((cause: unknown) => {
+    throw asRequestError(cause, undefined);
+  });
+}
+
 /** Loads samples or spectrum lines: little-endian 32-bit floats, nothing else. */
 export async function downloadFloat32(
   path: string,

@@ -19,6 +19,7 @@ const pages: Readonly<Record<string, readonly string[]>> = {
   'Reliability lead': [
     '/machines',
     '/machines/new',
+    '/machines/import',
     '/machines/1',
     '/machines/1/edit',
     '/routes/new',

@@ -45,7 +45,16 @@ export function MachinesPage() {
       <PageHeader
         title="Machines"
         facts={[{ label: 'On record', value: data?.total ?? '–' }]}
-        actions={create}
+        actions={
+          role !== 'owner' && (
+            <>
+              {create}
+              <ButtonLink to="import" icon={mayEdit ? 'upload' : 'download'}>
+                {mayEdit ? 'Import and export' : 'Export'}
+              </ButtonLink>
+            </>
+          )
+        }
       />
       <div className="mb-3 flex flex-wrap gap-3">
         <SearchInput
