@@ -1,4 +1,5 @@
 import { analyseWaveform } from './analyse-waveform.ts';
+import { changeSince } from './change-since.ts';
 import { evidenceSentences } from './evidence.ts';
 import { lookAlikes } from './look-alikes.ts';
 import { loosenessKind } from './looseness-kind.ts';
@@ -99,7 +100,12 @@ export function screenWaveform(
     orders,
     harmonicRun: run,
     truncation,
-    evidence: evidenceSentences(features, run, truncation, speed),
+    evidence: [
+      ...evidenceSentences(features, run, truncation, speed),
+      ...(score === null
+        ? []
+        : changeSince({ score, runMmPerS: features.runMmPerS }, input.earlier)),
+    ],
     lookAlikes: lookAlikes(features, run, orders, input.machine),
   };
   return {

@@ -20,6 +20,7 @@ export function AccountMenu({ session, role }: { session: SessionResponse; role?
     ...(session.isAdministrator && role !== undefined
       ? [{ label: 'Administration', onSelect: () => void navigate('/administration') }]
       : []),
+    { label: 'The screening method', onSelect: () => void navigate('/method') },
     ...(session.demo
       ? [{ label: 'Demo mailbox', onSelect: () => void navigate('/demo/mailbox') }]
       : []),

@@ -36,6 +36,13 @@ export function routes(queryClient: QueryClient): RouteObject[] {
       }),
     },
     {
+      path: '/method',
+      lazy: lazyPage(queryClient, async () => {
+        const { methodLoader, MethodPage } = await import('./routes/method.tsx');
+        return { loader: methodLoader, Component: MethodPage };
+      }),
+    },
+    {
       path: '/demo/mailbox',
       lazy: lazyPage(queryClient, async () => {
         const { demoMailboxLoader, DemoMailboxPage } = await import('./routes/demo-mailbox.tsx');

@@ -63,6 +63,9 @@ describe.each(['light', 'dark'] as const)('every page, %s', (theme) => {
       await page.getByRole('heading', { level: 1 }).first().waitFor();
       expect(await violationsOf(page), address).toEqual([]);
     }
+    await page.goto(`${url}/method`);
+    await page.getByRole('heading', { level: 1 }).first().waitFor();
+    expect(await violationsOf(page), '/method').toEqual([]);
     await close();
   });
 });

@@ -1,4 +1,5 @@
 import type { ReactNode } from 'react';
+import { Link } from 'react-router-dom';
 import type { ScreeningResponse } from '#shared/contracts/screening.ts';
 import { Icon } from '#src/components/icon.tsx';
 import { formatFixed } from '#src/lib/numbers.ts';
@@ -42,24 +43,29 @@ export function Evidence({ result }: { result: ScreeningResponse['result'] }) {
           </Part>
         )}
       </div>
-      <Part title="What could look alike">
-        {/* What is still open is read first. */}
-        {[...result.lookAlikes]
-          .sort((a, b) => Number(a.ruledOut) - Number(b.ruledOut))
-          .map(({ name, ruledOut, reason }) => (
-            <li key={name} className="flex gap-2">
-              <span className="mt-1">
-                <Icon name={ruledOut ? 'dash' : 'help'} size={12} />
-              </span>
-              <span>
-                <span className="font-medium">{name}</span>{' '}
-                <span className="text-ink-soft">
-                  {ruledOut ? 'is ruled out' : 'is not ruled out'}: {reason}
+      <div className="flex flex-col gap-5">
+        <Part title="What could look alike">
+          {/* What is still open is read first. */}
+          {[...result.lookAlikes]
+            .sort((a, b) => Number(a.ruledOut) - Number(b.ruledOut))
+            .map(({ name, ruledOut, reason }) => (
+              <li key={name} className="flex gap-2">
+                <span className="mt-1">
+                  <Icon name={ruledOut ? 'dash' : 'help'} size={12} />
                 </span>
-              </span>
-            </li>
-          ))}
-      </Part>
+                <span>
+                  <span className="font-medium">{name}</span>{' '}
+                  <span className="text-ink-soft">
+                    {ruledOut ? 'is ruled out' : 'is not ruled out'}: {reason}
+                  </span>
+                </span>
+              </li>
+            ))}
+        </Part>
+        <Link to="/method" className="ink-link self-start text-sm">
+          How the method judges, and where it fails
+        </Link>
+      </div>
     </div>
   );
 }
