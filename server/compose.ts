@@ -23,12 +23,14 @@ import { machineRoutes, positionRoutes } from './features/register/machine.route
 import { MachineService } from './features/register/machine.service.ts';
 import { PositionService } from './features/register/position.service.ts';
 import { routeRoutes } from './features/register/route.routes.ts';
+import { presentFitRecord } from './features/register/register.presenter.ts';
 import { RouteService } from './features/register/route.service.ts';
 import { ExportService } from './features/register-import/export.service.ts';
 import { ImportService } from './features/register-import/import.service.ts';
 import { registerImportRoutes } from './features/register-import/register-import.routes.ts';
 import { reviewRoutes } from './features/review/review.routes.ts';
 import { ReviewService } from './features/review/review.service.ts';
+import { SeatHistoryService } from './features/seats/seat-history.service.ts';
 import { seatRoutes } from './features/seats/seat.routes.ts';
 import { SeatService } from './features/seats/seat.service.ts';
 import { surveyRoutes } from './features/surveys/survey.routes.ts';
@@ -98,6 +100,10 @@ export function compose(
   const walkRoutes = new RouteService(database);
   const seats = new SeatService(database);
   const assessSeats = seats.assess.bind(seats);
+  const seatHistories = new SeatHistoryService(database, {
+    seenPosition: seats.seenPosition.bind(seats),
+    presentFitRecord,
+  });
   const review = new ReviewService(database, findingEvidence, now);
   const findings = new FindingService(
     database,
@@ -161,7 +167,7 @@ export function compose(
       fileMaxBytes: config.uploadMaxBytes,
     }),
     ...waveformRoutes(waveforms),
-    ...seatRoutes(seats),
+    ...seatRoutes(seats, seatHistories),
     ...reviewRoutes(review),
     ...findingRoutes(findings),
     ...inspectionRoutes(inspections),

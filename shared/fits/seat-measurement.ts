@@ -8,6 +8,15 @@ export interface DiameterReading {
   diameter: number;
 }
 
+/** What the readings of one plane say. */
+export interface PlaneFigures {
+  plane: 1 | 2;
+  meanMm: number;
+  /** Largest less least diameter; absent below two directions. */
+  outOfRoundnessUm?: number;
+  readingCount: number;
+}
+
 /** What a set of readings says of one seat or ring. */
 export interface SeatMeasurement {
   meanMm: number;
@@ -21,6 +30,8 @@ export interface SeatMeasurement {
   /** Twice the standard uncertainty, about 95 %. */
   expandedUncertaintyUm: number;
   readingCount: number;
+  /** Planes that were read, in their order. */
+  planes: readonly PlaneFigures[];
   /** Both planes in all four directions. */
   complete: boolean;
 }
@@ -74,9 +85,10 @@ export function measureSeat(
     um: measuredDeviationUm(reading.diameter * factor, nominalMm, `${field}[${index}]`),
   }));
   const planes = ([1, 2] as const)
-    .map((plane) => deviations.filter((r) => r.plane === plane))
-    .filter((rows) => rows.length > 0)
-    .map((rows) => ({
+    .map((plane) => ({ plane, rows: deviations.filter((r) => r.plane === plane) }))
+    .filter(({ rows }) => rows.length > 0)
+    .map(({ plane, rows }) => ({
+      plane,
       directions: new Set(rows.map((r) => r.directionDeg)),
       um: rows.map((r) => r.um),
     }));
@@ -98,6 +110,12 @@ export function measureSeat(
     standardUncertaintyUm: uncertainty,
     expandedUncertaintyUm: 2 * uncertainty,
     readingCount: readings.length,
+    planes: planes.map(({ plane, directions, um }) => ({
+      plane,
+      meanMm: nominalMm + mean(um) / 1000,
+      outOfRoundnessUm: directions.size > 1 ? spread(um) : undefined,
+      readingCount: um.length,
+    })),
     complete: planes.length === 2 && planes.every((plane) => plane.directions.size === 4),
   };
 }

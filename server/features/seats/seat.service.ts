@@ -42,13 +42,19 @@ export class SeatService {
 
   /** The seats of a position on its own, for whoever may see its machine. */
   async ofPosition(principal: SitePrincipal, positionId: number): Promise<SeatAssessmentsResponse> {
+    await this.seenPosition(principal, positionId);
+    return this.assess(positionId, []);
+  }
+
+  /** The position with its machine; 404 for whoever may not see it. */
+  async seenPosition(principal: SitePrincipal, positionId: number): Promise<BearingPosition> {
     const position = await new SeatRepository(this.database.db).find(positionId);
     const machine = position?.machine;
     const isSeen =
       machine?.siteId === principal.siteId &&
       (principal.role !== 'owner' || machine.ownerUserId === principal.userId);
-    if (!isSeen) throw notFound('bearing position');
-    return this.assess(positionId, []);
+    if (!isSeen || position === null) throw notFound('bearing position');
+    return position;
   }
 
   /** The seats of a position; with the screenings of a finding also ranked by suspicion. */

@@ -33,6 +33,7 @@ export const accessMatrix: Readonly<Record<string, Allowed>> = {
   'POST /api/sites/:siteId/positions/:positionId/points': lead,
   'POST /api/sites/:siteId/positions/:positionId/fit-records': lead,
   'GET /api/sites/:siteId/positions/:positionId/seats': all,
+  'GET /api/sites/:siteId/positions/:positionId/seats/:seat/history': all,
   'GET /api/sites/:siteId/register/exports/:kind': work,
   'GET /api/sites/:siteId/register/imports': lead,
   'POST /api/sites/:siteId/register/imports': lead,

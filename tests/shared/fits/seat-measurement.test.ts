@@ -31,6 +31,15 @@ describe('readings of a seat', () => {
     expect(seat).toMatchObject({ readingCount: 8, complete: true });
   });
 
+  it('tells mean and out-of-roundness of each plane (by hand: 6 and 1 µm; 4 and 3 µm)', () => {
+    const [first, second] = measureSeat(set, 60).planes;
+    expect(first?.meanMm).toBeCloseTo(60.006, 9);
+    expect(first?.outOfRoundnessUm).toBeCloseTo(4, 9);
+    expect(second?.meanMm).toBeCloseTo(60.001, 9);
+    expect(second?.outOfRoundnessUm).toBeCloseTo(3, 9);
+    expect([first?.readingCount, second?.readingCount]).toEqual([4, 4]);
+  });
+
   it('joins the instrument and the scatter in the uncertainty (by hand: √(2² + 9.1429/8))', () => {
     // Deviations 4 6 8 6 0 1 3 0 about 3.5: sum of squares 64, variance 64/7 = 9.1429.
     const seat = measureSeat(set, 60);

@@ -129,7 +129,11 @@ describe('fit records', () => {
       { seatMeasuredMm: 1524, diameterUnit: 'in' },
       'seatMeasuredMm',
     ],
-    ['a diameter a thousand times too large', { ringMeasuredMm: 60_000 }, 'ringMeasuredMm'],
+    [
+      'a diameter a thousand times too large',
+      { toleranceClass: 'k5', ringMeasuredMm: 60_000 },
+      'ringMeasuredMm',
+    ],
   ])('refuse %s, naming the field', async (_what, change, field) => {
     const { site, lead, as, path } = await plant();
     const machine = await buildMachine(dataSource(), site);
