@@ -4,6 +4,7 @@ import { recordActivity } from '#server/db/activity.repository.ts';
 import type { Database } from '#server/db/database.ts';
 import { isDuplicateKey } from '#server/db/duplicate-key.ts';
 import type { RegisterImport } from '#server/db/entities/register-import.entity.ts';
+import { isForeignKeyConflict } from '#server/db/foreign-key-conflict.ts';
 import { isLockConflict } from '#server/db/lock-conflict.ts';
 import { AppError, notFound } from '#server/http/app-error.ts';
 import type {
@@ -171,6 +172,13 @@ function inWords(cause: unknown): unknown {
     return new AppError(
       'conflict',
       'Somebody else has added one of the new rows since the dry run. Nothing was written; send the file again to see which.',
+      { cause },
+    );
+  }
+  if (isForeignKeyConflict(cause)) {
+    return new AppError(
+      'conflict',
+      'Somebody else began to use one of the rows, or took away what it belongs to, at this moment. Nothing was written; try again to see which.',
       { cause },
     );
   }

@@ -51,6 +51,22 @@ export class RegisterWriteRepository {
     return new Map(rows.map((row) => [row.id, row]));
   }
 
+  /**
+   * The fit records of these positions, of which nobody else adds one until this transaction ends.
+   * The positions are held first, as a person's form does: in another order the two would wait for
+   * each other. Held to read only, so that nobody waits who merely refers to a position.
+   */
+  async holdFitRecords(positionIds: number[]): Promise<FitRecord[]> {
+    const lock = { mode: 'pessimistic_read' } as const;
+    await this.db.find(BearingPosition, {
+      where: { id: In(positionIds) },
+      order: { id: 'ASC' },
+      select: { id: true },
+      lock,
+    });
+    return this.db.find(FitRecord, { where: { bearingPositionId: In(positionIds) }, lock });
+  }
+
   /** Writes the values of each row; those that count their edits count one more. */
   async update(rows: { id: number; values: PlannedValues }[]): Promise<void> {
     const keys = Object.keys(rows[0]?.values ?? {});

@@ -8,7 +8,6 @@ import type { RegisterImport } from '#server/db/entities/register-import.entity.
 import { AppError } from '#server/http/app-error.ts';
 import { differingKeys, valuesOf } from './given-row.ts';
 import { ImportRepository } from './import.repository.ts';
-import { RegisterLookupRepository } from './register-lookup.repository.ts';
 import { RegisterWriteRepository } from './register-write.repository.ts';
 
 const batchRows = 500;
@@ -50,14 +49,13 @@ export async function writePlanned(
   now: Date,
 ): Promise<void> {
   const register = new RegisterWriteRepository(db, kind);
-  const lookup = new RegisterLookupRepository(db);
   const imports = new ImportRepository(db);
   await eachPlanned(db, id, async (rows) => {
     const made = rows.filter(({ fate }) => fate === 'new');
     const changed = rows.filter(({ fate }) => fate === 'changed');
     if (made.length > 0) {
       const values = made.map((row) => planOf(row).after);
-      if (kind === 'fit-records') await refuseRecorded(lookup, made);
+      if (kind === 'fit-records') await refuseRecorded(register, made);
       // Who recorded it and when isn't part of what the file says.
       const known =
         kind === 'fit-records'
@@ -96,13 +94,13 @@ const changedSince = ({ rowNumber, label }: RegisterImportRow) =>
 
 /** Fit records have no unique key: two of them for one seat and date are found by looking. */
 async function refuseRecorded(
-  lookup: RegisterLookupRepository,
+  register: RegisterWriteRepository,
   rows: RegisterImportRow[],
 ): Promise<void> {
   const key = (values: object) =>
     Object.values(valuesOf(values, ['bearingPositionId', 'seat', 'recordedOn'])).join(' ');
   const ids = rows.map((row) => Number(planOf(row).after.bearingPositionId));
-  const there = new Set((await lookup.fitRecordsOf([...new Set(ids)])).map(key));
+  const there = new Set((await register.holdFitRecords([...new Set(ids)])).map(key));
   const stale = rows.find((row) => there.has(key(planOf(row).after)));
   if (stale !== undefined) throw changedSince(stale);
 }

@@ -123,6 +123,28 @@ describe('importing a register', () => {
     expect(await story.machines()).toHaveLength(2);
   });
 
+  it('and a form at the same time leave one record for a seat and date', async () => {
+    const story = await importStory(dataSource());
+    await story.load('machines', machinesCsv);
+    await story.load('positions', positionsCsv);
+    const { id } = await story.dryRun('fit-records', recordsCsv);
+    const [machine] = await story.machines();
+    const whole = () => story.as(story.lead).get(`${story.path}/machines/${machine.id}`);
+    const positionId: number = (await whole()).body.positions[0].id;
+    const record = { seat: 'shaft', recordedOn: '2026-01-15', source: 'drawing' };
+    const answers = await Promise.all([
+      story.apply(id),
+      story
+        .as(story.lead)
+        .post(`${story.path}/positions/${positionId}/fit-records`, {
+          ...record,
+          toleranceClass: 'm5',
+        }),
+    ]);
+    expect(answers.filter(({ status }) => status === 409)).toHaveLength(1);
+    expect((await whole()).body.positions[0].fitRecords).toHaveLength(1);
+  });
+
   it('keeps every import with its people, newest first', async () => {
     const story = await importStory(dataSource());
     const id = await story.load('machines', machinesCsv);
