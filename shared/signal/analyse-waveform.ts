@@ -97,7 +97,7 @@ export function analyseWaveform(input: ScreeningInput): WaveformAnalysis {
   const orders = orderTable(spectrum, speedHz, view.usableHz, machine, quantity, factor);
   const run = harmonicRun(orders, speedsTried * familyChance(spectrum, orders), speedsTried);
   const revolution = averagedRevolution(tracked.velocity, speedHz, usableOrders);
-  const truncation = findTruncation(revolution.displacementUm, values, clipping);
+  const truncation = findTruncation(revolution, values, clipping);
   const features = featuresOf({
     spectrum,
     usableOrders,

@@ -1,4 +1,6 @@
+import type { AveragedRevolution } from './averaged-revolution.ts';
 import type { Clipping } from './clipping.ts';
+import { realFft, realFromLines } from './fft.ts';
 import type { Truncation } from './screening-types.ts';
 
 /** Near the extreme: within this share of the half range. Narrow, since a second order also rounds a crest. */
@@ -11,36 +13,78 @@ const sineShare = Math.acos(1 - nearShare) / Math.PI;
 const dwellFactor = 1.6;
 const rangesMax = 400;
 
+/** Orders that make the shape a truncated one is held against: what 1× and 2× round is not truncated. */
+const shapeOrders = 2;
+
 /**
- * How long the averaged revolution dwells near its extremes compared with a sine: a joint that hits
- * a stop flattens the displacement there.
+ * How long the averaged revolution dwells near its extremes, in displacement and in velocity,
+ * compared with its own first two orders, and at least with a sine: a joint that hits a stop flattens
+ * the motion there.
  *
- * @param displacementUm - one averaged turn
+ * @param revolution - one averaged turn
  * @param values - the record, for marking where it is near the extreme
  */
 export function findTruncation(
-  displacementUm: Float64Array,
+  revolution: Pick<AveragedRevolution, 'displacementUm' | 'velocityMmPerS'>,
   values: Float64Array,
   clipping: Clipping,
 ): Truncation {
-  const high = displacementUm.reduce((most, value) => Math.max(most, value), -Infinity);
-  const low = displacementUm.reduce((least, value) => Math.min(least, value), Infinity);
-  const half = (high - low) / 2;
-  const share = (near: (value: number) => boolean) =>
-    displacementUm.length === 0 ? 0 : displacementUm.filter(near).length / displacementUm.length;
-  const upper = half > 0 ? share((value) => value > high - nearShare * half) : 0;
-  const lower = half > 0 ? share((value) => value < low + nearShare * half) : 0;
-  const instrument = clipping.upper || clipping.lower;
-  const flat = (dwell: number) => dwell > dwellFactor * sineShare;
-  const side = instrument
-    ? sideOf(clipping.upper, clipping.lower)
-    : sideOf(flat(upper), flat(lower));
+  if (clipping.upper || clipping.lower) {
+    const side = sideOf(clipping.upper, clipping.lower);
+    return {
+      side,
+      share: clipping.share,
+      expectedShare: 0,
+      instrument: true,
+      ranges: extremeRanges(values, side),
+    };
+  }
+  const turns = [revolution.displacementUm, revolution.velocityMmPerS].map(dwellsOf);
+  const flat = ({ share, expected }: Dwell) => share > dwellFactor * expected;
+  const held = turns.find(({ upper, lower }) => flat(upper) || flat(lower)) ?? turns[0]!;
+  const side = sideOf(flat(held.upper), flat(held.lower));
+  const told =
+    side === 'upper' || (side !== 'lower' && held.upper.share > held.lower.share)
+      ? held.upper
+      : held.lower;
   return {
     side,
-    share: instrument ? clipping.share : Math.max(upper, lower),
-    expectedShare: instrument ? 0 : sineShare,
-    instrument,
+    share: told.share,
+    expectedShare: told.expected,
+    instrument: false,
     ranges: side === 'none' ? [] : extremeRanges(values, side),
+  };
+}
+
+interface Dwell {
+  share: number;
+  expected: number;
+}
+
+function dwellsOf(turn: Float64Array): { upper: Dwell; lower: Dwell } {
+  const lines = realFft(turn).map((value) => value / Math.max(1, turn.length));
+  const shape =
+    turn.length < 4 ? turn : realFromLines(lines.subarray(0, 2 * (shapeOrders + 1)), turn.length);
+  const [is, would] = [nearExtremes(turn), nearExtremes(shape)];
+  return {
+    upper: { share: is.upper, expected: Math.max(sineShare, would.upper) },
+    lower: { share: is.lower, expected: Math.max(sineShare, would.lower) },
+  };
+}
+
+/** Share of the turn near the highest and near the lowest value. */
+function nearExtremes(turn: Float64Array): { upper: number; lower: number } {
+  let [high, low] = [-Infinity, Infinity];
+  for (const value of turn) {
+    if (value > high) high = value;
+    if (value < low) low = value;
+  }
+  const reach = (nearShare * (high - low)) / 2;
+  if (!(reach > 0)) return { upper: 0, lower: 0 };
+  const share = (near: (value: number) => boolean) => turn.filter(near).length / turn.length;
+  return {
+    upper: share((value) => value > high - reach),
+    lower: share((value) => value < low + reach),
   };
 }
 

@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import type { Unit } from '#shared/quantities/quantity.ts';
 import { analyseWaveform } from '#shared/signal/analyse-waveform.ts';
 import { clippedSine, tones, whiteNoise } from './test-signals.ts';
 
@@ -7,11 +8,11 @@ const sampleRateHz = (count / turns) * 25;
 const noise = whiteNoise(count, 8);
 
 /** Truncation of a displacement record, µm, with a little noise so that no value repeats. */
-const truncationOf = (displacementUm: Float64Array) =>
+const truncationOf = (motion: Float64Array, unit: Unit = 'µm') =>
   analyseWaveform({
-    samples: displacementUm.map((value, i) => 50 * value + 0.05 * (noise[i] ?? 0)),
+    samples: motion.map((value, i) => 50 * value + 0.05 * (noise[i] ?? 0)),
     sampleRateHz,
-    unit: 'µm',
+    unit,
     toldSpeedRpm: 1500,
   }).family?.truncation;
 
@@ -31,6 +32,25 @@ describe('truncation of the motion', () => {
     expect(upper?.share).toBeGreaterThan(Math.acos(0.9) / Math.PI - 0.02);
     const lower = truncationOf(clippedSine(turns, count, 0.9, 'upper').map((value) => -value));
     expect(lower?.side).toBe('lower');
+  });
+
+  it('is found in velocity as well', () => {
+    const upper = clippedSine(turns, count, 0.8, 'upper');
+    expect(truncationOf(upper, 'mm/s')).toMatchObject({ side: 'upper', instrument: false });
+    expect(truncationOf(clippedSine(turns, count, 0.8, 'both'), 'in/s')?.side).toBe('both');
+  });
+
+  // cos θ − ¼ cos 2θ is flat at its crest up to the fourth power of θ.
+  it('is not read into a crest that a second order flattens', () => {
+    const flat = tones(
+      [
+        { frequencyHz: 25, amplitude: 1, phase: Math.PI / 2 },
+        { frequencyHz: 50, amplitude: -0.25, phase: Math.PI / 2 },
+      ],
+      sampleRateHz,
+      count,
+    );
+    for (const unit of ['µm', 'mm/s'] as const) expect(truncationOf(flat, unit)?.side).toBe('none');
   });
 
   it('is not read into a family of misalignment', () => {
