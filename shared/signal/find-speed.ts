@@ -116,8 +116,20 @@ export function findSpeed(
   const range = rangeOf(told, tolerance, machine, view);
   if (range === null) return notFound;
   const say = sayings(view);
-  const rough = bestIn(say, view, range[0], range[1]);
-  const { speedHz, spread, support } = refine(view, rough.speedHz);
+  const toldBest = bestIn(say, view, range[0], range[1]);
+  if (told !== null) {
+    const own = rangeOf(null, undefined, machine, view);
+    if (own !== null && knowsItsSpeed(machine) && (told < own[0] || told > own[1])) {
+      // A told speed the machine can't run at is a slip of the pen, unless the lines say otherwise.
+      const ownBest = bestIn(say, view, own[0], own[1]);
+      if (ownBest.score > toldBest.score) {
+        const found = findSpeed(view, undefined, undefined, machine);
+        const reason = `the told speed lies outside the machine’s range of ${(own[0] * 60).toFixed(0)} to ${(own[1] * 60).toFixed(0)} r/min, and the lines say less for it`;
+        return { ...found, alternatives: [...found.alternatives, { speedHz: told, reason }] };
+      }
+    }
+  }
+  const { speedHz, spread, support } = refine(view, toldBest.speedHz);
   const inside = speedHz >= range[0] * 0.999 && speedHz <= range[1] * 1.001;
   const supported = support > 0 && inside;
   if (!supported) {
@@ -143,6 +155,10 @@ export function findSpeed(
     speedsTried: Math.max(1, ((range[1] - range[0]) / view.stepHz) * independentPerLine),
   };
 }
+
+const knowsItsSpeed = (machine: MachineFacts | undefined) =>
+  machine?.nominalSpeedRpm !== undefined ||
+  (machine?.speedMinRpm !== undefined && machine.speedMaxRpm !== undefined);
 
 function rangeOf(
   told: number | null,

@@ -38,4 +38,18 @@ describe('a speed that was not told', () => {
     expect(speed).toMatchObject({ speedHz: null, source: 'none' });
     expect([verdict, score]).toEqual(['retake', null]);
   });
+
+  it('is taken from the machine’s range where the told one can’t be and the lines say less for it', () => {
+    const { speed, verdict } = screenWaveform({
+      samples: running,
+      sampleRateHz,
+      unit: 'mm/s',
+      toldSpeedRpm: 1750,
+      machine: { nominalSpeedRpm: 1480 },
+    }).result;
+    expect(speed.source).toBe('estimated');
+    expect(Math.abs((speed.speedHz ?? 0) / speedHz - 1)).toBeLessThan(5e-4);
+    expect(speed.alternatives.map(({ reason }) => reason).join()).toContain('told speed');
+    expect(verdict).not.toBe('retake');
+  });
 });
