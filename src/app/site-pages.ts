@@ -27,6 +27,10 @@ const pages: Readonly<Record<string, Load>> = {
     const { machineLoader, MachinePage } = await import('./routes/machine.tsx');
     return { loader: machineLoader, Component: MachinePage };
   },
+  'machines/:machineId/positions/:positionId/seats/:seat': async () => {
+    const { seatHistoryLoader, SeatHistoryPage } = await import('./routes/seat-history.tsx');
+    return { loader: seatHistoryLoader, Component: SeatHistoryPage };
+  },
   'machines/:machineId/edit': async () => {
     const { machineEditLoader, MachineEditPage } = await import('./routes/machine-edit.tsx');
     return { loader: machineEditLoader, Component: MachineEditPage };

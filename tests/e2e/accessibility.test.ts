@@ -22,6 +22,7 @@ const pages: Readonly<Record<string, readonly string[]>> = {
     '/machines/import',
     '/machines/1',
     '/machines/1/edit',
+    '/machines/1/positions/1/seats/shaft',
     '/routes/new',
   ],
   'Asset owner': ['/inspections', '/machines', '/findings'],
@@ -70,12 +71,17 @@ describe.each(['light', 'dark'] as const)('every page, %s', (theme) => {
   });
 });
 
-/** Puts the first machine's or route's own id into an address that names number 1. */
+/** Puts the own ids of the first machine, its first position or the first route in the place of 1. */
 async function realAddress(page: Page, site: string, address: string): Promise<string> {
   const match = /^\/(machines|routes)\/1(\/|$)/.exec(address);
   if (match === null) return address;
   const api = site.replace('/sites/', '/api/sites/');
   const answer = await page.context().request.get(`${api}/${match[1]}`);
   const { items } = (await answer.json()) as { items: { id: number }[] };
-  return address.replace('/1', `/${items[0]?.id ?? 0}`);
+  const id = items[0]?.id ?? 0;
+  const real = address.replace('/1', `/${id}`);
+  if (!real.includes('/positions/1/')) return real;
+  const machine = await page.context().request.get(`${api}/machines/${id}`);
+  const { positions } = (await machine.json()) as { positions: { id: number }[] };
+  return real.replace('/positions/1/', `/positions/${positions[0]?.id ?? 0}/`);
 }

@@ -66,10 +66,3 @@ export function fitRecordResolver(
   const resolve = zodResolver(schema);
   return (draft, context, options) => resolve(recordOf(draft, position), context, options);
 }
-
-/** A diameter in the unit in which it was read. */
-export function diameterText(valueMm: number, unit: DiameterUnit): string {
-  if (unit === 'mm') return valueMm.toFixed(3);
-  const [whole = '0', decimals = ''] = String(Number((valueMm / 25.4).toFixed(6))).split('.');
-  return `${whole}.${decimals.padEnd(4, '0')}`;
-}

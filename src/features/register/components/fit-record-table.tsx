@@ -2,8 +2,8 @@ import type { DiameterUnit, FitRecordResponse } from '#shared/contracts/fit-reco
 import { DataTable, type DataTableColumn } from '#src/components/data-table.tsx';
 import { Figure } from '#src/components/figure.tsx';
 import { formatDay } from '#src/lib/dates.ts';
+import { diameterText } from '#src/lib/diameters.ts';
 import { formatEntered } from '#src/lib/numbers.ts';
-import { diameterText } from './fit-record-draft.ts';
 import { capital } from './machine-words.ts';
 
 /** In the unit in which it was read, with the millimetres that it is kept in. */

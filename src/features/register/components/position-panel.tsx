@@ -1,5 +1,7 @@
 import { useState, type ReactNode } from 'react';
+import { Link } from 'react-router-dom';
 import type { BearingPositionResponse } from '#shared/contracts/bearing-position.ts';
+import { seatNames } from '#shared/contracts/fit-record.ts';
 import { directions, type Direction } from '#shared/contracts/measuring-point.ts';
 import { Badge } from '#src/components/badge.tsx';
 import { Button } from '#src/components/button.tsx';
@@ -192,7 +194,21 @@ export function PositionPanel({
         />
         {seats}
         {position.kind === 'rolling' && (
-          <FitRecordTable positionCode={position.code} records={position.fitRecords} />
+          <>
+            <FitRecordTable positionCode={position.code} records={position.fitRecords} />
+            <p className="flex flex-wrap gap-x-6 text-sm">
+              {seatNames.map((seat) => (
+                <Link
+                  key={seat}
+                  className="ink-link"
+                  to={`positions/${position.id}/seats/${seat}`}
+                  aria-label={`History of the ${seat} seat of ${position.code}`}
+                >
+                  History of the {seat} seat
+                </Link>
+              ))}
+            </p>
+          </>
         )}
       </div>
       <Dialog

@@ -1,5 +1,6 @@
 import { queryOptions } from '@tanstack/react-query';
 import { seatAssessmentsResponse } from '#shared/contracts/seat-assessment.ts';
+import { seatHistoryResponse } from '#shared/contracts/seat-history.ts';
 import { request } from '#src/lib/api-client.ts';
 
 export const seatsQuery = (siteId: number, positionId: number) =>
@@ -9,4 +10,15 @@ export const seatsQuery = (siteId: number, positionId: number) =>
       request(`/api/sites/${siteId}/positions/${positionId}/seats`, seatAssessmentsResponse, {
         signal,
       }),
+  });
+
+export const seatHistoryQuery = (siteId: number, positionId: number, seat: string) =>
+  queryOptions({
+    queryKey: ['sites', siteId, 'seats', positionId, seat, 'history'],
+    queryFn: ({ signal }) =>
+      request(
+        `/api/sites/${siteId}/positions/${positionId}/seats/${seat}/history`,
+        seatHistoryResponse,
+        { signal },
+      ),
   });

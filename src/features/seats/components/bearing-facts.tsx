@@ -48,11 +48,11 @@ export function BearingFacts({ assessment }: { assessment: SeatAssessmentsRespon
   const facts = factsOf(assessment);
   if (facts.length === 0) return null;
   return (
-    <section aria-label="The bearing between its seats" className="flex flex-col gap-2">
+    <div className="flex flex-col gap-2">
       <DescriptionList columns={2} items={facts} />
       {assessment.mounting !== null && (
         <p className="max-w-prose text-sm text-ink-soft">{assessment.mounting.advice}</p>
       )}
-    </section>
+    </div>
   );
 }

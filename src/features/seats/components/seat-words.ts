@@ -1,3 +1,5 @@
+import type { FitSource } from '#shared/contracts/fit-record.ts';
+import type { InspectionOutcome } from '#shared/contracts/inspection.ts';
 import type { SeatAssessment } from '#shared/contracts/seat-assessment.ts';
 
 export const seatWords = { shaft: 'Shaft seat', housing: 'Housing seat' } as const;
@@ -6,6 +8,24 @@ export const seatPartsWords = {
   shaft: 'shaft and inner ring',
   housing: 'housing bore and outer ring',
 } as const;
+
+/** The parts a micrometer is set on, by seat. */
+export const partWords = {
+  shaft: { seat: 'Shaft diameter', ring: 'Bore of the inner ring' },
+  housing: { seat: 'Housing bore', ring: 'Outside diameter of the outer ring' },
+} as const;
+
+export const sourceWords: Readonly<Record<FitSource, string>> = {
+  drawing: 'From the drawing',
+  mounting: 'At mounting',
+  inspection: 'At an inspection',
+};
+
+export const outcomeWords: Readonly<Record<InspectionOutcome, string>> = {
+  loose: 'Looseness was found.',
+  'not loose': 'No looseness was found.',
+  'not clear': 'The inspection was not clear.',
+};
 
 /** "12 %"; the ends are not rounded to certainty. */
 export function percentText(share: number): string {
