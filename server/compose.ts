@@ -44,7 +44,7 @@ import type { Route } from './http/route.ts';
 import type { RouteContext } from './http/run-route.ts';
 import { DemoMailRepository } from './mail/demo-mail.repository.ts';
 import { FakeSmtpServer } from './mail/fake-smtp-server.ts';
-import { OutboxRepository } from './mail/outbox.repository.ts';
+import { Mailer } from './mail/mailer.ts';
 import { OutboxSender } from './mail/outbox-sender.ts';
 import { InProcessScreeningQueue, type ScreeningQueue } from './screening/screening-queue.ts';
 import { WorkerPool } from './screening/worker-pool.ts';
@@ -88,6 +88,7 @@ export function compose(
 ): Product {
   const { now } = options;
   const database = new Database(dataSource);
+  const mailer = new Mailer({ publicUrl: options.publicUrl, authSecret: config.authSecret });
   const accounts = new AccountRepository(dataSource);
   const sessions = new SessionService(
     accounts,
@@ -120,7 +121,7 @@ export function compose(
       moveFinding,
       assessSeats,
       membersOf: (siteId) => accounts.membersOf(siteId),
-      addMail: (db, mail, now) => new OutboxRepository(db).add(mail, now),
+      addMail: (db, mail, at) => mailer.add(db, mail, at),
       publicUrl: options.publicUrl,
     },
     now,
@@ -222,6 +223,8 @@ export function compose(
         transport: createTransport(smtpUrl),
         from: config.mailFrom,
         logger,
+        unsubscribeAddress: mailer.unsubscribeAddress.bind(mailer),
+        now,
       });
       sender.start();
       background.push(sender);

@@ -6,6 +6,7 @@ import { Finding } from './entities/finding.entity.ts';
 import { FitRecord } from './entities/fit-record.entity.ts';
 import { Inspection } from './entities/inspection.entity.ts';
 import { Machine } from './entities/machine.entity.ts';
+import { MailOptOut } from './entities/mail-opt-out.entity.ts';
 import { MeasuringPoint } from './entities/measuring-point.entity.ts';
 import { Membership } from './entities/membership.entity.ts';
 import { OutboxMail } from './entities/outbox-mail.entity.ts';
@@ -32,6 +33,7 @@ export const entities = [
   FitRecord,
   Inspection,
   Machine,
+  MailOptOut,
   MeasuringPoint,
   Membership,
   OutboxMail,

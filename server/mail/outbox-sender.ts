@@ -1,6 +1,8 @@
 import type { Transporter } from 'nodemailer';
 import type { Logger } from 'pino';
 import type { Database } from '#server/db/database.ts';
+import type { OutboxMail } from '#server/db/entities/outbox-mail.entity.ts';
+import type { MailKind } from '#shared/contracts/mail.ts';
 import { OutboxRepository } from './outbox.repository.ts';
 
 const pollIntervalMs = 1_000;
@@ -17,6 +19,9 @@ export interface OutboxSenderOptions {
   transport: Pick<Transporter, 'sendMail'>;
   from: string;
   logger: Logger;
+  /** Where a mail program posts to on its reader's "unsubscribe". */
+  unsubscribeAddress: (userId: number, kind: MailKind) => string;
+  now?: () => Date;
 }
 
 /**
@@ -53,8 +58,8 @@ export class OutboxSender {
   }
 
   /** Sends every mail that is due now. */
-  async sendDue(now: () => Date = () => new Date()): Promise<void> {
-    const { database, transport, from, logger } = this.options;
+  async sendDue(): Promise<void> {
+    const { database, transport, from, logger, now = () => new Date() } = this.options;
     const outbox = new OutboxRepository(database.db);
     for (const mail of await outbox.due(now(), batchSize)) {
       if (this.stopped) return;
@@ -67,6 +72,7 @@ export class OutboxSender {
           subject: mail.subject,
           text: mail.textBody,
           html: mail.htmlBody,
+          headers: this.headersOf(mail),
         });
         await outbox.markSent(mail.id, now());
       } catch (error) {
@@ -78,5 +84,15 @@ export class OutboxSender {
         logger.warn({ mailId: mail.id, attempt, error: message }, 'a mail could not be sent');
       }
     }
+  }
+
+  /** RFC 8058: unsubscribing by one click in the mail program, without opening anything. */
+  private headersOf({ toUserId, kind }: OutboxMail): Record<string, string> {
+    if (toUserId === null || kind === null) return {};
+    return {
+      'List-Unsubscribe': `<${this.options.unsubscribeAddress(toUserId, kind)}>`,
+      'List-Unsubscribe-Post': 'List-Unsubscribe=One-Click',
+      'Auto-Submitted': 'auto-generated',
+    };
   }
 }

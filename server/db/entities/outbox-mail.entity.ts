@@ -1,9 +1,10 @@
 import { Column, Entity, Index, PrimaryGeneratedColumn } from 'typeorm';
-import type { OutboxState } from '#shared/contracts/mail.ts';
+import type { MailKind, OutboxState } from '#shared/contracts/mail.ts';
 
 /** An e-mail to be sent, written in the transaction that calls for it and sent once afterwards. */
 @Entity('outbox_mail')
 @Index('outbox_mail_due', ['state', 'nextAttemptAt'])
+@Index('outbox_mail_site', ['siteId', 'state'])
 export class OutboxMail {
   @PrimaryGeneratedColumn({ type: 'int' })
   id: number;
@@ -11,6 +12,17 @@ export class OutboxMail {
   /** Names the occasion; the same occasion never makes two mails. */
   @Column({ type: 'varchar', length: 120, unique: true })
   occasion: string;
+
+  /** Null of mails written before kinds were told. */
+  @Column({ type: 'varchar', length: 12, nullable: true })
+  kind: MailKind | null;
+
+  // No foreign keys: what was sent stays on record when a person or a site is gone.
+  @Column({ type: 'int', nullable: true })
+  toUserId: number | null;
+
+  @Column({ type: 'int', nullable: true })
+  siteId: number | null;
 
   @Column({ type: 'varchar', length: 254 })
   toAddress: string;

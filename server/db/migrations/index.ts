@@ -6,6 +6,8 @@ import { CreateMail1796083204000 } from './1796083204000-create-mail.ts';
 import { CreateRegisterImports1796133109617 } from './1796133109617-create-register-imports.ts';
 import { AddSeatDepth1796133730464 } from './1796133730464-add-seat-depth.ts';
 import { IndexMachineList1796134294616 } from './1796134294616-index-machine-list.ts';
+import { CreateMailOptOuts1796135460755 } from './1796135460755-create-mail-opt-outs.ts';
+import { TellMailKinds1796135460756 } from './1796135460756-tell-mail-kinds.ts';
 
 /** Every migration, oldest first. */
 export const migrations = [
@@ -17,4 +19,6 @@ export const migrations = [
   CreateRegisterImports1796133109617,
   AddSeatDepth1796133730464,
   IndexMachineList1796134294616,
+  CreateMailOptOuts1796135460755,
+  TellMailKinds1796135460756,
 ];

@@ -29,6 +29,7 @@ export const demoMailboxRoutes = (
         fromAddress: mail.fromAddress,
         subject: mail.subject,
         textBody: mail.textBody,
+        htmlBody: mail.htmlBody,
         links: linksOf(mail.textBody, publicUrl()),
         receivedAt: mail.receivedAt.toISOString(),
       })),

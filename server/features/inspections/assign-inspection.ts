@@ -78,7 +78,13 @@ export class AssignInspection {
       );
       await this.neighbours.addMail(
         db,
-        { ...mail, occasion: `inspection:${id}:assigned`, toAddress: assignee.email },
+        {
+          ...mail,
+          kind: 'assigned',
+          siteId: principal.siteId,
+          to: assignee,
+          occasion: `inspection:${id}:assigned`,
+        },
         now,
       );
       await recordInspectionActivity(

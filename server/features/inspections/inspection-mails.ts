@@ -1,8 +1,9 @@
 import type { Inspection } from '#server/db/entities/inspection.entity.ts';
+import type { MailPart } from '#server/mail/mail-body.ts';
+import type { PersonalMail } from '#server/mail/mailer.ts';
 import type { InspectionReport } from '#shared/contracts/inspection.ts';
 import { safetyCautions } from '#shared/contracts/safety-cautions.ts';
 import type { SeatAssessmentsResponse } from '#shared/contracts/seat-assessment.ts';
-import { mailBody, type MailPart } from './mail-body.ts';
 
 export interface InspectionMailFacts {
   inspection: Inspection;
@@ -53,6 +54,9 @@ function limitsOf(inspection: Inspection, seats: SeatAssessmentsResponse): strin
     );
 }
 
+/** What a mail says; who gets it and when is the caller's. */
+type MailText = Pick<PersonalMail, 'subject' | 'parts'>;
+
 const factsOf = ({ inspection, machine, position }: InspectionMailFacts): MailPart => ({
   facts: [
     ['Machine', machine],
@@ -68,12 +72,12 @@ export function assignedMail(
   assigneeName: string,
   summary: string,
   seats: SeatAssessmentsResponse,
-) {
+): MailText {
   const { inspection, machine, position, link } = mail;
   const limits = limitsOf(inspection, seats);
   return {
     subject: `Fit inspection of ${machine}, ${position}: due ${inspection.dueOn}`,
-    ...mailBody([
+    parts: [
       { text: `${assigneeName}, you are asked to inspect a bearing fit.` },
       factsOf(mail),
       { text: summary },
@@ -85,7 +89,7 @@ export function assignedMail(
       { link, label: 'Open the inspection' },
       { heading: 'Before you start', list: [...safetyCautions] },
       { text: 'A screening is a hint, not a diagnosis and not a release to run.' },
-    ]),
+    ],
   };
 }
 
@@ -100,11 +104,11 @@ export function reportedMail(
   mail: InspectionMailFacts,
   reporter: string,
   report: InspectionReport,
-) {
+): MailText {
   const { machine, position, link } = mail;
   return {
     subject: `Inspection of ${machine}, ${position} reported: ${outcomeWords[report.outcome]}`,
-    ...mailBody([
+    parts: [
       { text: `${reporter} has reported the inspection.` },
       factsOf(mail),
       {
@@ -118,20 +122,39 @@ export function reportedMail(
       })),
       { heading: 'Work done', text: report.workDone },
       { link, label: 'Read the report' },
-    ]),
+    ],
   };
 }
 
 /** Tells the owner that the task is off. */
-export function cancelledMail(mail: InspectionMailFacts, canceller: string, reason: string) {
+export function cancelledMail(
+  mail: InspectionMailFacts,
+  canceller: string,
+  reason: string,
+): MailText {
   const { machine, position, link } = mail;
   return {
     subject: `Inspection of ${machine}, ${position} cancelled`,
-    ...mailBody([
+    parts: [
       { text: `${canceller} has cancelled the inspection.` },
       factsOf(mail),
       { heading: 'Reason', text: reason },
       { link, label: 'Open the inspection' },
-    ]),
+    ],
+  };
+}
+
+/** Tells the owner that the lead has looked at the report and the task is done with. */
+export function closedMail(mail: InspectionMailFacts, closer: string, remark: string): MailText {
+  const { machine, position, link } = mail;
+  return {
+    subject: `Inspection of ${machine}, ${position} closed`,
+    parts: [
+      { text: `${closer} has read your report and closed the inspection.` },
+      factsOf(mail),
+      ...(remark === '' ? [] : [{ heading: 'Remark', text: remark }]),
+      { text: 'The next survey of the point shows whether the looseness is gone.' },
+      { link, label: 'Open the inspection' },
+    ],
   };
 }

@@ -2,6 +2,7 @@ import type { SitePrincipal } from '#server/auth/principal.ts';
 import type { Db } from '#server/db/database.ts';
 import type { Finding } from '#server/db/entities/finding.entity.ts';
 import type { Screening } from '#server/db/entities/screening.entity.ts';
+import type { PersonalMail } from '#server/mail/mailer.ts';
 import type { SeatAssessmentsResponse } from '#shared/contracts/seat-assessment.ts';
 import type { SiteRole } from '#shared/contracts/session.ts';
 
@@ -38,16 +39,7 @@ export interface InspectionNeighbours {
   membersOf: (
     siteId: number,
   ) => Promise<{ userId: number; name: string; email: string; role: SiteRole }[]>;
-  addMail: (
-    db: Db,
-    mail: {
-      occasion: string;
-      toAddress: string;
-      subject: string;
-      textBody: string;
-      htmlBody: string;
-    },
-    now: Date,
-  ) => Promise<void>;
+  /** False where the reader has switched off mails of this kind. */
+  addMail: (db: Db, mail: PersonalMail, now: Date) => Promise<boolean>;
   publicUrl: () => string;
 }

@@ -10,7 +10,7 @@ import type {
 } from '#shared/contracts/inspection.ts';
 import { AssignInspection } from './assign-inspection.ts';
 import { fitRecordsOf } from './inspection-fit-records.ts';
-import { cancelledMail, mailFactsOf, reportedMail } from './inspection-mails.ts';
+import { cancelledMail, closedMail, mailFactsOf, reportedMail } from './inspection-mails.ts';
 import type { InspectionEvent, InspectionNeighbours } from './inspection-neighbours.ts';
 import { inspectionSummary } from './inspection-summary.ts';
 import { isAssignee, maySeeInspection } from './inspection.policy.ts';
@@ -144,8 +144,10 @@ export class InspectionService {
             principal.name,
             report,
           ),
+          kind: 'reported',
+          siteId: principal.siteId,
+          to: { userId: assignedBy.id, email: assignedBy.email },
           occasion: `inspection:${inspectionId}:reported`,
-          toAddress: assignedBy.email,
         },
         now,
       );
@@ -155,9 +157,24 @@ export class InspectionService {
 
   async close(principal: SitePrincipal, inspectionId: number, version: number, reason: string) {
     const inspection = await this.seen(principal, inspectionId);
-    await this.database.transaction((db) =>
-      moveInspection(db, { principal, inspection, action: 'close', version, reason }, this.now()),
-    );
+    const now = this.now();
+    await this.database.transaction(async (db) => {
+      await moveInspection(db, { principal, inspection, action: 'close', version, reason }, now);
+      const { assignee } = inspection;
+      if (!assignee) return;
+      const facts = mailFactsOf(this.neighbours.publicUrl(), principal.siteId, inspection);
+      await this.neighbours.addMail(
+        db,
+        {
+          ...closedMail(facts, principal.name, reason),
+          kind: 'closed',
+          siteId: principal.siteId,
+          to: { userId: assignee.id, email: assignee.email },
+          occasion: `inspection:${inspectionId}:closed`,
+        },
+        now,
+      );
+    });
     return this.whole(principal, inspectionId);
   }
 
@@ -186,8 +203,10 @@ export class InspectionService {
             principal.name,
             reason,
           ),
+          kind: 'cancelled',
+          siteId: principal.siteId,
+          to: { userId: assignee.id, email: assignee.email },
           occasion: `inspection:${inspectionId}:cancelled`,
-          toAddress: assignee.email,
         },
         now,
       );
