@@ -8,6 +8,8 @@ import { sessionRoutes } from './auth/session.routes.ts';
 import { SessionService } from './auth/session.service.ts';
 import type { Config } from './config/config.ts';
 import { Database } from './db/database.ts';
+import { accountRoutes } from './features/account/account.routes.ts';
+import { MailChoicesService } from './features/account/mail-choices.service.ts';
 import { administrationRoutes } from './features/administration/administration.routes.ts';
 import { AdministrationService } from './features/administration/administration.service.ts';
 import { demoMailboxRoutes } from './features/demo-mailbox/demo-mailbox.routes.ts';
@@ -18,6 +20,8 @@ import { FindingService } from './features/findings/finding.service.ts';
 import { inspectionRoutes } from './features/inspections/inspection.routes.ts';
 import { InspectionService } from './features/inspections/inspection.service.ts';
 import { memberRoutes } from './features/members/members.routes.ts';
+import { outboxRoutes } from './features/outbox/outbox.routes.ts';
+import { OutboxService } from './features/outbox/outbox.service.ts';
 import { fitChecks } from './features/register/fit-checks.ts';
 import { machineRoutes, positionRoutes } from './features/register/machine.routes.ts';
 import { MachineService } from './features/register/machine.service.ts';
@@ -156,7 +160,9 @@ export function compose(
 
   const routes = [
     ...sessionRoutes({ sessions, accounts, demoAccounts: options.demoAccounts ?? [], config }),
+    ...accountRoutes(new MailChoicesService(database, config.authSecret, now), options.publicUrl),
     ...administrationRoutes(administration),
+    ...outboxRoutes(new OutboxService(database, now)),
     ...memberRoutes(accounts),
     ...machineRoutes(machines),
     ...positionRoutes(positions),

@@ -19,6 +19,10 @@ export class AccountRepository {
     return this.dataSource.getRepository(User).findOneBy({ id });
   }
 
+  async setPasswordHash(id: number, passwordHash: string): Promise<void> {
+    await this.dataSource.getRepository(User).update({ id }, { passwordHash });
+  }
+
   async roleAt(userId: number, siteId: number): Promise<SiteRole | null> {
     const membership = await this.dataSource
       .getRepository(Membership)

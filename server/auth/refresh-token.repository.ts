@@ -1,4 +1,4 @@
-import { IsNull, type DataSource } from 'typeorm';
+import { IsNull, Not, type DataSource } from 'typeorm';
 import { RefreshToken } from '#server/db/entities/refresh-token.entity.ts';
 
 export interface NewRefreshToken {
@@ -35,6 +35,14 @@ export class RefreshTokenRepository {
       { usedAt: now },
     );
     return result.affected === 1;
+  }
+
+  /** Ends every session of the person but one. */
+  async revokeOthers(userId: number, familyId: string | null, now: Date): Promise<void> {
+    await this.table.update(
+      { userId, revokedAt: IsNull(), ...(familyId === null ? {} : { familyId: Not(familyId) }) },
+      { revokedAt: now },
+    );
   }
 
   async revokeFamily(familyId: string, now: Date): Promise<void> {

@@ -2,6 +2,7 @@ import type { CookieOptions, Request, Response } from 'express';
 import type { Config } from '#server/config/config.ts';
 import { AppError } from '#server/http/app-error.ts';
 import { route } from '#server/http/route.ts';
+import { changePasswordRequest } from '#shared/contracts/account.ts';
 import { productResponse, sessionResponse, signInRequest } from '#shared/contracts/session.ts';
 import type { ProductResponse, SessionResponse } from '#shared/contracts/session.ts';
 import { anyoneBecause, signedIn } from './access.ts';
@@ -109,6 +110,16 @@ export function sessionRoutes({ sessions, accounts, demoAccounts, config }: Depe
         if (token !== undefined) await sessions.signOut(token);
         clearCookies(res);
       },
+    }),
+    route({
+      method: 'post',
+      // Below /api/session, where the refresh cookie is sent: it tells which session is to stay.
+      path: '/api/session/password',
+      access: signedIn(),
+      body: changePasswordRequest,
+      response: null,
+      handle: ({ principal, body, req }) =>
+        sessions.changePassword(principal.userId, body, refreshTokenOf(req)),
     }),
     route({
       method: 'get',

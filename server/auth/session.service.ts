@@ -1,5 +1,6 @@
 import { createHash, randomBytes, randomUUID } from 'node:crypto';
 import { AppError } from '#server/http/app-error.ts';
+import type { ChangePasswordRequest } from '#shared/contracts/account.ts';
 import type { AccountRepository } from './account.repository.ts';
 import { hashPassword, passwordMatches } from './passwords.ts';
 import type { RefreshTokenRepository } from './refresh-token.repository.ts';
@@ -61,6 +62,32 @@ export class SessionService {
       }
     }
     return this.issue(known.userId, known.familyId);
+  }
+
+  /**
+   * Sets a new password and ends every other session of the person: whoever knew the old one is out
+   * when their access token has run out.
+   *
+   * @param refreshToken - that of the session in which the password is changed
+   */
+  async changePassword(
+    userId: number,
+    { currentPassword, newPassword }: ChangePasswordRequest,
+    refreshToken: string | undefined,
+  ): Promise<void> {
+    const user = await this.accounts.findById(userId);
+    if (user === null || !(await passwordMatches(user.passwordHash, currentPassword))) {
+      const message = 'This is not your present password.';
+      throw new AppError('validation', message, { fields: [{ path: 'currentPassword', message }] });
+    }
+    if (currentPassword === newPassword) {
+      const message = 'Choose another password than the present one.';
+      throw new AppError('validation', message, { fields: [{ path: 'newPassword', message }] });
+    }
+    await this.accounts.setPasswordHash(userId, await hashPassword(newPassword));
+    const own = refreshToken === undefined ? null : await this.tokens.find(hashOf(refreshToken));
+    const familyId = own?.userId === userId ? own.familyId : null;
+    await this.tokens.revokeOthers(userId, familyId, this.now());
   }
 
   async signOut(refreshToken: string): Promise<void> {

@@ -56,7 +56,8 @@ export function createApp(options: AppOptions): Express {
     rateLimit({
       windowMs: 15 * 60 * 1000,
       limit: options.signInLimit,
-      skip: (req) => !(req.method === 'POST' && req.path === '/'),
+      // A wrong present password counts like a wrong sign-in.
+      skip: (req) => !(req.method === 'POST' && ['/', '/password'].includes(req.path)),
       skipSuccessfulRequests: true,
       standardHeaders: true,
       legacyHeaders: false,
@@ -64,7 +65,7 @@ export function createApp(options: AppOptions): Express {
         next(
           new AppError(
             'too_many_requests',
-            'Too many failed sign-ins from here. Wait a quarter of an hour and try again.',
+            'Too many wrong passwords from here. Wait a quarter of an hour and try again.',
           ),
         ),
     }),

@@ -1,6 +1,7 @@
 import type { Db } from '#server/db/database.ts';
 import { isDuplicateKey } from '#server/db/duplicate-key.ts';
 import { MailOptOut } from '#server/db/entities/mail-opt-out.entity.ts';
+import { User } from '#server/db/entities/user.entity.ts';
 import type { MailKind } from '#shared/contracts/mail.ts';
 
 /** Which kinds of mail a person has switched off. */
@@ -9,6 +10,11 @@ export class MailChoiceRepository {
 
   constructor(db: Db) {
     this.db = db;
+  }
+
+  /** Whether the account still exists. */
+  isKnown(userId: number): Promise<boolean> {
+    return this.db.existsBy(User, { id: userId });
   }
 
   async isWanted(userId: number, kind: MailKind): Promise<boolean> {

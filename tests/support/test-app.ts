@@ -8,7 +8,7 @@ import { readConfig } from '#server/config/config.ts';
 import { createApp } from '#server/http/create-app.ts';
 
 export const testPublicUrl = 'https://fretline.example';
-const authSecret = 'a secret of the tests, long enough to sign with';
+export const testAuthSecret = 'a secret of the tests, long enough to sign with';
 
 type Method = 'get' | 'post' | 'put' | 'patch' | 'delete';
 type Caller = Record<Method, (path: string, body?: object) => Test>;
@@ -26,7 +26,7 @@ function wireTestApp(dataSource: DataSource, dataDirectory: string) {
   const config = readConfig({
     DATABASE_URL: 'mysql://unused@localhost/unused',
     DATA_DIR: dataDirectory,
-    AUTH_SECRET: authSecret,
+    AUTH_SECRET: testAuthSecret,
     LOG_LEVEL: 'silent',
   });
   const logger = pino({ level: 'silent' });
@@ -57,7 +57,7 @@ function wireTestApp(dataSource: DataSource, dataDirectory: string) {
     product,
     /** Calls as this person, who has signed in. */
     as: (user: { id: number }) =>
-      caller(`${accessCookie}=${signAccessToken(user.id, authSecret, 600)}`),
+      caller(`${accessCookie}=${signAccessToken(user.id, testAuthSecret, 600)}`),
     signedOut: caller(null),
   };
 }
