@@ -81,15 +81,23 @@ export class ImportRepository {
 
   async addRows(registerImportId: number, rows: JudgedRow[]): Promise<void> {
     if (rows.length === 0) return;
-    await this.db.insert(
-      RegisterImportRow,
-      rows.map(({ faults, changes, ...row }) => ({
-        ...row,
+    // Plain SQL: the mapper takes several times as long over twenty thousand rows.
+    const json = (value: unknown[] | object | null) =>
+      value === null || (Array.isArray(value) && value.length === 0) ? null : JSON.stringify(value);
+    await this.db.query(
+      `INSERT INTO register_import_row
+         (register_import_id, \`row_number\`, fate, label, faults, changes, plan, object_id)
+       VALUES ${rows.map(() => '(?, ?, ?, ?, ?, ?, ?, ?)').join(', ')}`,
+      rows.flatMap((row) => [
         registerImportId,
-        faults: (faults.length === 0 ? null : faults) as never,
-        changes: (changes.length === 0 ? null : changes) as never,
-        plan: row.plan as never,
-      })),
+        row.rowNumber,
+        row.fate,
+        row.label,
+        json(row.faults),
+        json(row.changes),
+        json(row.plan),
+        row.objectId,
+      ]),
     );
   }
 
