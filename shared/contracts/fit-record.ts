@@ -52,8 +52,18 @@ export const createFitRecordRequest = z
     ringMeasuredMm: diameterMm.nullable().default(null),
     diameterUnit: diameterUnit.default('mm'),
     /** Of a tapered seat, which is judged by these instead of diameters. */
-    driveUpMm: numberBetween(0, 100, 'mm').nullable().default(null),
-    clearanceReductionUm: numberBetween(0, 2000, 'µm').nullable().default(null),
+    driveUpMm: z
+      .number('Enter a number in mm.')
+      .min(0, 'A ring is driven up, not down: the drive-up can’t be negative.')
+      .max(100, 'At most 100 mm.')
+      .nullable()
+      .default(null),
+    clearanceReductionUm: z
+      .number('Enter a number in µm.')
+      .min(0, 'Driving up takes clearance away: its loss can’t be negative.')
+      .max(2000, 'At most 2000 µm.')
+      .nullable()
+      .default(null),
     bonding: seatBonding.nullable().default(null),
     condition: seatCondition.nullable().default(null),
     note: paragraph(2000).nullable().default(null),

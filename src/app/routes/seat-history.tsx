@@ -54,7 +54,7 @@ export function SeatHistoryPage() {
             : [{ label: 'Taper', value: <Figure value={history.taper} /> }]),
         ]}
       />
-      <div className="grid items-start gap-5 lg:grid-cols-[3fr_2fr]">
+      <div className="grid grid-cols-1 items-start gap-5 lg:grid-cols-[minmax(0,1fr)_minmax(0,1fr)]">
         <Panel title="What was recorded, found and done">
           {history.entries.length === 0 ? (
             <EmptyState title="Nothing is on record">

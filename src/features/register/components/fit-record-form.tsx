@@ -38,6 +38,11 @@ const fresh: AddFitRecordRequest = {
   correctsSameDay: false,
 };
 
+function classHint(isTapered: boolean, onShaft: boolean): string {
+  if (isTapered) return 'Of the shaft under the sleeve, e.g. h9';
+  return onShaft ? 'e.g. k5' : 'e.g. H7';
+}
+
 const unitWords = { mm: 'Millimetres', in: 'Inches' } as const;
 
 /** What is known of one seat on one date. Records are added, never overwritten. */
@@ -89,7 +94,7 @@ export function FitRecordForm({
         <Field
           id="toleranceClass"
           label="Tolerance class (ISO 286)"
-          hint={onShaft ? 'e.g. k5' : 'e.g. H7'}
+          hint={classHint(isTapered, onShaft)}
           optional
           error={error('toleranceClass')}
         >

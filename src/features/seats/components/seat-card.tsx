@@ -38,7 +38,7 @@ export function SeatCard({ seat }: { seat: SeatAssessment }) {
           />
         )}
         <DescriptionList columns={2} items={factsOf(seat)} />
-        {seat.recommendationReason !== null && (
+        {seat.recommendationReason !== null && seat.recommendationReason !== seat.sentence && (
           <p className="max-w-prose text-sm text-ink-soft">{seat.recommendationReason}</p>
         )}
       </div>

@@ -96,51 +96,54 @@ const um = (value: number | null) => (
 function Readings({ seat, figures }: { seat: FitRecordResponse['seat']; figures: PartFigures }) {
   const caption = `${partWords[seat][figures.part]}, by plane`;
   return (
-    <table aria-label={caption} className="mt-1 w-fit">
-      <thead>
-        <tr className="text-xs text-ink-faint">
-          <th scope="col" className="pr-6 text-left font-normal">
-            {caption}
-          </th>
-          <th scope="col" className="pr-6 text-right font-normal">
-            Mean
-          </th>
-          <th scope="col" className="pr-6 text-right font-normal">
-            Out of round
-          </th>
-          <th scope="col" className="text-right font-normal">
-            Readings
-          </th>
-        </tr>
-      </thead>
-      <tbody>
-        {figures.planes.map((plane) => (
-          <tr key={plane.plane} className="border-t border-hairline">
+    <div className="overflow-x-auto">
+      <table aria-label={caption} className="mt-1 w-fit">
+        <thead>
+          <tr className="text-xs text-ink-faint">
+            <th scope="col" className="pr-6 text-left font-normal">
+              {caption}
+            </th>
+            <th scope="col" className="pr-6 text-right font-normal">
+              Mean
+            </th>
+            <th scope="col" className="pr-6 text-right font-normal">
+              Out of round
+            </th>
+            <th scope="col" className="text-right font-normal">
+              Readings
+            </th>
+          </tr>
+        </thead>
+        <tbody>
+          {figures.planes.map((plane) => (
+            <tr key={plane.plane} className="border-t border-hairline">
+              <th scope="row" className="pr-6 text-left font-normal">
+                Plane <span className="figures">{plane.plane}</span>
+              </th>
+              <td className="pr-6 text-right">
+                <Figure value={formatFixed(plane.meanMm, 4)} unit="mm" />
+              </td>
+              <td className="pr-6 text-right">{um(plane.outOfRoundnessUm)}</td>
+              <td className="figures text-right">{plane.readingCount}</td>
+            </tr>
+          ))}
+          <tr className="border-t border-hairline">
             <th scope="row" className="pr-6 text-left font-normal">
-              Plane <span className="figures">{plane.plane}</span>
+              Taper, plane <span className="figures">1</span> less{' '}
+              <span className="figures">2</span>
             </th>
             <td className="pr-6 text-right">
-              <Figure value={formatFixed(plane.meanMm, 4)} unit="mm" />
+              <Figure
+                value={figures.taperUm === null ? null : formatSigned(figures.taperUm, 1)}
+                unit="µm"
+              />
             </td>
-            <td className="pr-6 text-right">{um(plane.outOfRoundnessUm)}</td>
-            <td className="figures text-right">{plane.readingCount}</td>
+            <td colSpan={2} className="text-right">
+              mean ± {um(figures.expandedUncertaintyUm)}
+            </td>
           </tr>
-        ))}
-        <tr className="border-t border-hairline">
-          <th scope="row" className="pr-6 text-left font-normal">
-            Taper, plane <span className="figures">1</span> less <span className="figures">2</span>
-          </th>
-          <td className="pr-6 text-right">
-            <Figure
-              value={figures.taperUm === null ? null : formatSigned(figures.taperUm, 1)}
-              unit="µm"
-            />
-          </td>
-          <td colSpan={2} className="text-right">
-            mean ± {um(figures.expandedUncertaintyUm)}
-          </td>
-        </tr>
-      </tbody>
-    </table>
+        </tbody>
+      </table>
+    </div>
   );
 }

@@ -89,7 +89,7 @@ describe('the fit record form', () => {
     await user.type(dialog.getByLabelText(/^Drive-up/), '-0.5');
     await send();
     await dialog.findByRole('alert');
-    expect(descriptionOf(dialog.getByLabelText(/^Drive-up/))).toMatch(/At least 0 mm/);
+    expect(descriptionOf(dialog.getByLabelText(/^Drive-up/))).toMatch(/drive-up can’t be negative/);
     await user.clear(dialog.getByLabelText(/^Drive-up/));
     await user.type(dialog.getByLabelText(/^Drive-up/), '0.48');
     await user.type(dialog.getByLabelText(/^Loss of internal clearance/), '30');
