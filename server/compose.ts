@@ -17,6 +17,7 @@ import { findingEvidence } from './features/findings/finding-evidence.ts';
 import { moveFinding } from './features/findings/finding-progress.ts';
 import { findingRoutes } from './features/findings/finding.routes.ts';
 import { FindingService } from './features/findings/finding.service.ts';
+import { DueReminders } from './features/inspections/due-reminders.ts';
 import { inspectionRoutes } from './features/inspections/inspection.routes.ts';
 import { InspectionService } from './features/inspections/inspection.service.ts';
 import { memberRoutes } from './features/members/members.routes.ts';
@@ -32,6 +33,7 @@ import { RouteService } from './features/register/route.service.ts';
 import { ExportService } from './features/register-import/export.service.ts';
 import { ImportService } from './features/register-import/import.service.ts';
 import { registerImportRoutes } from './features/register-import/register-import.routes.ts';
+import { ReviewRepository } from './features/review/review.repository.ts';
 import { reviewRoutes } from './features/review/review.routes.ts';
 import { ReviewService } from './features/review/review.service.ts';
 import { SeatHistoryService } from './features/seats/seat-history.service.ts';
@@ -49,11 +51,14 @@ import type { RouteContext } from './http/run-route.ts';
 import { DemoMailRepository } from './mail/demo-mail.repository.ts';
 import { FakeSmtpServer } from './mail/fake-smtp-server.ts';
 import { Mailer } from './mail/mailer.ts';
+import { RegularRound } from './mail/regular-round.ts';
 import { OutboxSender } from './mail/outbox-sender.ts';
 import { InProcessScreeningQueue, type ScreeningQueue } from './screening/screening-queue.ts';
 import { WorkerPool } from './screening/worker-pool.ts';
 import { FileStore } from './storage/file-store.ts';
 import type { ProductResponse } from '#shared/contracts/session.ts';
+
+const reminderRoundMs = 5 * 60 * 1000;
 
 export interface Product {
   routes: Route[];
@@ -125,8 +130,17 @@ export function compose(
       moveFinding,
       assessSeats,
       membersOf: (siteId) => accounts.membersOf(siteId),
-      addMail: (db, mail, at) => mailer.add(db, mail, at),
+      addMail: mailer.add.bind(mailer),
       publicUrl: options.publicUrl,
+    },
+    now,
+  );
+  const reminders = new DueReminders(
+    database,
+    {
+      addMail: mailer.add.bind(mailer),
+      publicUrl: options.publicUrl,
+      flagsWaiting: (siteId) => new ReviewRepository(database.db).countOpen(siteId),
     },
     now,
   );
@@ -234,6 +248,14 @@ export function compose(
       });
       sender.start();
       background.push(sender);
+      const reminderRound = new RegularRound({
+        name: 'reminders',
+        everyMs: reminderRoundMs,
+        run: () => reminders.round(),
+        logger,
+      });
+      reminderRound.start();
+      background.push(reminderRound);
     },
     stop: async () => {
       for (const service of background.reverse()) await service.stop();

@@ -55,9 +55,9 @@ function limitsOf(inspection: Inspection, seats: SeatAssessmentsResponse): strin
 }
 
 /** What a mail says; who gets it and when is the caller's. */
-type MailText = Pick<PersonalMail, 'subject' | 'parts'>;
+export type MailText = Pick<PersonalMail, 'subject' | 'parts'>;
 
-const factsOf = ({ inspection, machine, position }: InspectionMailFacts): MailPart => ({
+export const factsOf = ({ inspection, machine, position }: InspectionMailFacts): MailPart => ({
   facts: [
     ['Machine', machine],
     ['Bearing position', position],

@@ -43,6 +43,14 @@ export class ReviewRepository {
     return { rows, total };
   }
 
+  /** Flags that nobody has decided on. */
+  countOpen(siteId: number): Promise<number> {
+    return this.latest(siteId)
+      .andWhere('screening.decision IS NULL')
+      .andWhere("screening.verdict <> 'none'")
+      .getCount();
+  }
+
   /** The screening with where it was taken, if it belongs to the site. */
   find(siteId: number, screeningId: number): Promise<Screening | null> {
     return this.joined(siteId).andWhere('screening.id = :screeningId', { screeningId }).getOne();
