@@ -62,11 +62,21 @@ export interface ScreeningFeatures {
 }
 
 const strongShare = 0.1;
+/** Some thirty fractions are looked at: one of a thousand by luck would come up in every thirtieth record. */
+const fractionBelowP = 3e-5;
 const leastDb = -60;
 const isWhole = (order: number) => Number.isInteger(order);
 const isHalf = (order: number) => Number.isInteger(order * 2) && !isWhole(order);
-const powerOf = (lines: readonly OrderLine[]) =>
-  lines.reduce((sum, line) => sum + line.velocityMmPerSRms ** 2, 0);
+/** Noise alone leaves so many times a line's floor in an order: three lines over the window's lobe. */
+const noiseInOrder = 2;
+/** An order of a larger chance than this says nothing of its level. */
+const levelBelowP = 3e-3;
+/** Power of an order beyond what the noise under it gives: loud noise is no strong order. */
+const excess = (line: OrderLine) =>
+  line.pNoise > levelBelowP
+    ? 0
+    : Math.max(0, line.velocityMmPerSRms ** 2 - noiseInOrder * line.floorMmPerSRms ** 2);
+const powerOf = (lines: readonly OrderLine[]) => lines.reduce((sum, line) => sum + excess(line), 0);
 const db = (power: number, over: number, least = leastDb) =>
   over > 0 && power > 0 ? Math.max(least, 10 * Math.log10(power / over)) : least;
 
@@ -95,12 +105,21 @@ export function featuresOf(sources: FeatureSources): ScreeningFeatures {
   const open = whole.filter(counts);
   const run2to10 = open.filter(within(2, 10));
   const fractionsOf = (test: (order: number) => boolean) =>
-    orders.filter((line) => test(line.order) && line.order < 10 && counts(line));
+    orders.filter(
+      (line) =>
+        test(line.order) &&
+        line.order < 10 &&
+        counts(line) &&
+        line.pNoise < fractionBelowP &&
+        isSharp(spectrum, line.order),
+    );
   const halves = fractionsOf(isHalf);
   const thirds = fractionsOf((order) => !isWhole(order) && !isHalf(order));
   const top = (lines: readonly OrderLine[]) =>
-    lines.reduce((most, line) => Math.max(most, line.velocityMmPerSRms ** 2), 0);
-  const first = whole.find((line) => line.order === 1)?.velocityMmPerSRms ?? 0;
+    lines.reduce((most, line) => Math.max(most, excess(line)), 0);
+  const levelOf = (order: number) =>
+    Math.sqrt(powerOf(whole.filter((line) => line.order === order)));
+  const first = levelOf(1);
   const low = powerOf(whole.filter(within(1, 3)));
   const prominences = Float64Array.from(whole.filter(within(2, 10)), (line) => line.prominenceDb);
   const displacement = momentsOf(revolution.displacementUm);
@@ -126,7 +145,7 @@ export function featuresOf(sources: FeatureSources): ScreeningFeatures {
     unevennessDb: unevenness(whole.filter(within(1, 10))),
     roughnessDb: roughness(whole.filter(within(1, 10))),
     aloneDb: alone(whole),
-    thirdMmPerS: whole.find((line) => line.order === 3)?.velocityMmPerSRms ?? 0,
+    thirdMmPerS: levelOf(3),
     fractions: halves.length + thirds.length,
     halfDb: db(top(halves), strongest ** 2),
     thirdDb: db(top(thirds), strongest ** 2),
@@ -209,6 +228,23 @@ function sharesOf(spectrum: OrderSpectrum, usableOrders: number) {
     synchronousShare: all > 0 ? Math.min(1, synchronous / all) : 0,
     steadiness: atOrders > 0 ? Math.min(1, steady / atOrders) : 0,
   };
+}
+
+/** Power of a line over the median of those a few lines away on both sides that tells it from a hump. */
+const sharpFactor = 5;
+const besideLines = [3, 4, 5];
+/** With fewer lines to an order a few lines away are the next order. */
+const linesToTell = 14;
+
+/** Whether an order is a line, and not the top of a resonance in noise. */
+function isSharp({ power, linesPerOrder }: OrderSpectrum, order: number): boolean {
+  if (linesPerOrder < linesToTell) return true;
+  const at = Math.round(order * linesPerOrder);
+  const beside = Float64Array.from(
+    besideLines.flatMap((away) => [power[at - away] ?? 0, power[at + away] ?? 0]),
+  );
+  const best = Math.max(power[at - 1] ?? 0, power[at] ?? 0, power[at + 1] ?? 0);
+  return best > sharpFactor * medianInPlace(beside, beside.length);
 }
 
 /** The strongest line away from every multiple of a half and a third. */

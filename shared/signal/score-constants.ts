@@ -6,29 +6,29 @@
  * among the latter. Machines judged are others than those fitted on.
  */
 export const scoreConstants = {
-  base: -6.04,
+  base: -4.6948,
   /** Velocity of all whole orders. */
-  perFamilyLevel: 1.5819,
-  perProminence: 0.79358,
-  perFirstProminence: 0.69897,
+  perFamilyLevel: 1.6818,
+  perProminence: 0.83144,
+  perFirstProminence: 0.45612,
   /** A floor raised between the orders: chaotic rattle. */
-  perFloor: 0.084573,
-  perLowOrders: 0.28191,
+  perFloor: 0.2034,
+  perLowOrders: 0.11939,
   /** A strong line out of step speaks against. */
-  perStranger: 0.21363,
-  perUneven: 0.37682,
-  perHalf: 0.71267,
+  perStranger: 0.40563,
+  perUneven: 0.45899,
+  perHalf: 0.69906,
   /** A long run counts where the shaft rules the spectrum, and where it is strong. */
-  perSteadyRun: 0.50005,
-  perStrongRun: 0.10595,
+  perSteadyRun: 0.34012,
+  perStrongRun: 0.34172,
   /** A third order, which unbalance and most misalignment lack. */
-  perThird: 0.61357,
+  perThird: 0.42902,
   /** One order alone above its neighbours, or levels that scatter, speak of a process or a resonance. */
-  perAlone: 0.14147,
-  perRough: 0.32217,
-  /** Reciprocating machines show such families when sound. */
-  perNature: 1.953,
+  perAlone: 0.19629,
+  perRough: 0.37937,
+  /** Reciprocating machines show such families when sound, so theirs say little: by judgement. */
+  perNature: 4,
   /** Orders that something known explains. */
-  perUnexplained: 0.36053,
+  perUnexplained: 0.7213,
 } as const;
 export type ScoreConstants = { readonly [Key in keyof typeof scoreConstants]: number };

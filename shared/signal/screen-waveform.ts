@@ -18,7 +18,7 @@ import type {
 } from './screening-types.ts';
 import type { SpectrumView } from './spectrum-view.ts';
 
-export const methodVersion = '2';
+export const methodVersion = '3';
 
 export const defaultLimits: ScreeningLimits = {
   suspectedScore: 0.5,
