@@ -36,7 +36,7 @@ export class Mailer {
     const { kind, siteId, to, occasion, subject, parts } = mail;
     if (!(await new MailChoiceRepository(db).isWanted(to.userId, kind))) return false;
     const foot = {
-      why: `You get this mail because you have chosen: ${mailKindWords[kind]}.`,
+      why: `This kind of mail is switched on for you: ${mailKindWords[kind]}.`,
       unsubscribeLink: this.unsubscribePage(to.userId, kind),
       choicesLink: `${this.options.publicUrl()}/account`,
     };

@@ -17,6 +17,7 @@ export function AccountMenu({ session, role }: { session: SessionResponse; role?
   const roleText =
     role !== undefined ? roleWords[role] : session.isAdministrator ? 'Administrator' : 'No role';
   const items: MenuItem[] = [
+    { label: 'Account and e-mails', onSelect: () => void navigate('/account') },
     ...(session.isAdministrator && role !== undefined
       ? [{ label: 'Administration', onSelect: () => void navigate('/administration') }]
       : []),

@@ -21,6 +21,27 @@ export function routes(queryClient: QueryClient): RouteObject[] {
       }),
     },
     {
+      path: '/account',
+      lazy: lazyPage(queryClient, async () => {
+        const { accountLoader, AccountPage } = await import('./routes/account.tsx');
+        return { loader: accountLoader, Component: AccountPage };
+      }),
+    },
+    {
+      path: '/unsubscribe/:token',
+      lazy: lazyPage(queryClient, async () => {
+        const { UnsubscribePage } = await import('./routes/unsubscribe.tsx');
+        return { Component: UnsubscribePage };
+      }),
+    },
+    {
+      path: '/administration/mails',
+      lazy: lazyPage(queryClient, async () => {
+        const { allMailsLoader, AllMailsPage } = await import('./routes/mails.tsx');
+        return { loader: allMailsLoader, Component: AllMailsPage };
+      }),
+    },
+    {
       path: '/administration',
       lazy: lazyPage(queryClient, async () => {
         const { administrationLoader, AdministrationPage } =

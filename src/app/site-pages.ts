@@ -67,6 +67,10 @@ const pages: Readonly<Record<string, Load>> = {
     const { inspectionLoader, InspectionPage } = await import('./routes/inspection.tsx');
     return { loader: inspectionLoader, Component: InspectionPage };
   },
+  mails: async () => {
+    const { siteMailsLoader, SiteMailsPage } = await import('./routes/mails.tsx');
+    return { loader: siteMailsLoader, Component: SiteMailsPage };
+  },
   routes: async () => {
     const { routesLoader, RoutesPage } = await import('./routes/routes.tsx');
     return { loader: routesLoader, Component: RoutesPage };

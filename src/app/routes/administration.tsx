@@ -2,6 +2,7 @@ import { useSuspenseQuery, type QueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
 import { redirect, useLoaderData, type LoaderFunctionArgs } from 'react-router-dom';
 import type { SessionResponse } from '#shared/contracts/session.ts';
+import { ButtonLink } from '#src/components/button-link.tsx';
 import { Button } from '#src/components/button.tsx';
 import { Dialog } from '#src/components/dialog.tsx';
 import { Figure } from '#src/components/figure.tsx';
@@ -54,9 +55,12 @@ export function AdministrationPage() {
           { label: 'People', value: <Figure value={String(people.people.length)} /> },
         ]}
         actions={
-          <Button icon="plus" variant="primary" onClick={() => setAdding(true)}>
-            New person
-          </Button>
+          <>
+            <Button icon="plus" variant="primary" onClick={() => setAdding(true)}>
+              New person
+            </Button>
+            <ButtonLink to="/administration/mails">E-mails sent</ButtonLink>
+          </>
         }
       />
       <div className="flex flex-col gap-5">
