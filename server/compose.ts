@@ -13,11 +13,18 @@ import { MailChoicesService } from './features/account/mail-choices.service.ts';
 import { administrationRoutes } from './features/administration/administration.routes.ts';
 import { AdministrationService } from './features/administration/administration.service.ts';
 import { demoMailboxRoutes } from './features/demo-mailbox/demo-mailbox.routes.ts';
+import { deskRoutes } from './features/desk/desk.routes.ts';
+import { DeskService } from './features/desk/desk.service.ts';
 import { findingEvidence } from './features/findings/finding-evidence.ts';
 import { moveFinding } from './features/findings/finding-progress.ts';
+import { presentFindingItem } from './features/findings/finding.presenter.ts';
 import { findingRoutes } from './features/findings/finding.routes.ts';
 import { FindingService } from './features/findings/finding.service.ts';
 import { DueReminders } from './features/inspections/due-reminders.ts';
+import { ChangeInspection } from './features/inspections/change-inspection.ts';
+import type { InspectionNeighbours } from './features/inspections/inspection-neighbours.ts';
+import { presentInspectionItem } from './features/inspections/inspection.presenter.ts';
+import { todayAnywhere } from './features/inspections/today-anywhere.ts';
 import { inspectionRoutes } from './features/inspections/inspection.routes.ts';
 import { InspectionService } from './features/inspections/inspection.service.ts';
 import { memberRoutes } from './features/members/members.routes.ts';
@@ -39,6 +46,8 @@ import { ReviewService } from './features/review/review.service.ts';
 import { SeatHistoryService } from './features/seats/seat-history.service.ts';
 import { seatRoutes } from './features/seats/seat.routes.ts';
 import { SeatService } from './features/seats/seat.service.ts';
+import { siteExportRoutes } from './features/site-exports/site-export.routes.ts';
+import { SiteExportService } from './features/site-exports/site-export.service.ts';
 import { surveyRoutes } from './features/surveys/survey.routes.ts';
 import { SurveyService } from './features/surveys/survey.service.ts';
 import { UploadService } from './features/waveforms/upload.service.ts';
@@ -123,15 +132,21 @@ export function compose(
     },
     now,
   );
-  const inspections: InspectionService = new InspectionService(
+  const inspectionNeighbours: InspectionNeighbours = {
+    findingBackground: findings.background.bind(findings),
+    moveFinding,
+    assessSeats,
+    membersOf: (siteId) => accounts.membersOf(siteId),
+    addMail: mailer.add.bind(mailer),
+    publicUrl: options.publicUrl,
+  };
+  const inspections: InspectionService = new InspectionService(database, inspectionNeighbours, now);
+  const desk = new DeskService(
     database,
     {
-      findingBackground: findings.background.bind(findings),
-      moveFinding,
-      assessSeats,
+      presentInspectionItem,
+      today: todayAnywhere,
       membersOf: (siteId) => accounts.membersOf(siteId),
-      addMail: mailer.add.bind(mailer),
-      publicUrl: options.publicUrl,
     },
     now,
   );
@@ -170,6 +185,14 @@ export function compose(
     logError: (err, message) => logger.error({ err }, message),
     now,
   });
+  const siteExports = new SiteExportService(database, {
+    findings: async (principal, query) =>
+      (await findings.list(principal, query)).rows.map(({ finding, links }) =>
+        presentFindingItem(finding, links),
+      ),
+    inspections: async (principal, query) => (await inspections.list(principal, query)).items,
+    checkSurvey: surveys.progress.bind(surveys),
+  });
   const demoMails = new DemoMailRepository(database.db);
 
   const routes = [
@@ -192,6 +215,8 @@ export function compose(
     ...reviewRoutes(review),
     ...findingRoutes(findings),
     ...inspectionRoutes(inspections),
+    ...siteExportRoutes(siteExports),
+    ...deskRoutes(desk, new ChangeInspection(database, inspectionNeighbours, now)),
     ...(config.demo ? demoMailboxRoutes(demoMails, options.publicUrl) : []),
   ];
 

@@ -36,7 +36,7 @@ export class AssignInspection {
     if (isPlain && (request.checkShaftSeat || request.checkHousingSeat)) {
       refuseField('checkShaftSeat', 'A plain bearing has no seats; ask for the check in place.');
     }
-    const assignee = await this.assigneeAt(principal.siteId, request.assigneeUserId);
+    const assignee = await ownerAt(this.neighbours, principal.siteId, request.assigneeUserId);
     const seats = await this.neighbours.assessSeats(finding.bearingPositionId, screenings);
     const summary = inspectionSummary(
       finding.bearingPosition?.name ?? '',
@@ -98,13 +98,18 @@ export class AssignInspection {
       return id;
     });
   }
+}
 
-  private async assigneeAt(siteId: number, userId: number) {
-    const members = await this.neighbours.membersOf(siteId);
-    const member = members.find((one) => one.userId === userId);
-    if (member?.role !== 'owner') {
-      refuseField('assigneeUserId', 'Choose an asset owner of this site.');
-    }
-    return member;
+/** Refuses at its field whoever is no asset owner of the site. */
+export async function ownerAt(
+  neighbours: Pick<InspectionNeighbours, 'membersOf'>,
+  siteId: number,
+  userId: number,
+) {
+  const members = await neighbours.membersOf(siteId);
+  const member = members.find((one) => one.userId === userId);
+  if (member?.role !== 'owner') {
+    refuseField('assigneeUserId', 'Choose an asset owner of this site.');
   }
+  return member;
 }

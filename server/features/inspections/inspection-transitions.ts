@@ -1,7 +1,7 @@
 import type { InspectionState } from '#shared/contracts/inspection.ts';
 import type { SiteRole } from '#shared/contracts/session.ts';
 
-export const inspectionActions = ['accept', 'report', 'close', 'cancel'] as const;
+export const inspectionActions = ['accept', 'report', 'close', 'cancel', 'reassign'] as const;
 export type InspectionAction = (typeof inspectionActions)[number];
 
 interface Transition {
@@ -14,6 +14,8 @@ const transitions: Readonly<Record<InspectionAction, Transition>> = {
   accept: { from: ['assigned'], to: 'accepted', role: 'owner' },
   report: { from: ['accepted'], to: 'reported', role: 'owner' },
   close: { from: ['reported'], to: 'closed', role: 'lead' },
+  // The new owner accepts anew.
+  reassign: { from: ['assigned', 'accepted'], to: 'assigned', role: 'lead' },
   cancel: { from: ['assigned', 'accepted'], to: 'cancelled', role: 'lead' },
 };
 

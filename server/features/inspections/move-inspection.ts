@@ -13,7 +13,9 @@ export interface InspectionStep {
   action: InspectionAction;
   version: number;
   reason: string;
-  changes?: Partial<Pick<Inspection, 'report' | 'reportedAt'>>;
+  changes?: Partial<
+    Pick<Inspection, 'report' | 'reportedAt' | 'assigneeUserId' | 'dueOn' | 'assignedAt'>
+  >;
 }
 
 /**
@@ -76,7 +78,7 @@ const wrongState = (inspection: Inspection, action: InspectionAction) =>
       : `An inspection that is ${inspection.state} can't be changed like this.`,
   );
 
-const changedMeanwhile = (inspection: Inspection) =>
+export const changedMeanwhile = (inspection: Inspection) =>
   new AppError(
     'conflict',
     `This inspection was changed meanwhile (it was ${inspection.state} when read). Read it again; what you typed is not lost.`,

@@ -13,6 +13,8 @@ const allowed: Readonly<Record<string, string>> = {
   'reported + close by lead': 'closed',
   'assigned + cancel by lead': 'cancelled',
   'accepted + cancel by lead': 'cancelled',
+  'assigned + reassign by lead': 'assigned',
+  'accepted + reassign by lead': 'assigned',
 };
 
 describe('the states of an inspection', () => {
