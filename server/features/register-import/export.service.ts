@@ -1,5 +1,5 @@
-import papa from 'papaparse';
 import type { SitePrincipal } from '#server/auth/principal.ts';
+import { byteOrderMark, csvText } from '#server/csv/csv-text.ts';
 import type { Database } from '#server/db/database.ts';
 import type { BearingPosition } from '#server/db/entities/bearing-position.entity.ts';
 import type { Machine } from '#server/db/entities/machine.entity.ts';
@@ -12,9 +12,6 @@ import { columnsOf } from './import-columns.ts';
 
 /** Machines read in one go; a page of bearing positions is some times as many rows. */
 const pageMachines = 200;
-const newline = '\r\n';
-/** Spreadsheets take a file without it for the local eight-bit encoding. */
-const byteOrderMark = '\uFEFF';
 
 /** The register as CSV, in the form in which it is imported. */
 export class ExportService {
@@ -27,8 +24,7 @@ export class ExportService {
   /** The file piece by piece: UTF-8, comma, decimal point, ISO dates, units in the header. */
   async *csv(principal: SitePrincipal, kind: RegisterKind): AsyncGenerator<string> {
     const columns = columnsOf[kind];
-    const text = (cells: string[][]) => papa.unparse(cells, { newline }) + newline;
-    yield byteOrderMark + text([columns.map(({ header }) => header)]);
+    yield byteOrderMark + csvText([columns.map(({ header }) => header)]);
     const repository = new ExportRepository(this.database.db);
     let afterTag: string | null = null;
     for (;;) {
@@ -42,7 +38,7 @@ export class ExportService {
       afterTag = last.tag;
       const rows = await rowsOf(repository, kind, machines);
       if (rows.length > 0) {
-        yield text(
+        yield csvText(
           rows.map((row) => columns.map((column) => writeCell(column, row[column.key] ?? null))),
         );
       }

@@ -1,6 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { guard, readCell, unguard, writeCell } from '#server/features/register-import/csv-cell.ts';
+import { guard, unguard } from '#server/csv/formula-guard.ts';
+import { readCell, writeCell } from '#server/features/register-import/csv-cell.ts';
 import { columnsOf, type Column } from '#server/features/register-import/import-columns.ts';
 
 const columnOf = (key: string): Column => {
