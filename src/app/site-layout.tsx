@@ -18,6 +18,7 @@ const pages: readonly { path: string; label: string; roles: readonly SiteRole[] 
   { path: 'surveys', label: 'Surveys', roles: ['analyst', 'lead'] },
   { path: 'review', label: 'Review', roles: ['analyst', 'lead'] },
   { path: 'findings', label: 'Findings', roles: ['analyst', 'lead', 'owner'] },
+  { path: 'desk', label: 'Desk', roles: ['lead'] },
   { path: 'inspections', label: 'Inspections', roles: ['analyst', 'lead', 'owner'] },
   { path: 'machines', label: 'Machines', roles: ['analyst', 'lead', 'owner'] },
   { path: 'routes', label: 'Routes', roles: ['analyst', 'lead'] },

@@ -67,6 +67,10 @@ const pages: Readonly<Record<string, Load>> = {
     const { inspectionLoader, InspectionPage } = await import('./routes/inspection.tsx');
     return { loader: inspectionLoader, Component: InspectionPage };
   },
+  desk: async () => {
+    const { deskLoader, DeskPage } = await import('./routes/desk.tsx');
+    return { loader: deskLoader, Component: DeskPage };
+  },
   mails: async () => {
     const { siteMailsLoader, SiteMailsPage } = await import('./routes/mails.tsx');
     return { loader: siteMailsLoader, Component: SiteMailsPage };
