@@ -13,6 +13,8 @@ import { Select } from '#src/components/select.tsx';
 import { findingStateWords } from '#src/components/work-state-mark.tsx';
 import { findingListQuery } from '#src/features/findings/api/findings.ts';
 import { FindingTable } from '#src/features/findings/components/finding-table.tsx';
+import { SaveFileButton } from '#src/features/papers/components/save-file-button.tsx';
+import { withQuery } from '#src/lib/api-client.ts';
 import { readListQuery, useListAddress } from '../list-address.ts';
 import { useSite } from '../site-context.ts';
 
@@ -44,6 +46,20 @@ export function FindingsPage() {
       <PageHeader
         title="Findings"
         facts={[{ label: isFiltered ? 'Shown' : 'In all', value: data?.total ?? '–' }]}
+        actions={
+          (data?.total ?? 0) > 0 && (
+            <SaveFileButton
+              path={withQuery(`/api/sites/${siteId}/exports/findings`, {
+                search: query.search,
+                state: query.state,
+                active: query.active,
+              })}
+              fileName="findings.csv"
+            >
+              Save as CSV
+            </SaveFileButton>
+          )
+        }
       />
       <div className="mb-3 flex flex-wrap gap-3">
         <SearchInput

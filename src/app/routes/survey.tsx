@@ -5,6 +5,7 @@ import { ButtonLink } from '#src/components/button-link.tsx';
 import { Figure } from '#src/components/figure.tsx';
 import { PageHeader } from '#src/components/page-header.tsx';
 import { pointChoicesQuery } from '#src/features/register/api/routes.ts';
+import { SaveFileButton } from '#src/features/papers/components/save-file-button.tsx';
 import { surveyQuery } from '#src/features/surveys/api/surveys.ts';
 import { ScreeningProgress } from '#src/features/surveys/components/screening-progress.tsx';
 import { MissingPoints, RejectedFiles } from '#src/features/surveys/components/survey-gaps.tsx';
@@ -48,12 +49,22 @@ export function SurveyPage() {
           { label: 'Made by', value: survey.createdByName },
         ]}
         actions={
-          counts.undecidedFlagCount > 0 && (
-            <ButtonLink variant="primary" to={`/sites/${siteId}/review?surveyId=${surveyId}`}>
-              Review {counts.undecidedFlagCount}
-              {counts.undecidedFlagCount === 1 ? ' flag' : ' flags'}
-            </ButtonLink>
-          )
+          <>
+            {counts.undecidedFlagCount > 0 && (
+              <ButtonLink variant="primary" to={`/sites/${siteId}/review?surveyId=${surveyId}`}>
+                Review {counts.undecidedFlagCount}
+                {counts.undecidedFlagCount === 1 ? ' flag' : ' flags'}
+              </ButtonLink>
+            )}
+            {counts.doneCount > 0 && (
+              <SaveFileButton
+                path={`/api/sites/${siteId}/exports/screenings?surveyId=${surveyId}`}
+                fileName={`screenings-${survey.surveyedOn}.csv`}
+              >
+                Save as CSV
+              </SaveFileButton>
+            )}
+          </>
         }
       />
       <div className="flex flex-col gap-5">
