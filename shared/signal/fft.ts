@@ -3,6 +3,7 @@ import FFT from 'fft.js';
 /** Plans by length; a route's records have a few lengths only. */
 const plans = new Map<number, FFT>();
 const chirps = new Map<number, Chirp>();
+const turnsOfUnity = new Map<number, Pick<Chirp, 'cos' | 'sin'>>();
 const plansMax = 12;
 const chirpsMax = 4;
 
@@ -43,13 +44,44 @@ const asNumbers = (values: Float64Array) => values as unknown as number[];
 export function realFft(samples: Float64Array): Float64Array {
   const n = samples.length;
   if (n < 2) return Float64Array.of(samples[0] ?? 0, 0);
-  const half = Math.floor(n / 2) + 1;
-  if (!isPowerOfTwo(n))
-    return n % 2 === 0 ? packedTransform(samples, half) : oddTransform(samples, half);
-  const out = new Float64Array(2 * n);
-  if (n >= 4) planOf(n).realTransform(asNumbers(out), asNumbers(samples));
-  else out.set([(samples[0] ?? 0) + (samples[1] ?? 0), 0, (samples[0] ?? 0) - (samples[1] ?? 0)]);
-  return out.subarray(0, 2 * half);
+  if (n % 2 === 1) return oddTransform(samples, (n + 1) / 2);
+  if (!isPowerOfTwo(n)) return unpack(bluestein(samples, n / 2), n / 2);
+  if (n === 2) {
+    const [a, b] = [samples[0] ?? 0, samples[1] ?? 0];
+    return Float64Array.of(a + b, 0, a - b, 0);
+  }
+  // Read as complex numbers of neighbours the samples are half as many: faster than fft.js's own
+  // transform of real ones.
+  const packed = new Float64Array(n);
+  planOf(n / 2).transform(asNumbers(packed), asNumbers(samples));
+  return unpack(packed, n / 2);
+}
+
+/**
+ * Lines of real samples from the transform of their neighbours as complex numbers: those of even and
+ * odd samples are told apart by their symmetry.
+ *
+ * @param z - transform, `n` interleaved complex numbers
+ * @returns lines 0 … n, interleaved
+ */
+function unpack(z: Float64Array, n: number): Float64Array {
+  const out = new Float64Array(2 * (n + 1));
+  const { cos, sin } = kept(turnsOfUnity, plansMax, 2 * n, () => unityOf(2 * n));
+  out[0] = (z[0] as number) + (z[1] as number);
+  out[2 * n] = (z[0] as number) - (z[1] as number);
+  for (let k = 1; k < n; k += 1) {
+    const mirror = 2 * (n - k);
+    const at = 2 * k;
+    const evenRe = 0.5 * ((z[at] as number) + (z[mirror] as number));
+    const evenIm = 0.5 * ((z[at + 1] as number) - (z[mirror + 1] as number));
+    const oddRe = 0.5 * ((z[at + 1] as number) + (z[mirror + 1] as number));
+    const oddIm = 0.5 * ((z[mirror] as number) - (z[at] as number));
+    const c = cos[k] as number;
+    const s = sin[k] as number;
+    out[at] = evenRe + oddRe * c + oddIm * s;
+    out[at + 1] = evenIm + oddIm * c - oddRe * s;
+  }
+  return out;
 }
 
 /**
@@ -64,19 +96,39 @@ export function realFft(samples: Float64Array): Float64Array {
 export function realFromLines(lines: Float64Array, length: number): Float64Array {
   if (!isPowerOfTwo(length) || length < 4)
     throw new RangeError('The length must be a power of two.');
-  const full = new Float64Array(2 * length);
-  const count = Math.min(lines.length >> 1, length >> 1);
-  // Only the upper half-plane is filled: the real part of the inverse is half the wanted signal.
+  const half = length >> 1;
+  const count = Math.min(lines.length >> 1, half);
+  // Even samples become real, odd ones imaginary parts of half as many complex numbers. Line k meets
+  // line k and half - k of the wanted signal. fft.js divides its inverse by the number of points.
+  const packed = new Float64Array(length);
+  const { cos, sin } = kept(turnsOfUnity, plansMax, length, () => unityOf(length));
   for (let k = 1; k < count; k += 1) {
-    full[2 * k] = lines[2 * k] ?? 0;
-    full[2 * k + 1] = lines[2 * k + 1] ?? 0;
+    const re = half * (lines[2 * k] as number);
+    const im = half * (lines[2 * k + 1] as number);
+    const [c, s] = [cos[k] as number, sin[k] as number];
+    const mirror = 2 * (half - k);
+    const at = 2 * k;
+    packed[at] = (packed[at] as number) + re - (re * s + im * c);
+    packed[at + 1] = (packed[at + 1] as number) + im + (re * c - im * s);
+    // conj(X[k]) stands half a circle on: with the turn of half − k, which is −conj of that of k.
+    packed[mirror] = (packed[mirror] as number) + re + (re * s + im * c);
+    packed[mirror + 1] = (packed[mirror + 1] as number) - im + (re * c - im * s);
   }
-  const out = new Float64Array(2 * length);
-  planOf(length).inverseTransform(asNumbers(out), asNumbers(full));
-  const signal = new Float64Array(length);
-  // fft.js divides its inverse by the length.
-  for (let j = 0; j < length; j += 1) signal[j] = 2 * length * (out[2 * j] ?? 0);
-  return signal;
+  const out = new Float64Array(length);
+  planOf(half).inverseTransform(asNumbers(out), asNumbers(packed));
+  return out;
+}
+
+/** Cosine and sine of k turns over `length`, k below half of it. */
+function unityOf(length: number): Pick<Chirp, 'cos' | 'sin'> {
+  const half = length >> 1;
+  const cos = new Float64Array(half);
+  const sin = new Float64Array(half);
+  for (let k = 0; k < half; k += 1) {
+    cos[k] = Math.cos((2 * Math.PI * k) / length);
+    sin[k] = Math.sin((2 * Math.PI * k) / length);
+  }
+  return { cos, sin };
 }
 
 function chirpOf(n: number): Chirp {
@@ -99,27 +151,6 @@ function chirpOf(n: number): Chirp {
   const kernel = new Float64Array(2 * m);
   planOf(m).transform(asNumbers(kernel), asNumbers(b));
   return { cos, sin, kernel, convolutionLength: m };
-}
-
-/**
- * Even lengths: two neighbouring samples are one complex number, half as many are transformed, and
- * the lines of even and odd samples are told apart by their symmetry.
- */
-function packedTransform(samples: Float64Array, half: number): Float64Array {
-  const n = samples.length / 2;
-  const z = bluestein(samples, n);
-  const out = new Float64Array(2 * half);
-  for (let k = 0; k < half; k += 1) {
-    const [i, j] = [2 * (k % n), 2 * ((n - k) % n)];
-    const [zr, zi, yr, yi] = [z[i] ?? 0, z[i + 1] ?? 0, z[j] ?? 0, z[j + 1] ?? 0];
-    const [evenRe, evenIm] = [0.5 * (zr + yr), 0.5 * (zi - yi)];
-    const [oddRe, oddIm] = [0.5 * (zi + yi), 0.5 * (yr - zr)];
-    const angle = (-Math.PI * k) / n;
-    const [c, s] = [Math.cos(angle), Math.sin(angle)];
-    out[2 * k] = evenRe + oddRe * c - oddIm * s;
-    out[2 * k + 1] = evenIm + oddRe * s + oddIm * c;
-  }
-  return out;
 }
 
 function oddTransform(samples: Float64Array, half: number): Float64Array {

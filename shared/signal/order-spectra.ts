@@ -56,25 +56,29 @@ export function segmentTurns(turns: number): number {
  * @param velocity - mm/s at `pointsPerTurn` points a turn
  * @param turns - of one segment, a power of two
  * @param hopTurns - from one segment to the next
+ * @param points - a turn has in `velocity`; with fewer than `pointsPerTurn` the lines end earlier
  * @returns no segments where the record is shorter than one
  */
 export function orderSegments(
   velocity: Float64Array,
   turns: number,
   hopTurns: number,
+  points = pointsPerTurn,
 ): OrderSegments {
-  const length = turns * pointsPerTurn;
+  const length = turns * points;
   const window = hannOf(length);
-  const lineCount = bandOrders * turns + 1;
+  const lineCount = Math.min(bandOrders * turns, length / 2) + 1;
   const segments: Float64Array[] = [];
   const part = new Float64Array(length);
   for (
     let from = 0;
     from + length <= velocity.length && segments.length < segmentsMax;
-    from += hopTurns * pointsPerTurn
+    from += hopTurns * points
   ) {
-    for (let i = 0; i < length; i += 1) part[i] = (velocity[from + i] ?? 0) * (window[i] ?? 0);
-    segments.push(realFft(part).slice(0, 2 * lineCount));
+    for (let i = 0; i < length; i += 1) {
+      part[i] = (velocity[from + i] as number) * (window[i] as number);
+    }
+    segments.push(realFft(part).subarray(0, 2 * lineCount));
   }
   return { linesPerOrder: turns, segments, hopTurns };
 }

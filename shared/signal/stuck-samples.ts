@@ -13,13 +13,14 @@ const jumpOverUsual = 0.5;
 export function stuckShare(samples: Float64Array): number {
   let [low, high, least, sum, count] = [Infinity, -Infinity, Infinity, 0, 0];
   for (let i = 0; i < samples.length; i += 1) {
-    const value = samples[i] ?? Number.NaN;
-    if (!Number.isFinite(value)) continue;
-    low = Math.min(low, value);
-    high = Math.max(high, value);
-    const step = Math.abs(value - (samples[i - 1] ?? value));
-    if (!(step > 0) || !Number.isFinite(step)) continue;
-    least = Math.min(least, step);
+    const value = samples[i] as number;
+    // No comparison with what is not a number holds.
+    if (!(value < Infinity && value > -Infinity)) continue;
+    if (value < low) low = value;
+    if (value > high) high = value;
+    const step = i > 0 ? Math.abs(value - (samples[i - 1] as number)) : 0;
+    if (!(step > 0 && step < Infinity)) continue;
+    if (step < least) least = step;
     sum += step;
     count += 1;
   }

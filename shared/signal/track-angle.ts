@@ -26,6 +26,7 @@ interface Phase {
 
 const fineTurns = 8;
 const hopTurns = 2;
+const followedMost = 150;
 const segmentsMin = 5;
 const highestTracked = 10;
 /** Power over noise in a segment from which a phase can be followed. */
@@ -40,6 +41,8 @@ const gainMin = 0.15;
 const sharpOrders = 20;
 /** Deviations this much larger than noise alone gives are wander. */
 const wanderOverNoise = 5;
+/** Turns of the highest order followed that cost it less than a hundredth of its power. */
+const worthTurns = 0.03;
 
 /**
  * Follows the phase of the strongest low order from segment to segment (demodulation), takes what
@@ -54,15 +57,15 @@ export function trackAngle(band: BandVelocity, speedHz: number): TrackedRecord {
   let trackedOrder: number | null = null;
   let current = speedHz;
   let noiseTurns = Infinity;
-  let sharp = sharpness(velocity);
+  let sharp: number | null = null;
   const durationS = band.mmPerS.length / band.rateHz;
   for (let round = 0; round < rounds; round += 1) {
     const turnsInAll = velocity.length / pointsPerTurn;
     if (turnsInAll < fineTurns + (segmentsMin - 1) * hopTurns) break;
     // Long records in longer steps: the store of segments is limited.
-    const hop = Math.max(hopTurns, Math.ceil(turnsInAll / 300));
+    const hop = Math.max(hopTurns, Math.ceil(turnsInAll / followedMost));
     const phase = bestPhase(
-      orderSegments(velocity, fineTurns, hop),
+      orderSegments(halved(velocity), fineTurns, hop, pointsPerTurn / 2),
       round === 0 ? 3 : highestTracked,
     );
     if (phase === null) break;
@@ -77,6 +80,10 @@ export function trackAngle(band: BandVelocity, speedHz: number): TrackedRecord {
     const { slope, rest } = takeLine(total);
     const tried = current + slope / stepS;
     if (Math.abs(tried - speedHz) * durationS > shiftMaxLines) break;
+    // Where even the tenth order loses nothing, there is nothing to gain.
+    const most = total.reduce((peak, turn) => Math.max(peak, Math.abs(turn - (total[0] ?? 0))), 0);
+    if (most * highestTracked < worthTurns) break;
+    sharp ??= sharpness(velocity);
     const followed = { fromS, stepS, turns: rest };
     const resampled = toShaftAngle(band, tried, followed);
     const sharper = sharpness(resampled);
@@ -103,6 +110,18 @@ function sharpness(velocity: Float64Array): number {
     sum += Math.log(Math.max(1, signalRatio(segments, order)));
   }
   return sum;
+}
+
+/**
+ * Half as many points a turn: what orders above the sixteenth fold down to whole orders keeps its
+ * phase to the shaft, and so tells no drift.
+ */
+function halved(velocity: Float64Array): Float64Array {
+  const out = new Float64Array(velocity.length >> 1);
+  for (let i = 0; i < out.length; i += 1) {
+    out[i] = 0.5 * ((velocity[2 * i] as number) + (velocity[2 * i + 1] as number));
+  }
+  return out;
 }
 
 /** The order whose phase is known best; an order's phase is worth the more the higher it is. */
