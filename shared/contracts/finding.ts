@@ -6,6 +6,7 @@ import { direction } from './measuring-point.ts';
 import { orderCell } from './order-cells.ts';
 import { verdict } from './screening.ts';
 import { seatAssessmentsResponse } from './seat-assessment.ts';
+import { verificationResponse } from './verification.ts';
 
 export const findingStates = [
   'open',
@@ -87,6 +88,8 @@ export const findingResponse = findingListItem.extend({
   seats: seatAssessmentsResponse,
   inspections: z.array(inspectionListItem),
   history: z.array(stateChangeResponse),
+  /** The surveys after the repair against what raised the finding; null where none is due. */
+  verification: verificationResponse.nullable(),
   can: z.object({
     assign: z.boolean(),
     monitor: z.boolean(),

@@ -11,6 +11,9 @@ export interface PointVerification {
   pointLabel: string;
   before: VerificationReading | null;
   after: VerificationReading | null;
+  /** What became of the signs, in a few words. */
+  outcome: string;
+  /** The outcome with its numbers. */
   sentence: string;
 }
 
@@ -83,7 +86,15 @@ function judgePoint(
 ): JudgedPoint {
   const fate = fateOf(before, after);
   const changes = before && after && after.score !== null ? changedConditions(before, after) : [];
-  return { pointLabel, before, after, fate, changes, sentence: pointSentence(before, after, fate) };
+  return {
+    pointLabel,
+    before,
+    after,
+    fate,
+    changes,
+    outcome: outcomeOf(before, fate),
+    sentence: pointSentence(before, after, fate),
+  };
 }
 
 function fateOf(before: VerificationReading | null, after: VerificationReading | null): Fate {
@@ -103,24 +114,29 @@ const level = (value: number | null) =>
   value === null ? 'not known' : `${formatSignificant(value, 2)} mm/s rms`;
 const orders = (count: number) => (count === 1 ? '1 order' : `${count} orders`);
 
+const outcomes: Readonly<Record<Fate, string>> = {
+  gone: 'The signs are gone',
+  flagged: 'The signs are there',
+  lingers: 'Below the limit, but the signs have not clearly gone',
+  'not judged': 'The record of this survey could not be judged',
+  missing: 'Not measured in this survey',
+};
+
+const outcomeOf = (before: VerificationReading | null, fate: Fate) =>
+  before === null && fate === 'gone' ? 'No signs' : outcomes[fate];
+
 /** The numbers of one point, before and after. */
 function pointSentence(
   before: VerificationReading | null,
   after: VerificationReading | null,
   fate: Fate,
 ): string {
-  if (after === null) return 'Not measured in this survey.';
-  if (fate === 'not judged') return 'The record of this survey could not be judged.';
+  const outcome = outcomeOf(before, fate);
+  if (after === null || fate === 'not judged') return `${outcome}.`;
   if (before === null) {
-    return `Did not raise the finding; score ${score(after.score)}, run of ${orders(after.runLength)} at ${level(after.runMmPerSRms)}, overall ${level(after.overallMmPerSRms)}.`;
+    return `${outcome}: score ${score(after.score)}, run of ${orders(after.runLength)}, orders 2 to 10 ${level(after.runMmPerSRms)}, overall velocity ${level(after.overallMmPerSRms)}; this point did not raise the finding.`;
   }
-  const words = {
-    gone: 'The signs are gone',
-    flagged: 'The signs are there',
-    lingers: 'Below the limit, but the signs have not clearly gone',
-  } as const;
-  const word = words[fate as keyof typeof words];
-  return `${word}: score ${score(before.score)} before, ${score(after.score)} after; run of ${orders(before.runLength)} before, ${orders(after.runLength)} after; orders 2 to 10 ${level(before.runMmPerSRms)} before, ${level(after.runMmPerSRms)} after; overall velocity ${level(before.overallMmPerSRms)} before, ${level(after.overallMmPerSRms)} after.`;
+  return `${outcome}: score ${score(before.score)} before, ${score(after.score)} after; run of ${orders(before.runLength)} before, ${orders(after.runLength)} after; orders 2 to 10 ${level(before.runMmPerSRms)} before, ${level(after.runMmPerSRms)} after; overall velocity ${level(before.overallMmPerSRms)} before, ${level(after.overallMmPerSRms)} after.`;
 }
 
 const list = (points: readonly JudgedPoint[]) =>

@@ -105,6 +105,7 @@ export const aFinding = (overrides: Partial<FindingResponse> = {}): FindingRespo
   seats,
   inspections: [],
   history: [],
+  verification: null,
   can: { assign: true, monitor: true, dismiss: true, reopen: false, verify: false },
   ...overrides,
 });

@@ -3,13 +3,12 @@ import { recordActivity } from '#server/db/activity.repository.ts';
 import type { Db } from '#server/db/database.ts';
 import type { Finding } from '#server/db/entities/finding.entity.ts';
 import { AppError, notFound } from '#server/http/app-error.ts';
-import type { FindingState } from '#shared/contracts/finding.ts';
 import {
   finishedFindingStates,
   nextFindingState,
   type FindingEvent,
 } from './finding-transitions.ts';
-import { FindingRepository } from './finding.repository.ts';
+import { FindingRepository, type FindingChange } from './finding.repository.ts';
 
 export interface FindingStep {
   principal: SitePrincipal;
@@ -41,7 +40,9 @@ export async function moveFinding(db: Db, step: FindingStep, now: Date): Promise
   const repository = new FindingRepository(db);
   const finding = await repository.lock(findingId);
   if (finding === null) throw notFound('finding');
-  if (version !== undefined && finding.version !== version) throw changedMeanwhile(finding);
+  if (version !== undefined && finding.version !== version) {
+    throw changedMeanwhile(finding, await repository.lastChangeOf(finding));
+  }
   const next = nextFindingState(finding.state, event, principal.role);
   if (next === null) {
     throw new AppError(
@@ -81,11 +82,26 @@ async function refuseSecondActive(repository: FindingRepository, finding: Findin
   );
 }
 
-export const changedMeanwhile = (finding: { state: FindingState }) =>
+/** Tells who came first, with what and why: the second decides anew or leaves it. */
+const changedMeanwhile = ({ state }: Finding, last: FindingChange | null) =>
   new AppError(
     'conflict',
-    `This finding was changed meanwhile and is now ${finding.state}. Read it again before deciding.`,
+    `This finding was changed meanwhile and is now ${state}. ${last === null ? '' : `${last.userName} ${changeWords[last.event] ?? 'changed it'} on ${last.at.toISOString().slice(0, 16).replace('T', ' ')} UTC${last.reason === null ? '' : `: “${last.reason}”`}. `}Your decision was not saved; read the finding again before deciding.`,
   );
+
+const changeWords: Readonly<Record<string, string>> = {
+  assign: 'assigned an inspection',
+  monitor: 'put it under monitoring',
+  dismiss: 'dismissed it',
+  reopen: 'reopened it',
+  verify: 'closed it as verified',
+  'inspection-repaired': 'reported the repair',
+  'inspection-not-loose': 'reported that the fit is not loose',
+  'inspection-unsettled': 'reported the inspection',
+  'inspection-cancelled': 'cancelled the inspection',
+  extended: 'accepted another flag for it',
+  reduced: 'took a flag back from it',
+};
 
 export const recordFindingActivity = (
   db: Db,

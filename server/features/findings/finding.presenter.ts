@@ -15,7 +15,9 @@ import type { InspectionListItem } from '#shared/contracts/inspection.ts';
 import { pointLabel } from '#shared/contracts/measuring-point.ts';
 import { orderCellsOf } from '#shared/contracts/order-cells.ts';
 import type { SeatAssessmentsResponse } from '#shared/contracts/seat-assessment.ts';
+import type { FindingVerification } from './finding-verification.ts';
 import { nextFindingState } from './finding-transitions.ts';
+import { presentVerification } from './verification.presenter.ts';
 
 /** The screening that shows the finding most clearly; the newer one where two score the same. */
 export function clearestScreening(links: readonly FindingScreening[]): Screening | null {
@@ -95,6 +97,7 @@ export interface FindingWhole {
   history: StateChange[];
   seats: SeatAssessmentsResponse;
   inspections: InspectionListItem[];
+  verification: FindingVerification | null;
 }
 
 export function presentFinding(principal: SitePrincipal, whole: FindingWhole): FindingResponse {
@@ -110,6 +113,7 @@ export function presentFinding(principal: SitePrincipal, whole: FindingWhole): F
     seats: whole.seats,
     inspections: whole.inspections,
     history: whole.history.map(presentStateChange),
+    verification: whole.verification && presentVerification(whole.verification),
     can: Object.fromEntries(
       findingActions.map((action) => [action, can(action)]),
     ) as FindingResponse['can'],

@@ -16,6 +16,16 @@ const sortColumns: Record<FindingListQuery['sort'], string> = {
     '(SELECT MAX(s.score) FROM finding_screening fs JOIN screening s ON s.id = fs.screening_id WHERE fs.finding_id = finding.id)',
 };
 
+/** The last thing done with a finding, as its activity record tells it. */
+export interface FindingChange {
+  /** The entry's action without "finding.". */
+  event: string;
+  userName: string;
+  at: Date;
+  /** Why, where the step has a reason. */
+  reason: string | null;
+}
+
 /** Findings, the screenings that show them and the record of their states. */
 export class FindingRepository {
   private readonly db: Db;
@@ -87,6 +97,29 @@ export class FindingRepository {
       relations: { changedBy: true },
       order: { changedAt: 'ASC', id: 'ASC' },
     });
+  }
+
+  async lastChangeOf({ id, siteId }: Finding): Promise<FindingChange | null> {
+    const [row] = await this.db.query<
+      { action: string; name: string | null; happened_at: Date; reason: string | null }[]
+    >(
+      `SELECT activity.action, user.name, activity.happened_at,
+              (SELECT step.reason FROM state_change step
+                WHERE step.finding_id = activity.object_id AND step.inspection_id IS NULL
+                  AND step.changed_at = activity.happened_at
+                ORDER BY step.id DESC LIMIT 1) AS reason
+         FROM activity LEFT JOIN user ON user.id = activity.user_id
+        WHERE activity.site_id = ? AND activity.object_type = 'finding' AND activity.object_id = ?
+        ORDER BY activity.happened_at DESC, activity.id DESC LIMIT 1`,
+      [siteId, id],
+    );
+    if (row === undefined) return null;
+    return {
+      event: row.action.replace(/^finding\./, ''),
+      userName: row.name ?? 'Somebody',
+      at: row.happened_at,
+      reason: row.reason,
+    };
   }
 
   /** The finding as it is now, held against others. */

@@ -8,9 +8,11 @@ import type { DecideFindingRequest, FindingListQuery } from '#shared/contracts/f
 import type { InspectionListItem } from '#shared/contracts/inspection.ts';
 import type { SeatAssessmentsResponse } from '#shared/contracts/seat-assessment.ts';
 import { moveFinding } from './finding-progress.ts';
+import { verifiedStates, verifyFinding } from './finding-verification.ts';
 import { maySeeFinding } from './finding.policy.ts';
 import { clearestScreening, type FindingWhole } from './finding.presenter.ts';
 import { FindingRepository } from './finding.repository.ts';
+import { VerificationRepository } from './verification.repository.ts';
 
 /** What findings take from the other features. */
 export interface FindingNeighbours {
@@ -64,7 +66,18 @@ export class FindingService {
       this.neighbours.inspectionsOf(findingId),
     ]);
     const seats = await this.neighbours.assessSeats(finding.bearingPositionId, screeningsOf(links));
-    return { finding, links, history, seats, inspections };
+    const verification = await this.verificationOf(finding, screeningsOf(links));
+    return { finding, links, history, seats, inspections, verification };
+  }
+
+  private async verificationOf(finding: Finding, linked: readonly Screening[]) {
+    if (!verifiedStates.includes(finding.state)) return null;
+    const repository = new VerificationRepository(this.database.db);
+    const repairedAt = await repository.repairedAt(finding.id);
+    if (repairedAt === null) return null;
+    const day = repairedAt.toISOString().slice(0, 10);
+    const later = await repository.screeningsFrom(finding.bearingPositionId, day);
+    return verifyFinding(finding, repairedAt, linked, later);
   }
 
   async decide(

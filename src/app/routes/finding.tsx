@@ -10,6 +10,7 @@ import { FindingDecisions } from '#src/features/findings/components/finding-deci
 import { FindingHistory } from '#src/features/findings/components/finding-history.tsx';
 import { FindingInspections } from '#src/features/findings/components/finding-inspections.tsx';
 import { FindingScreenings } from '#src/features/findings/components/finding-screenings.tsx';
+import { FindingVerification } from '#src/features/findings/components/finding-verification.tsx';
 import { SeatsView } from '#src/features/seats/components/seats-view.tsx';
 import { formatDay } from '#src/lib/dates.ts';
 import { useSite } from '../site-context.ts';
@@ -55,6 +56,14 @@ export function FindingPage() {
       />
       <div className="grid items-start gap-5 2xl:grid-cols-[3fr_1fr]">
         <div className="flex min-w-0 flex-col gap-5">
+          {finding.verification !== null && (
+            <Panel title="After the repair">
+              <FindingVerification
+                verification={finding.verification}
+                decided={finding.state === 'verified'}
+              />
+            </Panel>
+          )}
           <Panel title="What was seen">
             <FindingScreenings
               siteId={siteId}

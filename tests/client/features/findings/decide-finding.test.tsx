@@ -1,9 +1,10 @@
-import { cleanup, screen, waitFor } from '@testing-library/react';
+import { cleanup, screen, waitFor, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { afterEach, describe, expect, it, vi } from 'vitest';
+import type { FindingResponse } from '#shared/contracts/finding.ts';
 import '../../charts/browser-stubs.ts';
 import { aFinding, anInspection, aSession } from '#tests/support/client-fixtures.ts';
-import { renderPage } from '#tests/support/render-page.tsx';
+import { refusal, renderPage } from '#tests/support/render-page.tsx';
 
 const path = '/api/sites/1/findings/3';
 const answers = {
@@ -20,6 +21,83 @@ const answers = {
 afterEach(() => {
   cleanup();
   vi.unstubAllGlobals();
+});
+
+const repaired = (overrides: Partial<FindingResponse> = {}) =>
+  aFinding({
+    state: 'repaired',
+    version: 4,
+    verification: { repairedOn: '2026-11-10', surveyCount: 0, comparison: null },
+    can: { assign: false, monitor: false, dismiss: false, reopen: true, verify: true },
+    ...overrides,
+  });
+const reading = {
+  surveyedOn: '2026-11-02',
+  verdict: 'likely' as const,
+  score: 0.82,
+  runLength: 6,
+  runMmPerSRms: 1.9,
+  overallMmPerSRms: 4.6,
+  speedRpm: 1476,
+};
+
+describe('a repaired finding', () => {
+  it('says that the survey after the repair is waited for', async () => {
+    renderPage('/sites/1/findings/3', { ...answers, [`GET ${path}`]: repaired() });
+    await screen.findByText(/No survey has measured this bearing position since/);
+  });
+
+  it('shows the numbers before and after, what was measured otherwise, and the proposal', async () => {
+    const comparison = {
+      surveyedOn: '2026-12-01',
+      proposal: 'measure again' as const,
+      sentence: 'Survey of 2026-12-01: this can’t tell yet.',
+      points: [
+        {
+          pointLabel: 'P-101/DE/V',
+          outcome: 'The signs are gone',
+          sentence: 'The signs are gone: …',
+          before: reading,
+          after: { ...reading, surveyedOn: '2026-12-01', score: 0.05, speedRpm: 990 },
+        },
+        {
+          pointLabel: 'P-101/DE/H',
+          outcome: 'Not measured',
+          sentence: 'Not measured.',
+          before: reading,
+          after: null,
+        },
+      ],
+      conditions: ['At P-101/DE/V the shaft ran at 990 r/min instead of 1476 r/min.'],
+    };
+    renderPage('/sites/1/findings/3', {
+      ...answers,
+      [`GET ${path}`]: repaired({
+        verification: { repairedOn: '2026-11-10', surveyCount: 1, comparison },
+      }),
+    });
+    await screen.findByText('Proposed: measure again before deciding.');
+    const row = screen.getByRole('row', { name: /^Score/ });
+    expect(row.textContent).toBe('Score0.820.05');
+    screen.getByText('At P-101/DE/V the shaft ran at 990 r/min instead of 1476 r/min.');
+    screen.getByText('Not measured.');
+  });
+
+  it('tells the second lead what the first did, and keeps the reason typed', async () => {
+    renderPage('/sites/1/findings/3', {
+      ...answers,
+      [`GET ${path}`]: repaired(),
+      [`POST ${path}/decision`]: () =>
+        refusal(409, 'conflict', 'It is now open. Lena Lead reopened it: “Still loud.”'),
+    });
+    const user = userEvent.setup();
+    await user.click(await screen.findByRole('button', { name: 'Verify' }));
+    const dialog = await screen.findByRole('dialog');
+    await user.type(within(dialog).getByLabelText('Reason'), 'All quiet.');
+    await user.click(within(dialog).getByRole('button', { name: 'Verify' }));
+    await within(dialog).findByText(/Lena Lead reopened it: “Still loud.”/);
+    expect(within(dialog).getByLabelText<HTMLTextAreaElement>('Reason').value).toBe('All quiet.');
+  });
 });
 
 describe('a finding', () => {
