@@ -187,8 +187,8 @@ export function compose(
   });
   const siteExports = new SiteExportService(database, {
     findings: async (principal, query) =>
-      (await findings.list(principal, query)).rows.map(({ finding, links }) =>
-        presentFindingItem(finding, links),
+      (await findings.list(principal, query)).rows.map(({ finding, links, monitoring }) =>
+        presentFindingItem(finding, links, monitoring),
       ),
     inspections: async (principal, query) => (await inspections.list(principal, query)).items,
     checkSurvey: surveys.progress.bind(surveys),

@@ -24,11 +24,25 @@ export const findingListQuery = listQuery(['openedAt', 'state', 'machineTag', 's
   state: findingState.optional(),
   /** Leaves out what is verified or dismissed. */
   active: z.stringbool().optional(),
+  /** Only monitored ones on which the lead has to decide again. */
+  overdue: z.stringbool().optional(),
 });
 export type FindingListQuery = z.infer<typeof findingListQuery>;
 
 export const findingActions = ['assign', 'monitor', 'dismiss', 'reopen', 'verify'] as const;
 export type FindingAction = (typeof findingActions)[number];
+
+/** How long a finding is monitored; without day and count it has no end. */
+export const monitoring = z.object({
+  since: z.string().nullable(),
+  untilOn: z.string().nullable(),
+  surveyLimit: z.int().nullable(),
+  /** Surveys of the position after the day it began. */
+  surveyCount: z.int(),
+  /** The day has passed or the surveys are there: the lead decides again. */
+  overdue: z.boolean(),
+});
+export type MonitoringResponse = z.infer<typeof monitoring>;
 
 export const findingListItem = z.object({
   id: z.int(),
@@ -46,6 +60,8 @@ export const findingListItem = z.object({
   kind: z.string().nullable(),
   orders: z.array(orderCell),
   screeningCount: z.int(),
+  /** Null unless it is being monitored. */
+  monitoring: monitoring.nullable(),
 });
 export type FindingListItem = z.infer<typeof findingListItem>;
 export const findingListResponse = listResponse(findingListItem);
@@ -101,11 +117,34 @@ export const findingResponse = findingListItem.extend({
 export type FindingResponse = z.infer<typeof findingResponse>;
 
 /** The lead's decision on a finding; assigning an inspection has its own request. */
-export const decideFindingRequest = z.strictObject({
-  action: z.enum(['monitor', 'dismiss', 'reopen', 'verify']),
-  reason: paragraph(2000).min(1, 'Give a reason.'),
-  version: z.int().min(1),
-});
+export const decideFindingRequest = z
+  .strictObject({
+    action: z.enum(['monitor', 'dismiss', 'reopen', 'verify']),
+    reason: paragraph(2000).min(1, 'Give a reason.'),
+    version: z.int().min(1),
+    /** Only with `monitor`: the day, the number of surveys or both, whichever comes first. */
+    monitorUntilOn: isoDate.nullish(),
+    monitorSurveys: z
+      .int('Enter a whole number.')
+      .min(1, 'At least 1.')
+      .max(24, 'At most 24.')
+      .nullish(),
+  })
+  .refine(
+    ({ action, monitorUntilOn, monitorSurveys }) =>
+      action !== 'monitor' || monitorUntilOn != null || monitorSurveys != null,
+    {
+      path: ['monitorUntilOn'],
+      message: 'Say until which day or for how many surveys.',
+      // The other faults of the form are told in the same go.
+      when: () => true,
+    },
+  )
+  .refine(
+    ({ action, monitorUntilOn, monitorSurveys }) =>
+      action === 'monitor' || (monitorUntilOn == null && monitorSurveys == null),
+    { path: ['monitorUntilOn'], message: 'Only monitoring has an end.' },
+  );
 export type DecideFindingRequest = z.infer<typeof decideFindingRequest>;
 
 export const assignInspectionRequest = z

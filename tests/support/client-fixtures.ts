@@ -98,6 +98,7 @@ export const aFinding = (overrides: Partial<FindingResponse> = {}): FindingRespo
   kind: 'seat',
   orders: [],
   screeningCount: 1,
+  monitoring: null,
   bearingPositionId: 4,
   ownerUserId: 9,
   version: 1,

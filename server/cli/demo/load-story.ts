@@ -115,6 +115,7 @@ export async function monitorFan(
   await services.findings.decide(lead, finding.id, {
     action: 'monitor',
     reason: 'Can run until the stop of 12 January; measure every month and open the bearing then.',
+    monitorUntilOn: '2027-01-12',
     version: finding.version,
   });
 }

@@ -34,6 +34,18 @@ export class Finding {
   @Column({ type: 'int', default: 1 })
   version: number;
 
+  /** Null unless it is being monitored. */
+  @Column({ type: 'datetime', precision: 3, nullable: true })
+  monitoredSince: Date | null;
+
+  /** The day by which the lead decides again. */
+  @Column({ type: 'date', nullable: true })
+  monitorUntilOn: string | null;
+
+  /** After how many surveys of the position the lead decides again. */
+  @Column({ type: 'int', nullable: true })
+  monitorSurveys: number | null;
+
   @ManyToOne(() => Site, { onDelete: 'RESTRICT' })
   @JoinColumn({ name: 'site_id' })
   site?: Relation<Site>;

@@ -8,6 +8,7 @@ import { AddSeatDepth1796133730464 } from './1796133730464-add-seat-depth.ts';
 import { IndexMachineList1796134294616 } from './1796134294616-index-machine-list.ts';
 import { CreateMailOptOuts1796135460755 } from './1796135460755-create-mail-opt-outs.ts';
 import { TellMailKinds1796135460756 } from './1796135460756-tell-mail-kinds.ts';
+import { LimitMonitoring1796137211959 } from './1796137211959-limit-monitoring.ts';
 
 /** Every migration, oldest first. */
 export const migrations = [
@@ -21,4 +22,5 @@ export const migrations = [
   IndexMachineList1796134294616,
   CreateMailOptOuts1796135460755,
   TellMailKinds1796135460756,
+  LimitMonitoring1796137211959,
 ];

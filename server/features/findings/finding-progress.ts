@@ -3,6 +3,7 @@ import { recordActivity } from '#server/db/activity.repository.ts';
 import type { Db } from '#server/db/database.ts';
 import type { Finding } from '#server/db/entities/finding.entity.ts';
 import { AppError, notFound } from '#server/http/app-error.ts';
+import type { FindingState } from '#shared/contracts/finding.ts';
 import {
   finishedFindingStates,
   nextFindingState,
@@ -17,6 +18,8 @@ export interface FindingStep {
   reason: string;
   /** The version the person decided on; absent where an inspection's own version guards the step. */
   version?: number;
+  /** How long it is monitored, where that is the step. */
+  monitor?: { untilOn: string | null; surveys: number | null };
 }
 
 const eventWords: Readonly<Record<FindingEvent, string>> = {
@@ -53,7 +56,7 @@ export async function moveFinding(db: Db, step: FindingStep, now: Date): Promise
   if (finishedFindingStates.includes(finding.state)) {
     await refuseSecondActive(repository, finding);
   }
-  await repository.write(finding, next);
+  await repository.write(finding, next, monitoringFields(step, next, now));
   await repository.addStateChange({
     findingId,
     fromState: finding.state,
@@ -70,6 +73,15 @@ export async function moveFinding(db: Db, step: FindingStep, now: Date): Promise
     { from: finding.state, to: next },
     now,
   );
+}
+
+/** An inspection that found the fit sound leaves the next survey the last word. */
+function monitoringFields({ monitor }: FindingStep, next: FindingState, now: Date) {
+  if (next !== 'monitoring') {
+    return { monitoredSince: null, monitorUntilOn: null, monitorSurveys: null };
+  }
+  const { untilOn, surveys } = monitor ?? { untilOn: null, surveys: 1 };
+  return { monitoredSince: now, monitorUntilOn: untilOn, monitorSurveys: surveys };
 }
 
 /** One position has one active finding: new evidence must know where it belongs. */

@@ -29,7 +29,7 @@ interface Transition {
 
 const transitions: Readonly<Record<FindingEvent, Transition>> = {
   assign: { from: ['open', 'monitoring'], to: 'inspecting', role: 'lead' },
-  monitor: { from: ['open'], to: 'monitoring', role: 'lead' },
+  monitor: { from: ['open', 'monitoring'], to: 'monitoring', role: 'lead' },
   dismiss: { from: ['open', 'monitoring'], to: 'dismissed', role: 'lead' },
   reopen: { from: ['monitoring', 'repaired', 'verified', 'dismissed'], to: 'open', role: 'lead' },
   verify: { from: ['repaired'], to: 'verified', role: 'lead' },

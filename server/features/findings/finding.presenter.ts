@@ -9,6 +9,7 @@ import {
   type FindingListItem,
   type FindingResponse,
   type FindingScreeningResponse,
+  type MonitoringResponse,
   type StateChangeResponse,
 } from '#shared/contracts/finding.ts';
 import type { InspectionListItem } from '#shared/contracts/inspection.ts';
@@ -31,6 +32,7 @@ export function clearestScreening(links: readonly FindingScreening[]): Screening
 export function presentFindingItem(
   finding: Finding,
   links: readonly FindingScreening[],
+  monitoring: MonitoringResponse | null,
 ): FindingListItem {
   const clearest = clearestScreening(links);
   const position = finding.bearingPosition;
@@ -50,6 +52,7 @@ export function presentFindingItem(
     kind: clearest?.result.kind ?? null,
     orders: clearest === null ? [] : orderCellsOf(clearest.result.orders),
     screeningCount: links.length,
+    monitoring,
   };
 }
 
@@ -98,6 +101,7 @@ export interface FindingWhole {
   seats: SeatAssessmentsResponse;
   inspections: InspectionListItem[];
   verification: FindingVerification | null;
+  monitoring: MonitoringResponse | null;
 }
 
 export function presentFinding(principal: SitePrincipal, whole: FindingWhole): FindingResponse {
@@ -105,7 +109,7 @@ export function presentFinding(principal: SitePrincipal, whole: FindingWhole): F
   const can = (action: FindingAction) =>
     nextFindingState(finding.state, action, principal.role) !== null;
   return {
-    ...presentFindingItem(finding, links),
+    ...presentFindingItem(finding, links, whole.monitoring),
     bearingPositionId: finding.bearingPositionId,
     ownerUserId: finding.bearingPosition?.machine?.ownerUserId ?? null,
     version: finding.version,

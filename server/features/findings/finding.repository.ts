@@ -16,6 +16,14 @@ const sortColumns: Record<FindingListQuery['sort'], string> = {
     '(SELECT MAX(s.score) FROM finding_screening fs JOIN screening s ON s.id = fs.screening_id WHERE fs.finding_id = finding.id)',
 };
 
+/** Surveys with a screening of the finding's position, dated after the day monitoring began. */
+const surveyCountSql = `(SELECT COUNT(DISTINCT sv.id)
+  FROM measuring_point mp
+  JOIN waveform wf ON wf.measuring_point_id = mp.id AND wf.screening_state = 'done'
+  JOIN survey sv ON sv.id = wf.survey_id
+  WHERE mp.bearing_position_id = finding.bearing_position_id
+    AND sv.surveyed_on > DATE(finding.monitored_since))`;
+
 /** The last thing done with a finding, as its activity record tells it. */
 export interface FindingChange {
   /** The entry's action without "finding.". */
@@ -35,7 +43,7 @@ export class FindingRepository {
   }
 
   /** One page of a site's findings; `ownerUserId` narrows it to an owner's machines. */
-  async list(siteId: number, ownerUserId: number | null, query: FindingListQuery) {
+  async list(siteId: number, ownerUserId: number | null, query: FindingListQuery, today: string) {
     const found = this.db
       .createQueryBuilder(Finding, 'finding')
       .innerJoinAndSelect('finding.bearingPosition', 'position')
@@ -48,6 +56,16 @@ export class FindingRepository {
     if (query.state !== undefined) found.andWhere('finding.state = :state', { state: query.state });
     if (query.active === true) {
       found.andWhere('finding.state NOT IN (:...finished)', { finished: finishedFindingStates });
+    }
+    if (query.overdue === true) {
+      found
+        .andWhere("finding.state = 'monitoring'")
+        .andWhere(
+          `(finding.monitor_until_on < :today OR ${surveyCountSql} >= finding.monitor_surveys)`,
+          {
+            today,
+          },
+        );
     }
     if (query.search) {
       found.andWhere(
@@ -65,6 +83,19 @@ export class FindingRepository {
       .offset((query.page - 1) * query.pageSize)
       .getMany();
     return { rows, total };
+  }
+
+  /** Surveys that measured the position of each monitored finding since it is monitored. */
+  async surveyCounts(findingIds: number[]): Promise<Map<number, number>> {
+    if (findingIds.length === 0) return new Map();
+    const rows = await this.db
+      .createQueryBuilder(Finding, 'finding')
+      .select('finding.id', 'id')
+      .addSelect(surveyCountSql, 'count')
+      .where('finding.id IN (:...findingIds)', { findingIds })
+      .andWhere("finding.state = 'monitoring'")
+      .getRawMany<{ id: number; count: string }>();
+    return new Map(rows.map(({ id, count }) => [id, Number(count)]));
   }
 
   find(siteId: number, id: number): Promise<Finding | null> {
@@ -174,8 +205,16 @@ export class FindingRepository {
   }
 
   /** Writes state and version of a finding that the caller holds. */
-  async write(finding: Finding, state: FindingState): Promise<void> {
-    await this.db.update(Finding, { id: finding.id }, { state, version: finding.version + 1 });
+  async write(
+    finding: Finding,
+    state: FindingState,
+    monitoring: Partial<Pick<Finding, 'monitoredSince' | 'monitorUntilOn' | 'monitorSurveys'>> = {},
+  ): Promise<void> {
+    await this.db.update(
+      Finding,
+      { id: finding.id },
+      { ...monitoring, state, version: finding.version + 1 },
+    );
   }
 
   async addStateChange(

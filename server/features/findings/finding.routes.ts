@@ -24,7 +24,9 @@ export const findingRoutes = (findings: FindingService) => [
     handle: async ({ principal, query }) => {
       const { rows, total } = await findings.list(principal, query);
       return {
-        items: rows.map(({ finding, links }) => presentFindingItem(finding, links)),
+        items: rows.map(({ finding, links, monitoring }) =>
+          presentFindingItem(finding, links, monitoring),
+        ),
         total,
         page: query.page,
         pageSize: query.pageSize,

@@ -3,10 +3,11 @@ import type { Database } from '#server/db/database.ts';
 import type { FindingScreening } from '#server/db/entities/finding-screening.entity.ts';
 import type { Screening } from '#server/db/entities/screening.entity.ts';
 import type { Finding } from '#server/db/entities/finding.entity.ts';
-import { notFound } from '#server/http/app-error.ts';
+import { AppError, notFound } from '#server/http/app-error.ts';
 import type { DecideFindingRequest, FindingListQuery } from '#shared/contracts/finding.ts';
 import type { InspectionListItem } from '#shared/contracts/inspection.ts';
 import type { SeatAssessmentsResponse } from '#shared/contracts/seat-assessment.ts';
+import { dayPastEverywhere, monitoringOf } from './finding-monitoring.ts';
 import { moveFinding } from './finding-progress.ts';
 import { verifiedStates, verifyFinding } from './finding-verification.ts';
 import { maySeeFinding } from './finding.policy.ts';
@@ -43,8 +44,13 @@ export class FindingService {
   async list(principal: SitePrincipal, query: FindingListQuery) {
     const repository = new FindingRepository(this.database.db);
     const ownerUserId = principal.role === 'owner' ? principal.userId : null;
-    const { rows, total } = await repository.list(principal.siteId, ownerUserId, query);
-    const links = await repository.screeningsOf(rows.map((finding) => finding.id));
+    const today = dayPastEverywhere(this.now());
+    const { rows, total } = await repository.list(principal.siteId, ownerUserId, query, today);
+    const ids = rows.map((finding) => finding.id);
+    const [links, surveyCounts] = await Promise.all([
+      repository.screeningsOf(ids),
+      repository.surveyCounts(ids),
+    ]);
     const linksOf = new Map<number, FindingScreening[]>();
     for (const link of links) {
       const known = linksOf.get(link.findingId);
@@ -52,7 +58,11 @@ export class FindingService {
       else linksOf.set(link.findingId, [link]);
     }
     return {
-      rows: rows.map((finding) => ({ finding, links: linksOf.get(finding.id) ?? [] })),
+      rows: rows.map((finding) => ({
+        finding,
+        links: linksOf.get(finding.id) ?? [],
+        monitoring: monitoringOf(finding, surveyCounts.get(finding.id) ?? 0, today),
+      })),
       total,
     };
   }
@@ -60,14 +70,20 @@ export class FindingService {
   async whole(principal: SitePrincipal, findingId: number): Promise<FindingWhole> {
     const finding = await this.seen(principal, findingId);
     const repository = new FindingRepository(this.database.db);
-    const [links, history, inspections] = await Promise.all([
+    const [links, history, inspections, surveyCounts] = await Promise.all([
       repository.screeningsOf([findingId]),
       repository.historyOf(findingId),
       this.neighbours.inspectionsOf(findingId),
+      repository.surveyCounts([findingId]),
     ]);
     const seats = await this.neighbours.assessSeats(finding.bearingPositionId, screeningsOf(links));
     const verification = await this.verificationOf(finding, screeningsOf(links));
-    return { finding, links, history, seats, inspections, verification };
+    const monitoring = monitoringOf(
+      finding,
+      surveyCounts.get(findingId) ?? 0,
+      dayPastEverywhere(this.now()),
+    );
+    return { finding, links, history, seats, inspections, verification, monitoring };
   }
 
   private async verificationOf(finding: Finding, linked: readonly Screening[]) {
@@ -87,6 +103,12 @@ export class FindingService {
   ): Promise<FindingWhole> {
     await this.seen(principal, findingId);
     const now = this.now();
+    const { monitorUntilOn = null, monitorSurveys = null } = request;
+    if (monitorUntilOn !== null && monitorUntilOn < dayPastEverywhere(now)) {
+      throw new AppError('validation', 'The day lies in the past.', {
+        fields: [{ path: 'monitorUntilOn', message: 'The day lies in the past.' }],
+      });
+    }
     await this.database.transaction((db) =>
       moveFinding(
         db,
@@ -96,6 +118,7 @@ export class FindingService {
           event: request.action,
           reason: request.reason,
           version: request.version,
+          monitor: { untilOn: monitorUntilOn, surveys: monitorSurveys },
         },
         now,
       ),

@@ -11,6 +11,7 @@ import { FindingHistory } from '#src/features/findings/components/finding-histor
 import { FindingInspections } from '#src/features/findings/components/finding-inspections.tsx';
 import { FindingScreenings } from '#src/features/findings/components/finding-screenings.tsx';
 import { FindingVerification } from '#src/features/findings/components/finding-verification.tsx';
+import { MonitoringEnd } from '#src/features/findings/components/monitoring-end.tsx';
 import { SeatsView } from '#src/features/seats/components/seats-view.tsx';
 import { formatDay } from '#src/lib/dates.ts';
 import { useSite } from '../site-context.ts';
@@ -49,6 +50,14 @@ export function FindingPage() {
             ),
           },
           { label: 'Clearest sign', value: <VerdictMark verdict={finding.verdict} /> },
+          ...(finding.monitoring === null
+            ? []
+            : [
+                {
+                  label: 'Monitored',
+                  value: <MonitoringEnd monitoring={finding.monitoring} />,
+                },
+              ]),
           { label: 'Opened', value: formatDay(finding.openedAt) },
           { label: 'Owner', value: finding.ownerName ?? 'nobody' },
         ]}

@@ -20,8 +20,11 @@ import { useSite } from '../site-context.ts';
 
 const stateOptions = [
   { value: 'active', label: 'Not done with' },
+  { value: 'overdue', label: 'Monitored, decide again' },
   ...findingStates.map((state) => ({ value: state, label: findingStateWords[state] })),
 ];
+
+const isFindingState = (value: string) => findingStates.some((state) => state === value);
 
 export const findingsLoader =
   (queryClient: QueryClient) =>
@@ -40,7 +43,7 @@ export function FindingsPage() {
     placeholderData: keepPreviousData,
     throwOnError: true,
   });
-  const isFiltered = Boolean(query.search ?? query.state ?? query.active);
+  const isFiltered = Boolean(query.search ?? query.state ?? query.active ?? query.overdue);
   return (
     <>
       <PageHeader
@@ -53,6 +56,7 @@ export function FindingsPage() {
                 search: query.search,
                 state: query.state,
                 active: query.active,
+                overdue: query.overdue,
               })}
               fileName="findings.csv"
             >
@@ -73,14 +77,14 @@ export function FindingsPage() {
           aria-label="State"
           className="w-48"
           placeholder="Every state"
-          value={query.active ? 'active' : (query.state ?? '')}
+          value={query.active ? 'active' : query.overdue ? 'overdue' : (query.state ?? '')}
           options={stateOptions}
           onChange={({ target }) =>
-            set(
-              target.value === 'active'
-                ? { active: 'true', state: undefined }
-                : { active: undefined, state: target.value },
-            )
+            set({
+              active: target.value === 'active' ? 'true' : undefined,
+              overdue: target.value === 'overdue' ? 'true' : undefined,
+              state: isFindingState(target.value) ? target.value : undefined,
+            })
           }
         />
       </div>

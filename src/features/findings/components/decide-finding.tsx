@@ -2,10 +2,13 @@ import { zodResolver } from '@hookform/resolvers/zod';
 import { useForm } from 'react-hook-form';
 import { decideFindingRequest, type DecideFindingRequest } from '#shared/contracts/finding.ts';
 import { Button } from '#src/components/button.tsx';
+import { DateInput } from '#src/components/date-input.tsx';
 import { Dialog } from '#src/components/dialog.tsx';
 import { Field } from '#src/components/field.tsx';
+import { NumberInput } from '#src/components/number-input.tsx';
 import { Notice } from '#src/components/notice.tsx';
 import { Textarea } from '#src/components/textarea.tsx';
+import { asNumber, asTextOrNull } from '#src/lib/form-values.ts';
 import type { ApiError } from '#src/lib/api-error.ts';
 
 export type FindingDecision = DecideFindingRequest['action'];
@@ -16,7 +19,7 @@ export const decisionWords: Readonly<
   monitor: {
     button: 'Monitor',
     title: 'Keep this finding under monitoring',
-    hint: 'What should the next survey show, and by when is it decided again?',
+    hint: 'Why can it wait, and what should the next surveys show?',
   },
   dismiss: {
     button: 'Dismiss',
@@ -54,7 +57,12 @@ export function DecideFinding({
   const words = decisionWords[action];
   const { register, handleSubmit, formState } = useForm({
     resolver: zodResolver(decideFindingRequest),
-    defaultValues: { action, version, reason: '' },
+    defaultValues: {
+      action,
+      version,
+      reason: '',
+      ...(action === 'monitor' ? { monitorUntilOn: null, monitorSurveys: null } : {}),
+    },
   });
   return (
     <Dialog
@@ -78,6 +86,26 @@ export function DecideFinding({
         <Field label="Reason" hint={words.hint} error={formState.errors.reason?.message}>
           <Textarea rows={4} {...register('reason')} />
         </Field>
+        {action === 'monitor' && (
+          <div className="grid gap-4 phone:grid-cols-2">
+            <Field
+              label="Until"
+              optional
+              hint="The day by which you decide again."
+              error={formState.errors.monitorUntilOn?.message}
+            >
+              <DateInput {...register('monitorUntilOn', asTextOrNull)} />
+            </Field>
+            <Field
+              label="Or for so many surveys"
+              optional
+              hint="Whichever comes first ends it."
+              error={formState.errors.monitorSurveys?.message}
+            >
+              <NumberInput whole {...register('monitorSurveys', asNumber)} />
+            </Field>
+          </div>
+        )}
         <div className="flex gap-2">
           <Button type="submit" variant="primary" busy={saving} busyLabel="Saving…">
             {words.button}

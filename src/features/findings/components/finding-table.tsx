@@ -8,6 +8,7 @@ import { VerdictMark } from '#src/components/verdict-mark.tsx';
 import { FindingStateMark } from '#src/components/work-state-mark.tsx';
 import { formatDay } from '#src/lib/dates.ts';
 import { formatFixed } from '#src/lib/numbers.ts';
+import { MonitoringEnd } from './monitoring-end.tsx';
 
 const columns = (siteId: number): DataTableColumn<FindingListItem>[] => [
   {
@@ -25,7 +26,16 @@ const columns = (siteId: number): DataTableColumn<FindingListItem>[] => [
     id: 'state',
     header: 'State',
     sortable: true,
-    cell: (row) => <FindingStateMark state={row.state} />,
+    cell: (row) => (
+      <>
+        <FindingStateMark state={row.state} />
+        {row.monitoring !== null && (
+          <div className="text-xs text-ink-soft">
+            <MonitoringEnd monitoring={row.monitoring} />
+          </div>
+        )}
+      </>
+    ),
   },
   { id: 'verdict', header: 'Clearest sign', cell: (row) => <VerdictMark verdict={row.verdict} /> },
   {

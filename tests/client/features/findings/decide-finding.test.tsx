@@ -146,6 +146,54 @@ describe('a finding', () => {
     );
   });
 
+  it('is monitored until a day or for a number of surveys, never without an end', async () => {
+    const monitoring = {
+      since: '2026-12-01T08:00:00.000Z',
+      untilOn: null,
+      surveyLimit: 2,
+      surveyCount: 0,
+      overdue: false,
+    };
+    const { sent } = renderPage('/sites/1/findings/3', {
+      ...answers,
+      [`POST ${path}/decision`]: aFinding({ state: 'monitoring', version: 2, monitoring }),
+    });
+    const user = userEvent.setup();
+    await user.click(await screen.findByRole('button', { name: 'Monitor' }));
+    const dialog = within(await screen.findByRole('dialog'));
+    await user.type(dialog.getByLabelText('Reason'), 'Low level.');
+    await user.click(dialog.getByRole('button', { name: 'Monitor' }));
+    await dialog.findByText('Say until which day or for how many surveys.');
+    expect(sent).toEqual([]);
+    await user.type(dialog.getByLabelText(/so many surveys/), '2');
+    await user.click(dialog.getByRole('button', { name: 'Monitor' }));
+    await waitFor(() =>
+      expect(sent[0]?.body).toEqual({
+        action: 'monitor',
+        reason: 'Low level.',
+        version: 1,
+        monitorUntilOn: null,
+        monitorSurveys: 2,
+      }),
+    );
+  });
+
+  it('says that a monitored finding is to be decided again', async () => {
+    const monitoring = {
+      since: '2026-11-03T08:00:00.000Z',
+      untilOn: '2026-11-30',
+      surveyLimit: 3,
+      surveyCount: 1,
+      overdue: true,
+    };
+    renderPage('/sites/1/findings/3', {
+      ...answers,
+      [`GET ${path}`]: aFinding({ state: 'monitoring', monitoring }),
+    });
+    await screen.findByText(/until 30 Nov 2026, 1 of 3 surveys/);
+    screen.getByText(/decide again/);
+  });
+
   it('is assigned to the owner of the machine unless another is chosen', async () => {
     const { sent } = renderPage('/sites/1/findings/3', {
       ...answers,

@@ -8,6 +8,7 @@ const allowed: Readonly<Record<string, string>> = {
   'open + assign by lead': 'inspecting',
   'monitoring + assign by lead': 'inspecting',
   'open + monitor by lead': 'monitoring',
+  'monitoring + monitor by lead': 'monitoring',
   'open + dismiss by lead': 'dismissed',
   'monitoring + dismiss by lead': 'dismissed',
   'monitoring + reopen by lead': 'open',

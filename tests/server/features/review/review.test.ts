@@ -231,6 +231,7 @@ describe('taking a decision back', () => {
     };
     await as(plant.lead).post(plant.path(`/findings/${findingId}/decision`), {
       action: 'monitor',
+      monitorSurveys: 1,
       reason: 'Until the next survey.',
       version: 1,
     });
