@@ -22,6 +22,7 @@ const pages: readonly { path: string; label: string; roles: readonly SiteRole[] 
   { path: 'inspections', label: 'Inspections', roles: ['analyst', 'lead', 'owner'] },
   { path: 'machines', label: 'Machines', roles: ['analyst', 'lead', 'owner'] },
   { path: 'routes', label: 'Routes', roles: ['analyst', 'lead'] },
+  { path: 'fit-workbench', label: 'Fit workbench', roles: ['analyst', 'lead', 'owner'] },
 ];
 
 /** The address of the sign-in page that leads back to where one was going. */

@@ -35,6 +35,10 @@ const pages: Readonly<Record<string, Load>> = {
     const { machineEditLoader, MachineEditPage } = await import('./routes/machine-edit.tsx');
     return { loader: machineEditLoader, Component: MachineEditPage };
   },
+  'fit-workbench': async () => {
+    const { FitWorkbenchPage } = await import('./routes/fit-workbench.tsx');
+    return { Component: FitWorkbenchPage };
+  },
   review: async () => {
     const { reviewLoader, ReviewPage } = await import('./routes/review.tsx');
     return { loader: reviewLoader, Component: ReviewPage };

@@ -1,6 +1,6 @@
 import { useSuspenseQuery, type QueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
-import { Link, useParams, type LoaderFunctionArgs } from 'react-router-dom';
+import { Link, useLocation, useParams, type LoaderFunctionArgs } from 'react-router-dom';
 import { findingState } from '#shared/contracts/finding.ts';
 import { Button } from '#src/components/button.tsx';
 import { ButtonLink } from '#src/components/button-link.tsx';
@@ -9,6 +9,7 @@ import { EmptyState } from '#src/components/empty-state.tsx';
 import { PageHeader } from '#src/components/page-header.tsx';
 import { Panel } from '#src/components/panel.tsx';
 import { FindingStateMark } from '#src/components/work-state-mark.tsx';
+import type { PreparedFitRecord } from '#src/features/register/components/copy-fit-dialog.tsx';
 import { machineQuery, useCreatePosition } from '#src/features/register/api/machines.ts';
 import { MachineFacts } from '#src/features/register/components/machine-facts.tsx';
 import { PositionForm } from '#src/features/register/components/position-form.tsx';
@@ -35,6 +36,8 @@ export function MachinePage() {
   const create = useCreatePosition(siteId, machineId);
   const [adding, setAdding] = useState(false);
   const shafts = shaftsOf(machine);
+  const { state } = useLocation() as { state: { fitRecord?: PreparedFitRecord } | null };
+  const prepared = state?.fitRecord;
   const addButton = machine.can.edit && (
     <Button icon="plus" onClick={() => setAdding(true)}>
       Bearing position
@@ -99,6 +102,7 @@ export function MachinePage() {
             position={position}
             shafts={shafts}
             mayEdit={machine.can.edit}
+            prepared={prepared?.positionId === position.id ? prepared.values : undefined}
             seats={<PositionSeats siteId={siteId} positionId={position.id} />}
           />
         ))}

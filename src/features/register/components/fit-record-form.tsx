@@ -48,16 +48,22 @@ const unitWords = { mm: 'Millimetres', in: 'Inches' } as const;
 /** What is known of one seat on one date. Records are added, never overwritten. */
 export function FitRecordForm({
   position,
+  initial,
   saving,
   failure,
   onSave,
 }: {
   position: RecordedPosition;
+  /** Values the form begins with. */
+  initial?: Partial<AddFitRecordRequest>;
   saving: boolean;
   failure: ApiError | null;
   onSave: (record: AddFitRecordRequest) => void;
 }) {
-  const form = useForm({ resolver: fitRecordResolver(position), defaultValues: fresh });
+  const form = useForm({
+    resolver: fitRecordResolver(position),
+    defaultValues: { ...fresh, ...initial },
+  });
   const { register, formState, watch } = form;
   const errors: FieldErrors = formState.errors;
   const error = (name: keyof AddFitRecordRequest) => faultAt(name, errors, failure);

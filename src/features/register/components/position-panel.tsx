@@ -14,6 +14,7 @@ import { useToast } from '#src/components/toast.tsx';
 import { toApiError } from '#src/lib/api-error.ts';
 import { formatEntered } from '#src/lib/numbers.ts';
 import { useAddFitRecord, useAddPoint, useUpdatePosition } from '../api/machines.ts';
+import type { PreparedFitRecord } from './copy-fit-dialog.tsx';
 import { FitRecordForm } from './fit-record-form.tsx';
 import { FitRecordTable } from './fit-record-table.tsx';
 import { capital } from './machine-words.ts';
@@ -77,6 +78,7 @@ export function PositionPanel({
   position,
   shafts,
   mayEdit,
+  prepared,
   seats,
 }: {
   siteId: number;
@@ -84,9 +86,13 @@ export function PositionPanel({
   /** Of the whole machine. */
   shafts: readonly Shaft[];
   mayEdit: boolean;
+  /** Opens the fit record form at once, with these values. */
+  prepared?: PreparedFitRecord['values'] | undefined;
   seats: ReactNode;
 }) {
-  const [open, setOpen] = useState<'position' | 'fit-record' | null>(null);
+  const [open, setOpen] = useState<'position' | 'fit-record' | null>(
+    prepared !== undefined && mayEdit ? 'fit-record' : null,
+  );
   const notify = useToast();
   const update = useUpdatePosition(siteId, position.id);
   const addPoint = useAddPoint(siteId, position.id);
@@ -234,6 +240,7 @@ export function PositionPanel({
       >
         <FitRecordForm
           position={position}
+          initial={prepared}
           saving={addRecord.isPending}
           failure={addRecord.isError ? toApiError(addRecord.error) : null}
           onSave={(body) => addRecord.mutate(body, { onSuccess: close })}

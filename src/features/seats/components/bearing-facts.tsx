@@ -4,6 +4,7 @@ import { Figure } from '#src/components/figure.tsx';
 import { Term } from '#src/components/term.tsx';
 import { formatFixed } from '#src/lib/numbers.ts';
 
+type BearingAssessment = Pick<SeatAssessmentsResponse, 'internalClearanceUm' | 'mounting'>;
 type Clearance = NonNullable<SeatAssessmentsResponse['internalClearanceUm']>;
 
 const spread = (range: Clearance['mounted']) => (
@@ -13,7 +14,7 @@ const spread = (range: Clearance['mounted']) => (
   />
 );
 
-function factsOf({ internalClearanceUm: clearance, mounting }: SeatAssessmentsResponse) {
+function factsOf({ internalClearanceUm: clearance, mounting }: BearingAssessment) {
   const facts: Description[] = [];
   if (clearance !== null) {
     facts.push(
@@ -44,7 +45,7 @@ function factsOf({ internalClearanceUm: clearance, mounting }: SeatAssessmentsRe
 }
 
 /** What the fits of both seats leave of the bearing's clearance, and how it is mounted. */
-export function BearingFacts({ assessment }: { assessment: SeatAssessmentsResponse }) {
+export function BearingFacts({ assessment }: { assessment: BearingAssessment }) {
   const facts = factsOf(assessment);
   if (facts.length === 0) return null;
   return (

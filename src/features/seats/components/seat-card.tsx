@@ -8,7 +8,14 @@ import { formatEntered, formatFixed } from '#src/lib/numbers.ts';
 import { limitsMmText, percentText, seatPartsWords, seatWords, verdictText } from './seat-words.ts';
 
 /** One seat: its gauge, what its records mean, and its place among the suspects. */
-export function SeatCard({ seat }: { seat: SeatAssessment }) {
+export function SeatCard({
+  seat,
+  tried = false,
+}: {
+  seat: SeatAssessment;
+  /** Tried at the workbench: there is no record behind it. */
+  tried?: boolean;
+}) {
   const title = seatWords[seat.seat];
   return (
     <article aria-label={title} className="border border-hairline bg-sheet">
@@ -37,7 +44,10 @@ export function SeatCard({ seat }: { seat: SeatAssessment }) {
             }}
           />
         )}
-        <DescriptionList columns={2} items={factsOf(seat)} />
+        <DescriptionList
+          columns={2}
+          items={[...factsOf(seat), ...(tried ? [] : recordFacts(seat))]}
+        />
         {seat.recommendationReason !== null && seat.recommendationReason !== seat.sentence && (
           <p className="max-w-prose text-sm text-ink-soft">{seat.recommendationReason}</p>
         )}
@@ -67,7 +77,7 @@ const entered = (value: number | null, unit: string) => (
 
 /** What a cylindrical seat is judged by. */
 const classFacts = (seat: SeatAssessment): Description[] => [
-  { label: 'Class on record', value: <Figure value={seat.toleranceClass} /> },
+  { label: 'Class', value: <Figure value={seat.toleranceClass} /> },
   { label: 'Limits at 20 °C', value: <Figure value={limitsMmText(seat)} unit="mm" /> },
   { label: 'Class the load asks for', value: <Figure value={seat.recommendedClass} /> },
   ...(seat.neededUm === null
@@ -107,10 +117,13 @@ function factsOf(seat: SeatAssessment): Description[] {
         />
       ),
     },
-    { label: 'Condition last seen', value: seat.lastCondition },
-    {
-      label: 'Last recorded',
-      value: seat.lastRecordedOn === null ? null : formatDay(seat.lastRecordedOn),
-    },
   ];
 }
+
+const recordFacts = (seat: SeatAssessment): Description[] => [
+  { label: 'Condition last seen', value: seat.lastCondition },
+  {
+    label: 'Last recorded',
+    value: seat.lastRecordedOn === null ? null : formatDay(seat.lastRecordedOn),
+  },
+];
