@@ -7,6 +7,7 @@ import { Dialog } from '#src/components/dialog.tsx';
 import { Field } from '#src/components/field.tsx';
 import { Select } from '#src/components/select.tsx';
 import { TextInput } from '#src/components/text-input.tsx';
+import { toApiError } from '#src/lib/api-error.ts';
 import { machineListQuery, machineQuery } from '../api/machines.ts';
 
 /** What opens a position's fit record form with values in it. */
@@ -75,7 +76,10 @@ export function CopyFitDialog({
           }}
         />
       </Field>
-      <Field label="Bearing position">
+      <Field
+        label="Bearing position"
+        error={machine.isError ? toApiError(machine.error).message : undefined}
+      >
         <Select
           placeholder="Choose a position"
           value={positionId}
