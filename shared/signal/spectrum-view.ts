@@ -25,6 +25,21 @@ const floorHalfWidthMin = 24;
 const floorHalfWidthMax = 400;
 
 /**
+ * Lines to either side over which the noise floor is taken: a little over one order wide
+ * in all, so that lines fill little of it.
+ *
+ * @param orderHz - about one shaft speed, Hz, > 0
+ * @param stepHz - distance of two lines, Hz, > 0
+ * @returns 24 to 400 lines
+ */
+export function floorHalfWidthLines(orderHz: number, stepHz: number): number {
+  return Math.max(
+    floorHalfWidthMin,
+    Math.min(floorHalfWidthMax, Math.round((0.6 * orderHz) / stepHz)),
+  );
+}
+
+/**
  * One transform of the whole record, seen with and without a window: a periodic Hann window in time
  * is the convolution of the lines with −¼, ½, −¼, so the second transform is saved.
  *
@@ -51,11 +66,7 @@ export function viewSpectrum(
     velocity[k] = peak * velocityRmsFactor(quantity, k * stepHz);
     power[k] = peak * peak;
   }
-  const halfWidth = Math.max(
-    floorHalfWidthMin,
-    Math.min(floorHalfWidthMax, Math.round((0.6 * orderHz) / stepHz)),
-  );
-  const noise = noiseFloor(power, halfWidth);
+  const noise = noiseFloor(power, floorHalfWidthLines(orderHz, stepHz));
   const ratio = new Float64Array(count);
   for (let k = 0; k < count; k += 1) ratio[k] = (power[k] ?? 0) / (noise[k] ?? 1);
   return {

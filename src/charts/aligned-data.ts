@@ -1,17 +1,21 @@
 import type uPlot from 'uplot';
 
-interface Series {
+export interface Series {
   x: Float64Array;
   y: Float64Array;
 }
 
 /**
- * One table of uPlot for a spectrum and, behind it, another one with lines of its own: the second is
- * read off at the first one's places, between its lines along the straight line.
+ * One table of uPlot for a spectrum with others behind and before it that have lines of their own:
+ * these are read off at the spectrum's places, between their lines along the straight line.
  */
-export function alignedData(front: Series, behind: Series | null): uPlot.AlignedData {
-  if (behind === null) return [front.x, front.y];
-  return [front.x, readAt(behind, front.x), front.y];
+export function alignedData(
+  spectrum: Series,
+  behind: readonly Series[],
+  before: readonly Series[] = [],
+): uPlot.AlignedData {
+  const read = (series: Series) => readAt(series, spectrum.x);
+  return [spectrum.x, ...behind.map(read), spectrum.y, ...before.map(read)];
 }
 
 function readAt({ x, y }: Series, places: Float64Array): (number | null)[] {

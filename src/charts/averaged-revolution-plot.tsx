@@ -6,7 +6,11 @@ import { chartBase, xAxis, yAxis } from './chart-axes.ts';
 import { useChartPalette, type ChartPalette } from './chart-palette.ts';
 import { ChartTable } from './chart-table.tsx';
 import { PlotFrame } from './plot-frame.tsx';
-import { UplotChart, type ChartOptions } from './uplot-chart.tsx';
+import { PointerReading } from './plot-reading.tsx';
+import type { ChartOptions } from './plot-stage.ts';
+import type { Window } from './plot-window.ts';
+import { createStore } from './store.ts';
+import { UplotChart } from './uplot-chart.tsx';
 
 export interface AveragedRevolutionPlotProps {
   /** Averaged over the revolutions, one turn in equal steps. */
@@ -17,6 +21,8 @@ export interface AveragedRevolutionPlotProps {
 }
 
 const tableRows = 36;
+const wholeTurn: Window = { min: 0, max: 360 };
+const nothing: Window = { min: 0, max: 0 };
 
 /** One averaged turn against the sine that an unbalance alone would give. */
 export function AveragedRevolutionPlot({
@@ -27,12 +33,16 @@ export function AveragedRevolutionPlot({
 }: AveragedRevolutionPlotProps) {
   const palette = useChartPalette();
   const keysHintId = useId();
-  const [cursorDeg, setCursorDeg] = useState<number | null>(null);
+  const [cursorDeg] = useState(() => createStore<number | null>(null));
+  const [view] = useState(() => createStore<Window | null>(null));
   const sine = useMemo(() => firstOrderSine(turn), [turn]);
-  const data = useMemo(() => closedTurn(turn, sine), [turn, sine]);
+  const dataFor = useMemo(() => {
+    const data = closedTurn(turn, sine);
+    return () => data;
+  }, [turn, sine]);
   const options = useMemo(
-    () => averagedRevolutionOptions(palette, unit, setCursorDeg),
-    [palette, unit],
+    () => averagedRevolutionOptions(palette, unit, cursorDeg.set),
+    [palette, unit, cursorDeg],
   );
   const at = (degrees: number) => Math.round((degrees / 360) * turn.length) % turn.length;
   return (
@@ -40,9 +50,12 @@ export function AveragedRevolutionPlot({
       title={title}
       keysHintId={keysHintId}
       reading={
-        cursorDeg === null
-          ? ''
-          : `${formatFixed(cursorDeg, 0)}°  ${formatSignificant(turn[at(cursorDeg)] ?? 0)} ${unit}`
+        <PointerReading
+          at={cursorDeg}
+          read={(deg) =>
+            `${formatFixed(deg, 0)}°  ${formatSignificant(turn[at(deg)] ?? 0)} ${unit}`
+          }
+        />
       }
       caption="Broken line: the once-per-turn part alone."
       table={
@@ -67,7 +80,9 @@ export function AveragedRevolutionPlot({
     >
       <UplotChart
         options={options}
-        data={data}
+        dataFor={dataFor}
+        whole={turn.length > 0 ? wholeTurn : nothing}
+        view={view}
         heightPx={heightPx}
         label={`${title}, ${unit}`}
         describedBy={keysHintId}
@@ -83,7 +98,7 @@ export function averagedRevolutionOptions(
 ): ChartOptions {
   return {
     ...chartBase(),
-    scales: { x: { time: false, range: [0, 360] }, y: {} },
+    scales: { x: { time: false, auto: false }, y: {} },
     axes: [{ ...xAxis(palette, 'Angle, °'), incrs: [15, 30, 45, 90] }, yAxis(palette, unit)],
     series: [
       { label: 'Angle' },

@@ -9,8 +9,17 @@ export const rightMarginPx = 12;
 /** Tick texts with as many decimals as the step needs, all alike. */
 export function tickTexts(ticks: readonly (number | null)[], stepOrNull: number | null): string[] {
   const step = stepOrNull === null || stepOrNull === 0 ? 1 : stepOrNull;
-  const digits = Math.min(8, Math.max(0, Math.ceil(-Math.log10(step) - 1e-9)));
+  const digits = decimalsOf(step);
   return ticks.map((tick) => (tick === null ? '' : formatFixed(tick, digits)));
+}
+
+/** A step of 2.5 needs one decimal as one of 0.1 does: the fewest that write it exactly. */
+function decimalsOf(step: number): number {
+  for (let digits = 0; digits < 8; digits += 1) {
+    const scaled = Math.abs(step) * 10 ** digits;
+    if (scaled > 0.5 && Math.abs(scaled - Math.round(scaled)) < 1e-6 * scaled) return digits;
+  }
+  return 8;
 }
 
 /** On a logarithmic axis the powers of ten alone are written. */

@@ -1,5 +1,7 @@
+import type { Series } from './aligned-data.ts';
 import { decimateMinMax } from './decimate-min-max.ts';
 import { evidenceOrders, isWholeOrder, type OrderMark } from './order-mark.ts';
+import type { Window } from './plot-window.ts';
 
 export interface Spectrum {
   /** Frequency of line i is i × stepHz. */
@@ -7,35 +9,42 @@ export interface Spectrum {
   amplitude: Float32Array;
 }
 
-/** Above this a plot keeps the extremes of buckets instead of every line. */
-export const spectrumMaxPoints = 12_000;
+/** Points a plot draws at most: some four a pixel, with both extremes of what lies between them. */
+export const plotMaxPoints = 4000;
 
-export interface SpectrumSeries {
-  x: Float64Array;
-  y: Float64Array;
-  linesPerPoint: number;
+/** Lines of a window, on both sides one more than is in sight. */
+export function linesIn(
+  { stepHz, amplitude }: Spectrum,
+  unitsPerHz: number,
+  { min, max }: Window,
+): { first: number; end: number } {
+  const perUnit = 1 / (stepHz * unitsPerHz);
+  let first = Math.max(0, Math.floor(min * perUnit) - 1);
+  const end = Math.min(amplitude.length, Math.ceil(max * perUnit) + 2);
+  // Lines that integration hides stand at the beginning.
+  while (first < end && Number.isNaN(amplitude[first])) first += 1;
+  return { first, end };
 }
 
 /**
- * A spectrum as the plot takes it.
+ * A part of a spectrum as the plot takes it.
  *
  * @param unitsPerHz - scale of the x axis (60 for 1/min, 1/speed for orders)
- * @param floor - least value drawn; a logarithmic axis has no place for zero
+ * @param view - stretch of the x axis
+ * @param heightOf - where an amplitude stands on the y axis
  */
 export function spectrumSeries(
-  { stepHz, amplitude }: Spectrum,
+  spectrum: Spectrum,
   unitsPerHz: number,
-  floor: number | null,
-): SpectrumSeries {
-  const { index, value, samplesPerPoint } = decimateMinMax(
-    amplitude,
-    0,
-    amplitude.length,
-    spectrumMaxPoints,
-  );
-  const x = index.map((line) => line * stepHz * unitsPerHz);
-  const y = floor === null ? value : value.map((amplitudeAt) => Math.max(floor, amplitudeAt));
-  return { x, y, linesPerPoint: samplesPerPoint };
+  view: Window,
+  heightOf: (amplitude: number) => number,
+): Series {
+  const { first, end } = linesIn(spectrum, unitsPerHz, view);
+  const { index, value } = decimateMinMax(spectrum.amplitude, first, end, plotMaxPoints);
+  return {
+    x: index.map((line) => line * spectrum.stepHz * unitsPerHz),
+    y: Float64Array.from(value, heightOf),
+  };
 }
 
 /** The lower end of a logarithmic axis: five decades below the greatest line. */
@@ -56,7 +65,8 @@ export function peakNear(
   let best: { frequencyHz: number; amplitude: number } | null = null;
   for (let line = first; line <= last; line += 1) {
     const value = amplitude[line] ?? 0;
-    if (best === null || value > best.amplitude) {
+    // What integration hides (NaN) is no line.
+    if (value >= 0 && (best === null || value > best.amplitude)) {
       best = { frequencyHz: line * stepHz, amplitude: value };
     }
   }

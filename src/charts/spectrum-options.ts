@@ -4,9 +4,10 @@ import type { ChartPalette } from './chart-palette.ts';
 import { frequencyUnitWords, type FrequencyUnit } from './frequency-axis.ts';
 import { drawSpectrumMarks } from './spectrum-overlay.ts';
 import type { SpectrumMark } from './spectrum-data.ts';
-import type { ChartOptions } from './uplot-chart.tsx';
+import type { ChartOptions } from './plot-stage.ts';
 
-export type AmplitudeScale = 'linear' | 'log';
+export const amplitudeScales = ['linear', 'log', 'db'] as const;
+export type AmplitudeScale = (typeof amplitudeScales)[number];
 
 export interface SpectrumOptionsInput {
   palette: ChartPalette;
@@ -17,14 +18,14 @@ export interface SpectrumOptionsInput {
   amplitudeLabel: string;
   marks: readonly SpectrumMark[];
   hasPrevious: boolean;
+  /** Where an amplitude stands on the y axis. */
+  heightOf: (amplitude: number) => number;
   onCursor: (x: number | null) => void;
-  /** The part of the x axis in sight and where it lies, in CSS pixels. */
-  onView: (view: PlotView) => void;
+  /** Where the x axis lies, in CSS pixels. */
+  onPlace: (place: PlotPlace) => void;
 }
 
-export interface PlotView {
-  min: number;
-  max: number;
+export interface PlotPlace {
   leftPx: number;
   widthPx: number;
 }
@@ -34,6 +35,12 @@ export function spectrumOptions(input: SpectrumOptionsInput): ChartOptions {
   const { palette, frequencyUnit, amplitudeScale, amplitudeLabel } = input;
   const logarithmic = amplitudeScale === 'log';
   const words = frequencyUnitWords[frequencyUnit];
+  const floor: uPlot.Series = {
+    label: 'Noise floor',
+    stroke: palette.explained,
+    width: 2,
+    points: { show: false },
+  };
   const previous: uPlot.Series = {
     label: 'Previous survey',
     stroke: palette.rule,
@@ -44,10 +51,8 @@ export function spectrumOptions(input: SpectrumOptionsInput): ChartOptions {
   return {
     ...chartBase(),
     scales: {
-      x: { time: false },
-      y: logarithmic
-        ? { distr: 3 }
-        : { range: (_plot, _min, max) => [0, max > 0 ? max * 1.06 : 1] },
+      x: { time: false, auto: false },
+      y: yScales[amplitudeScale],
     },
     axes: [
       xAxis(palette, `${words.label}, ${words.unit}`),
@@ -57,27 +62,31 @@ export function spectrumOptions(input: SpectrumOptionsInput): ChartOptions {
       { label: words.label },
       ...(input.hasPrevious ? [previous] : []),
       { label: 'Amplitude', stroke: palette.ink, width: 1, points: { show: false } },
+      // On top: the noise itself would hide it.
+      floor,
     ],
     hooks: {
-      draw: [(plot) => drawSpectrumMarks(plot, input.marks, input.unitsPerHz, palette)],
+      draw: [(plot) => drawSpectrumMarks(plot, input.marks, input, palette)],
       setCursor: [
         (plot) => {
           const left = plot.cursor.left ?? -1;
           input.onCursor(left < 0 ? null : plot.posToVal(left, 'x'));
         },
       ],
-      setScale: [(plot, key) => key === 'x' && input.onView(viewOf(plot))],
-      setSize: [(plot) => input.onView(viewOf(plot))],
-      ready: [(plot) => input.onView(viewOf(plot))],
+      setSize: [(plot) => input.onPlace(placeOf(plot))],
+      ready: [(plot) => input.onPlace(placeOf(plot))],
     },
   };
 }
 
-function viewOf(plot: uPlot): PlotView {
-  const { min, max } = plot.scales['x'] ?? {};
+const yScales: Readonly<Record<AmplitudeScale, uPlot.Scale>> = {
+  linear: { range: (_plot, _min, max) => [0, max > 0 ? max * 1.06 : 1] },
+  log: { distr: 3 },
+  db: { range: (_plot, min, max) => (max > min ? [min, max + 3] : [max - 60, max + 3]) },
+};
+
+function placeOf(plot: uPlot): PlotPlace {
   return {
-    min: min ?? 0,
-    max: max ?? 1,
     leftPx: plot.bbox.left / uPlot.pxRatio,
     widthPx: plot.bbox.width / uPlot.pxRatio,
   };

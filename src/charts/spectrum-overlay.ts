@@ -13,9 +13,10 @@ import type { SpectrumMark } from './spectrum-data.ts';
 export function drawSpectrumMarks(
   plot: uPlot,
   marks: readonly SpectrumMark[],
-  unitsPerHz: number,
+  { unitsPerHz, heightOf }: { unitsPerHz: number; heightOf: (amplitude: number) => number },
   palette: ChartPalette,
 ): void {
+  const yOf = (amplitude: number) => plot.valToPos(heightOf(amplitude), 'y', true);
   drawOverlay(plot, (context, pxRatio) => {
     const { left, top, width, height } = plot.bbox;
     const bottom = top + height;
@@ -23,7 +24,7 @@ export function drawSpectrumMarks(
       .map((mark) => ({
         mark,
         x: plot.valToPos(mark.frequencyHz * unitsPerHz, 'x', true),
-        y: Math.min(bottom, Math.max(top, plot.valToPos(mark.amplitude, 'y', true))),
+        y: Math.min(bottom, Math.max(top, yOf(mark.amplitude))),
       }))
       .filter(({ x }) => x >= left && x <= left + width);
 
@@ -34,7 +35,7 @@ export function drawSpectrumMarks(
 
     for (const { mark, x } of placed) {
       if (mark.previousAmplitude === null || mark.kind === 'explained') continue;
-      const y = plot.valToPos(mark.previousAmplitude, 'y', true);
+      const y = yOf(mark.previousAmplitude);
       if (y >= top && y <= bottom) drawPrevious(context, x, y, palette, pxRatio);
     }
 

@@ -1,73 +1,96 @@
-import { useId, useMemo, useState } from 'react';
-import { formatFixed, formatSignificant } from '#src/lib/numbers.ts';
+import { useId, useMemo, useState, type KeyboardEvent } from 'react';
+import type { Detector } from '#shared/quantities/detector.ts';
+import type { Unit } from '#shared/quantities/quantity.ts';
+import { alignedData } from './aligned-data.ts';
 import { useChartPalette } from './chart-palette.ts';
 import { perHz, usableUnit, type FrequencyUnit } from './frequency-axis.ts';
 import type { OrderMark } from './order-mark.ts';
-import { AlignedOrderStrip } from './order-strip.tsx';
 import { PlotFrame } from './plot-frame.tsx';
-import { logFloor, spectrumMarks, spectrumSeries, type Spectrum } from './spectrum-data.ts';
-import { spectrumOptions, type AmplitudeScale, type PlotView } from './spectrum-options.ts';
+import { PlotReading } from './plot-reading.tsx';
+import type { PlotStage } from './plot-stage.ts';
+import { windowShowing, windowWithin, orWhole, type Window } from './plot-window.ts';
+import { shownSpectrum } from './shown-spectrum.ts';
+import { cursorOfKind, placeOf, steppedCursor } from './spectrum-cursor.ts';
+import { cursorKindOfKey, SpectrumCursorChoice } from './spectrum-cursor-choice.tsx';
+import { spectrumCursorOverlay } from './spectrum-cursor-overlay.ts';
+import { linesIn, plotMaxPoints, spectrumMarks, spectrumSeries } from './spectrum-data.ts';
+import type { Spectrum, SpectrumMark } from './spectrum-data.ts';
+import { spectrumOptions, type AmplitudeScale, type PlotPlace } from './spectrum-options.ts';
+import { amplitudeTextOf, cursorReading, readingAt } from './spectrum-reading.ts';
+import { SpectrumStrip } from './spectrum-strip.tsx';
 import { SpectrumTable } from './spectrum-table.tsx';
-import { alignedData } from './aligned-data.ts';
+import { createSpectrumView, type SpectrumView } from './spectrum-view.ts';
+import { createStore, useStore, type Store } from './store.ts';
 import { UplotChart } from './uplot-chart.tsx';
 
 export interface SpectrumPlotProps {
+  /** As recorded, peak. */
   spectrum: Spectrum;
-  /** Unit of the amplitude, e.g. "mm/s". */
-  unit: string;
-  /** How it is measured: "peak" or "rms". */
-  detector?: string;
+  /** Unit of what was recorded. */
+  unit: Unit;
+  /** Unit it is shown in, integrated where that needs it; without one as recorded. */
+  shownUnit?: Unit;
+  detector?: Detector;
   /** Speed of the position's shaft; without one there are no orders. */
   speedHz: number | null;
   orders: readonly OrderMark[];
   run: { from: number; to: number; length: number } | null;
   frequencyUnit: FrequencyUnit;
   amplitudeScale: AmplitudeScale;
-  /** The same point at the survey before, drawn behind. */
+  /** The same point at the survey before, in the same unit, drawn behind. */
   previous?: Spectrum | null;
+  /** Zoom and cursor, where the page keeps them. */
+  view?: SpectrumView;
   heightPx?: number;
   title?: string;
 }
 
-/** A spectrum with its run of harmonics marked and the order strip beneath it. */
-export function SpectrumPlot({
-  spectrum,
-  unit,
-  detector = 'peak',
-  speedHz,
-  orders,
-  run,
-  frequencyUnit,
-  amplitudeScale,
-  previous = null,
-  heightPx = 300,
-  title = 'Spectrum',
-}: SpectrumPlotProps) {
+const keysHint =
+  'f, h and s choose a free, a harmonic or a sideband cursor. Left and right arrow move it, with Shift faster; up and down arrow change the spacing of sidebands. Plus and minus zoom, Page Up and Page Down move along, 0 shows the whole, Escape takes the cursor away.';
+
+/** A spectrum with its run of harmonics marked, its cursors and the order strip beneath it. */
+export function SpectrumPlot(props: SpectrumPlotProps) {
+  const { spectrum, unit, speedHz, orders, run, frequencyUnit, amplitudeScale } = props;
+  const { shownUnit = unit, detector = 'peak', previous = null } = props;
+  const { heightPx = 300, title = 'Spectrum' } = props;
   const palette = useChartPalette();
   const keysHintId = useId();
-  const [cursorX, setCursorX] = useState<number | null>(null);
-  const [view, setView] = useState<PlotView | null>(null);
+  const [hover] = useState(() => createStore<number | null>(null));
+  const [ownView] = useState(createSpectrumView);
+  const [place, setPlace] = useState<PlotPlace | null>(null);
   const xUnit = usableUnit(frequencyUnit, speedHz);
+  // What was set in orders means nothing on an axis in Hz.
+  const view = xUnit === frequencyUnit && props.view ? props.view : ownView;
   const unitsPerHz = perHz(xUnit, speedHz);
+  const lineStep = spectrum.stepHz * unitsPerHz;
+  const lineCount = spectrum.amplitude.length;
+  const whole = useMemo<Window>(
+    () => ({ min: 0, max: Math.max(0, lineCount - 1) * lineStep }),
+    [lineCount, lineStep],
+  );
 
-  const marks = useMemo(
-    () => spectrumMarks(spectrum, speedHz, orders, run, previous),
-    [spectrum, speedHz, orders, run, previous],
-  );
-  const floor = useMemo(
-    () => (amplitudeScale === 'log' ? logFloor(spectrum.amplitude) : null),
-    [amplitudeScale, spectrum],
-  );
-  const series = useMemo(
-    () => spectrumSeries(spectrum, unitsPerHz, floor),
-    [spectrum, unitsPerHz, floor],
-  );
-  const data = useMemo(
+  const shown = useMemo(
     () =>
-      alignedData(series, previous === null ? null : spectrumSeries(previous, unitsPerHz, floor)),
-    [series, previous, unitsPerHz, floor],
+      shownSpectrum(spectrum, previous, speedHz, {
+        recordedUnit: unit,
+        shownUnit,
+        detector,
+        scale: amplitudeScale,
+      }),
+    [spectrum, previous, speedHz, unit, shownUnit, detector, amplitudeScale],
   );
-  const amplitudeLabel = `${unit} ${detector}`;
+  const marks = useMemo(
+    () => spectrumMarks(shown.front, speedHz, orders, run, shown.previous),
+    [shown, speedHz, orders, run],
+  );
+  const dataFor = useMemo(
+    () => (stretch: Window) => {
+      const seriesOf = (one: Spectrum) => spectrumSeries(one, unitsPerHz, stretch, shown.heightOf);
+      const behind = shown.previous === null ? [] : [seriesOf(shown.previous)];
+      return alignedData(seriesOf(shown.front), behind, [seriesOf(shown.noise)]);
+    },
+    [shown, unitsPerHz],
+  );
   const hasPrevious = previous !== null;
   const options = useMemo(
     () =>
@@ -76,90 +99,144 @@ export function SpectrumPlot({
         frequencyUnit: xUnit,
         unitsPerHz,
         amplitudeScale,
-        amplitudeLabel,
+        amplitudeLabel: shown.label,
+        heightOf: shown.heightOf,
         marks,
         hasPrevious,
-        onCursor: setCursorX,
-        onView: (next) => setView((old) => (sameView(old, next) ? old : next)),
+        onCursor: hover.set,
+        onPlace: (next) => setPlace((old) => (samePlace(old, next) ? old : next)),
       }),
-    [palette, xUnit, unitsPerHz, amplitudeScale, amplitudeLabel, marks, hasPrevious],
+    [palette, xUnit, unitsPerHz, amplitudeScale, shown, marks, hasPrevious, hover],
   );
+  const overlay = useMemo(
+    () => spectrumCursorOverlay(view.cursor, lineStep, palette),
+    [view, lineStep, palette],
+  );
+  const readable = useMemo(
+    () => ({
+      spectrum: shown.front,
+      speedHz,
+      unitsPerHz,
+      amplitudeText: amplitudeTextOf(shown.label, shown.levelOf),
+    }),
+    [shown, speedHz, unitsPerHz],
+  );
+  const turn = speedHz === null ? null : speedHz * unitsPerHz;
+
+  const onKey = (event: KeyboardEvent, stage: PlotStage): boolean => {
+    const { cursor } = view;
+    const kind = cursorKindOfKey(event.key);
+    if (kind !== null) cursor.set(cursorOfKind(kind, cursor.get(), turn, stage.view()));
+    else if (event.key === 'Escape' && placeOf(cursor.get()) !== null) {
+      cursor.set({ kind: 'free', at: null });
+    } else if (event.key === '+' || event.key === '=' || event.key === '-') {
+      stage.zoom(event.key === '-' ? 2 : 0.5, placeOf(cursor.get()) ?? undefined);
+    } else {
+      const key = cursorKeyOf(event);
+      if (key === null || (key.spacing !== 0 && cursor.get().kind !== 'sidebands')) return false;
+      cursor.set(steppedCursor(cursor.get(), key, lineStep, stage.view(), whole));
+      const at = placeOf(cursor.get());
+      if (at !== null) view.window.set(orWhole(windowShowing(stage.view(), whole, at), whole));
+    }
+    return true;
+  };
 
   return (
     <PlotFrame
       title={title}
       keysHintId={keysHintId}
+      keysHint={keysHint}
       reading={
-        cursorX === null ? '' : readingAt(spectrum, cursorX / unitsPerHz, speedHz, amplitudeLabel)
+        <PlotReading
+          hover={hover}
+          cursor={view.cursor}
+          readHover={(x) => readingAt(readable, x)}
+          readCursor={(cursor) => cursorReading(readable, cursor)}
+        />
+      }
+      tools={
+        <SpectrumCursorChoice
+          cursor={view.cursor}
+          turn={turn}
+          view={() => windowWithin(view.window.get(), whole)}
+        />
       }
       caption={
         <>
-          {hasPrevious && 'Broken line and cross bars: the survey before. '}
-          {series.linesPerPoint > 1 &&
-            `Drawn from ${spectrum.amplitude.length} lines, least and greatest of each ${(series.linesPerPoint * 2).toFixed(0)}: no peak is lost.`}
+          Grey line: noise floor. {hasPrevious && 'Broken line and cross bars: the survey before. '}
+          {shown.remark}{' '}
+          <ThinningRemark
+            spectrum={shown.front}
+            unitsPerHz={unitsPerHz}
+            whole={whole}
+            window={view.window}
+          />
         </>
       }
       table={
         <SpectrumTable
-          spectrum={spectrum}
+          spectrum={shown.front}
           marks={marks}
           orders={orders}
           speedHz={speedHz}
-          amplitudeLabel={amplitudeLabel}
+          amplitudeLabel={shown.label}
+          levelOf={shown.levelOf}
         />
       }
     >
       <UplotChart
         options={options}
-        data={data}
+        dataFor={dataFor}
+        whole={whole}
+        view={view.window}
+        overlay={overlay}
+        onKey={onKey}
         heightPx={heightPx}
-        label={`${title}, ${amplitudeLabel}. ${marksText(marks)}`}
+        label={`${title}, ${shown.label}. ${marksText(marks)}`}
         describedBy={keysHintId}
       />
-      {view !== null && speedHz !== null && orders.length > 0 && (
-        <div style={{ paddingLeft: `${view.leftPx}px` }}>
-          <AlignedOrderStrip
-            marks={orders}
-            fromOrder={view.min / unitsPerHz / speedHz}
-            toOrder={view.max / unitsPerHz / speedHz}
-            widthPx={view.widthPx}
-            run={run}
-          />
-        </div>
+      {place !== null && turn !== null && orders.length > 0 && (
+        <SpectrumStrip
+          place={place}
+          orders={orders}
+          run={run}
+          turn={turn}
+          whole={whole}
+          window={view.window}
+        />
       )}
     </PlotFrame>
   );
 }
 
-function sameView(a: PlotView | null, b: PlotView): boolean {
-  return (
-    a !== null &&
-    a.min === b.min &&
-    a.max === b.max &&
-    a.leftPx === b.leftPx &&
-    a.widthPx === b.widthPx
-  );
+function cursorKeyOf({ key, shiftKey }: KeyboardEvent) {
+  const along = key === 'ArrowRight' ? 1 : key === 'ArrowLeft' ? -1 : 0;
+  const spacing = key === 'ArrowUp' ? 1 : key === 'ArrowDown' ? -1 : 0;
+  return along === 0 && spacing === 0 ? null : { along, spacing, isFast: shiftKey };
 }
 
-/** Frequency, order and amplitude of the line under the cursor. */
-function readingAt(
-  { stepHz, amplitude }: Spectrum,
-  frequencyHz: number,
-  speedHz: number | null,
-  amplitudeLabel: string,
-): string {
-  const line = Math.min(amplitude.length - 1, Math.max(0, Math.round(frequencyHz / stepHz)));
-  const atHz = line * stepHz;
-  const parts = [
-    `${formatFixed(atHz, 2)} Hz`,
-    `${formatFixed(atHz * 60, 0)} 1/min`,
-    ...(speedHz === null ? [] : [`${formatFixed(atHz / speedHz, 2)}×`]),
-    `${formatSignificant(amplitude[line] ?? 0)} ${amplitudeLabel}`,
-  ];
-  return parts.join('  ');
+function samePlace(a: PlotPlace | null, b: PlotPlace): boolean {
+  return a !== null && a.leftPx === b.leftPx && a.widthPx === b.widthPx;
 }
 
-function marksText(marks: ReturnType<typeof spectrumMarks>): string {
+function ThinningRemark({
+  spectrum,
+  unitsPerHz,
+  whole,
+  window,
+}: {
+  spectrum: Spectrum;
+  unitsPerHz: number;
+  whole: Window;
+  window: Store<Window | null>;
+}) {
+  const { first, end } = linesIn(spectrum, unitsPerHz, windowWithin(useStore(window), whole));
+  const count = end - first;
+  if (count <= plotMaxPoints) return null;
+  return `${count} lines in sight; of those too close to tell apart the least and the greatest are drawn, so no peak is lost.`;
+}
+
+function marksText(marks: readonly SpectrumMark[]): string {
   const run = marks.filter((mark) => mark.kind === 'run').length;
   return run === 0 ? 'No run of harmonics is marked.' : `${run} lines of a run are marked.`;
 }

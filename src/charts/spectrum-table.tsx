@@ -1,3 +1,4 @@
+import { memo } from 'react';
 import { formatFixed, formatSignificant } from '#src/lib/numbers.ts';
 import { ChartTable } from './chart-table.tsx';
 import { orderName, type OrderMark } from './order-mark.ts';
@@ -14,19 +15,24 @@ const belongsTo = {
 } as const;
 
 /** The spectrum for who does not see it: its marked orders, or its highest lines where none are. */
-export function SpectrumTable({
+export const SpectrumTable = memo(function SpectrumTable({
   spectrum,
   marks,
   orders,
   speedHz,
   amplitudeLabel,
+  levelOf,
 }: {
   spectrum: Spectrum;
   marks: readonly SpectrumMark[];
   orders: readonly OrderMark[];
   speedHz: number | null;
   amplitudeLabel: string;
+  /** Where the amplitudes are stated as levels, how. */
+  levelOf: ((amplitude: number) => number) | null;
 }) {
+  const amplitudeText = (amplitude: number) =>
+    levelOf === null ? formatSignificant(amplitude) : formatFixed(levelOf(amplitude), 1);
   const lineCount = spectrum.amplitude.length;
   if (marks.length > 0) {
     return (
@@ -43,7 +49,7 @@ export function SpectrumTable({
         rows={marks.map((mark) => [
           orderName(mark.order),
           formatFixed(mark.frequencyHz, 2),
-          formatSignificant(mark.amplitude),
+          amplitudeText(mark.amplitude),
           formatFixed(orders.find((known) => known.order === mark.order)?.prominenceDb ?? 0, 0),
           mark.explainedBy ?? belongsTo[mark.kind],
         ])}
@@ -63,8 +69,8 @@ export function SpectrumTable({
       rows={highest.map((line) => [
         formatFixed(line * spectrum.stepHz, 2),
         ...(speedHz === null ? [] : [formatFixed((line * spectrum.stepHz) / speedHz, 2)]),
-        formatSignificant(spectrum.amplitude[line] ?? 0),
+        amplitudeText(spectrum.amplitude[line] ?? 0),
       ])}
     />
   );
-}
+});

@@ -1,83 +1,68 @@
 import { useEffect, useLayoutEffect, useRef, type KeyboardEvent } from 'react';
-import uPlot from 'uplot';
-import { figuresFont, textFont } from './chart-palette.ts';
+import type uPlot from 'uplot';
+import { stagePlot, type ChartOptions, type PlotOverlay, type PlotStage } from './plot-stage.ts';
+import type { Window } from './plot-window.ts';
+import type { Store } from './store.ts';
 import { useElementWidth } from './use-element-width.ts';
-import { moveCursor, resetZoom, zoomAboutCursor, type Window } from './plot-keys.ts';
-
-/** Everything but the size, which the page decides. */
-export type ChartOptions = Omit<uPlot.Options, 'width' | 'height'>;
 
 export interface UplotChartProps {
   /** A new object rebuilds the chart: keep it in a memo. */
   options: ChartOptions;
-  /** A new reference replaces the data; it is never compared deeply. */
-  data: uPlot.AlignedData;
+  /** The data for a window; a new function replaces the data. */
+  dataFor: (view: Window) => uPlot.AlignedData;
+  /** The ends of x. Where they are one, nothing is drawn. */
+  whole: Window;
+  /** What of it is in sight; null for the whole. */
+  view: Store<Window | null>;
+  /** Kept in a memo as well. */
+  overlay?: PlotOverlay;
   heightPx: number;
   /** What is drawn, in words; the figures stand in the table beside the chart. */
   label: string;
-  /** The ends of x, where the data may be a part of the record only. */
-  wholeX?: Window;
   /** Says how the keys work here, e.g. the id of a hint. */
   describedBy?: string;
+  /** Keys of this plot's own; true where one was used. */
+  onKey?: (event: KeyboardEvent, stage: PlotStage) => boolean;
 }
 
 /** The one owner of uPlot instances. */
-export function UplotChart({
-  options,
-  data,
-  heightPx,
-  label,
-  wholeX,
-  describedBy,
-}: UplotChartProps) {
+export function UplotChart(props: UplotChartProps) {
+  const { options, dataFor, whole, view, overlay, heightPx, label, describedBy, onKey } = props;
   const [box, widthPx] = useElementWidth<HTMLDivElement>();
-  const chart = useRef<uPlot | null>(null);
-  const drawnData = useRef(data);
-  const drawable = widthPx > 0 && heightPx > 0 && (data[0]?.length ?? 0) > 0;
+  const stage = useRef<PlotStage | null>(null);
+  const drawable = widthPx > 0 && heightPx > 0 && whole.max > whole.min;
 
-  // Size and data at the moment of building; later changes have their own effects.
-  const atBuild = useRef({ data, widthPx, heightPx });
+  // What the chart is built with; later changes have their own effects.
+  const atBuild = useRef({ dataFor, whole, widthPx, heightPx });
   useLayoutEffect(() => {
-    atBuild.current = { data, widthPx, heightPx };
+    atBuild.current = { dataFor, whole, widthPx, heightPx };
   });
 
-  useEffect(() => {
+  // Before the browser paints, so that a plot is never an empty box first.
+  useLayoutEffect(() => {
     const element = box.current;
     if (element === null || !drawable) return;
-    const { data: first, widthPx: width, heightPx: height } = atBuild.current;
-    const built = new uPlot({ ...options, width, height }, first, element);
-    chart.current = built;
-    drawnData.current = first;
-    redrawWithFonts(built, () => chart.current === built);
+    const { dataFor: data, whole: ends, ...size } = atBuild.current;
+    const source = { whole: ends, dataFor: data };
+    const built = stagePlot(element, options, size, source, view, overlay ?? null);
+    stage.current = built;
     return () => {
       built.destroy();
-      chart.current = null;
+      stage.current = null;
     };
-  }, [options, drawable, box]);
+  }, [options, drawable, box, view, overlay]);
 
   useEffect(() => {
-    if (chart.current === null || drawnData.current === data) return;
-    drawnData.current = data;
-    // Zoomed in, new data is the same record in finer steps: the view must stay.
-    chart.current.setData(data, false);
-    chart.current.redraw();
-  }, [data]);
+    stage.current?.show({ dataFor, whole });
+  }, [dataFor, whole]);
 
   useEffect(() => {
-    chart.current?.setSize({ width: widthPx, height: heightPx });
+    stage.current?.resize(widthPx, heightPx);
   }, [widthPx, heightPx]);
 
   const onKeyDown = (event: KeyboardEvent) => {
-    const plot = chart.current;
-    if (plot === null || event.ctrlKey || event.metaKey || event.altKey) return;
-    const step = event.shiftKey ? 10 : 1;
-    if (event.key === 'ArrowRight') moveCursor(plot, step);
-    else if (event.key === 'ArrowLeft') moveCursor(plot, -step);
-    else if (event.key === '+' || event.key === '=') zoomAboutCursor(plot, 0.5, wholeX);
-    else if (event.key === '-') zoomAboutCursor(plot, 2, wholeX);
-    else if (event.key === '0') resetZoom(plot, wholeX);
-    else return;
-    event.preventDefault();
+    if (stage.current === null || event.ctrlKey || event.metaKey || event.altKey) return;
+    if (onKey?.(event, stage.current) || pressKey(event, stage.current)) event.preventDefault();
   };
 
   return (
@@ -89,17 +74,45 @@ export function UplotChart({
       aria-describedby={describedBy}
       tabIndex={0}
       onKeyDown={onKeyDown}
-      // After uPlot's own answer to it, which knows only the data at hand.
-      onDoubleClick={() => chart.current && resetZoom(chart.current, wholeX)}
       style={{ height: `${heightPx}px` }}
       className="w-full overflow-hidden"
     />
   );
 }
 
-/** A canvas draws with whatever font is there: draw once more when the shipped ones have come. */
-function redrawWithFonts(chart: uPlot, alive: () => boolean): void {
-  void Promise.all([document.fonts.load(figuresFont), document.fonts.load(textFont)]).then(() => {
-    if (alive()) chart.redraw(false, true);
-  });
+/** The keys of every plot. */
+function pressKey(event: KeyboardEvent, stage: PlotStage): boolean {
+  const step = event.shiftKey ? 10 : 1;
+  const { plot } = stage;
+  const left = plot.cursor.left ?? -1;
+  const about = left >= 0 ? plot.posToVal(left, 'x') : undefined;
+  if (event.key === 'ArrowRight') movePointerLine(plot, step);
+  else if (event.key === 'ArrowLeft') movePointerLine(plot, -step);
+  else if (event.key === '+' || event.key === '=') stage.zoom(0.5, about);
+  else if (event.key === '-') stage.zoom(2, about);
+  else if (event.key === '0') stage.reset();
+  else if (event.key === 'PageDown') stage.pan(0.5);
+  else if (event.key === 'PageUp') stage.pan(-0.5);
+  else return false;
+  return true;
+}
+
+/** The index a cursor goes to, from where it is (or the middle of the view), within the view. */
+export function cursorIndex(
+  at: number | null | undefined,
+  steps: number,
+  first: number,
+  last: number,
+): number {
+  const from = at ?? Math.round((first + last) / 2) - steps;
+  return Math.min(last, Math.max(first, from + steps));
+}
+
+function movePointerLine(plot: uPlot, steps: number): void {
+  const xs = plot.data[0];
+  const [first, last] = plot.series[0]?.idxs ?? [0, xs.length - 1];
+  const x = xs[cursorIndex(plot.cursor.idx, steps, first, last)];
+  if (x !== undefined) {
+    plot.setCursor({ left: plot.valToPos(x, 'x'), top: plot.over.clientHeight / 2 });
+  }
 }

@@ -1,20 +1,16 @@
 import { chartBase, xAxis, yAxis } from './chart-axes.ts';
 import type { ChartPalette } from './chart-palette.ts';
-import type { ChartOptions } from './uplot-chart.tsx';
+import type { ChartOptions } from './plot-stage.ts';
 import { drawWaveformMarks, type TruncationMarks } from './waveform-overlay.ts';
 
 export interface WaveformOptionsInput {
   palette: ChartPalette;
   /** Unit of the samples. */
   unit: string;
-  /** Length of the record, s. */
-  durationS: number;
   /** Duration of one turn, s; null without a speed. */
   revolutionS: number | null;
   truncation: TruncationMarks | null;
   onCursor: (atS: number | null) => void;
-  /** The stretch in sight, s. */
-  onWindow: (fromS: number, toS: number) => void;
 }
 
 /** uPlot options of a time record in seconds from 0. */
@@ -23,7 +19,7 @@ export function waveformOptions(input: WaveformOptionsInput): ChartOptions {
   return {
     ...chartBase(),
     // The x scale is told its ends: with thinned data the last point is seldom the record's end.
-    scales: { x: { time: false, min: 0, max: input.durationS, auto: false }, y: {} },
+    scales: { x: { time: false, auto: false }, y: {} },
     axes: [xAxis(palette, 'Time, s'), yAxis(palette, unit)],
     series: [
       { label: 'Time' },
@@ -35,12 +31,6 @@ export function waveformOptions(input: WaveformOptionsInput): ChartOptions {
         (plot) => {
           const left = plot.cursor.left ?? -1;
           input.onCursor(left < 0 ? null : plot.posToVal(left, 'x'));
-        },
-      ],
-      setScale: [
-        (plot, key) => {
-          const { min, max } = plot.scales['x'] ?? {};
-          if (key === 'x' && min != null && max != null) input.onWindow(min, max);
         },
       ],
     },

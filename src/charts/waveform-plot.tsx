@@ -1,11 +1,14 @@
-import { useId, useMemo, useState } from 'react';
-import type uPlot from 'uplot';
+import { memo, useId, useMemo, useState } from 'react';
 import type { Truncation } from '#shared/signal/screening-types.ts';
 import { formatFixed, formatSignificant } from '#src/lib/numbers.ts';
 import { useChartPalette } from './chart-palette.ts';
 import { ChartTable } from './chart-table.tsx';
 import { decimateMinMax } from './decimate-min-max.ts';
 import { PlotFrame } from './plot-frame.tsx';
+import { PointerReading } from './plot-reading.tsx';
+import { windowWithin, type Window } from './plot-window.ts';
+import { plotMaxPoints } from './spectrum-data.ts';
+import { createStore, useStore, type Store } from './store.ts';
 import { UplotChart } from './uplot-chart.tsx';
 import { stretchesOf } from './waveform-geometry.ts';
 import { waveformOptions } from './waveform-options.ts';
@@ -17,11 +20,12 @@ export interface WaveformPlotProps {
   /** Speed of the position's shaft, for ruling off the turns. */
   speedHz: number | null;
   truncation: Truncation | null;
+  /** The stretch in sight, s, where the page keeps it; null for the whole. */
+  view?: Store<Window | null>;
   heightPx?: number;
   title?: string;
 }
 
-const maxPoints = 8000;
 const tableParts = 40;
 
 /** The time record with its turns ruled off and its truncated stretches marked. */
@@ -31,37 +35,32 @@ export function WaveformPlot({
   unit,
   speedHz,
   truncation,
+  view,
   heightPx = 220,
   title = 'Waveform',
 }: WaveformPlotProps) {
   const palette = useChartPalette();
   const keysHintId = useId();
   const durationS = samples.length / sampleRateHz;
-  const [cursorS, setCursorS] = useState<number | null>(null);
-  const [stretch, setStretch] = useState({ of: samples, fromS: 0, toS: durationS });
-  // Another record starts as a whole, whatever part of the last one was in sight.
-  const { fromS, toS } = stretch.of === samples ? stretch : { fromS: 0, toS: durationS };
-
-  const thinned = useMemo(
-    () =>
-      decimateMinMax(
-        samples,
-        Math.floor(fromS * sampleRateHz) - 1,
-        Math.ceil(toS * sampleRateHz) + 2,
-        maxPoints,
-      ),
-    [samples, sampleRateHz, fromS, toS],
-  );
-  const data = useMemo<uPlot.AlignedData>(
-    () => [thinned.index.map((index) => index / sampleRateHz), thinned.value],
-    [thinned, sampleRateHz],
+  const whole = useMemo<Window>(() => ({ min: 0, max: durationS }), [durationS]);
+  const [cursorS] = useState(() => createStore<number | null>(null));
+  const [ownView] = useState(() => createStore<Window | null>(null));
+  const viewS = view ?? ownView;
+  const dataFor = useMemo(
+    () => (stretch: Window) => {
+      const thinned = thinnedStretch(samples, sampleRateHz, stretch);
+      return [thinned.index.map((index) => index / sampleRateHz), thinned.value] as [
+        Float64Array,
+        Float64Array,
+      ];
+    },
+    [samples, sampleRateHz],
   );
   const options = useMemo(
     () =>
       waveformOptions({
         palette,
         unit,
-        durationS,
         revolutionS: speedHz !== null && speedHz > 0 ? 1 / speedHz : null,
         truncation:
           truncation === null || truncation.side === 'none'
@@ -72,30 +71,40 @@ export function WaveformPlot({
                 ),
                 instrument: truncation.instrument,
               },
-        onCursor: setCursorS,
-        onWindow: (from, to) =>
-          setStretch((old) =>
-            old.of === samples && old.fromS === from && old.toS === to
-              ? old
-              : { of: samples, fromS: from, toS: to },
-          ),
+        onCursor: cursorS.set,
       }),
-    [palette, unit, durationS, speedHz, truncation, sampleRateHz, samples],
+    [palette, unit, speedHz, truncation, sampleRateHz, cursorS],
   );
 
   return (
     <PlotFrame
       title={title}
       keysHintId={keysHintId}
-      reading={cursorS === null ? '' : readingAt(samples, sampleRateHz, cursorS, speedHz, unit)}
-      caption={captionOf(samples.length, thinned.samplesPerPoint, truncation, speedHz)}
+      reading={
+        <PointerReading
+          at={cursorS}
+          read={(atS) => readingAt(samples, sampleRateHz, atS, speedHz, unit)}
+        />
+      }
+      caption={
+        <>
+          {captionOf(truncation, speedHz)}{' '}
+          <ThinningRemark
+            samples={samples}
+            sampleRateHz={sampleRateHz}
+            whole={whole}
+            view={viewS}
+          />
+        </>
+      }
       table={<WaveformTable samples={samples} sampleRateHz={sampleRateHz} unit={unit} />}
     >
       <UplotChart
         options={options}
-        data={data}
+        dataFor={dataFor}
+        whole={whole}
+        view={viewS}
         heightPx={heightPx}
-        wholeX={{ min: 0, max: durationS }}
         label={`${title}, ${unit}, ${formatSignificant(durationS)} s`}
         describedBy={keysHintId}
       />
@@ -120,12 +129,34 @@ function readingAt(
   return parts.join('  ');
 }
 
-function captionOf(
-  sampleCount: number,
-  samplesPerPoint: number,
-  truncation: Truncation | null,
-  speedHz: number | null,
-): string {
+/** With one sample beyond either end, so that the line goes on to the edge. */
+function thinnedStretch(samples: Float32Array, sampleRateHz: number, { min, max }: Window) {
+  return decimateMinMax(
+    samples,
+    Math.floor(min * sampleRateHz) - 1,
+    Math.ceil(max * sampleRateHz) + 2,
+    plotMaxPoints,
+  );
+}
+
+function ThinningRemark({
+  samples,
+  sampleRateHz,
+  whole,
+  view,
+}: {
+  samples: Float32Array;
+  sampleRateHz: number;
+  whole: Window;
+  view: Store<Window | null>;
+}) {
+  const { min, max } = windowWithin(useStore(view), whole);
+  const inSight = Math.min(samples.length, Math.round((max - min) * sampleRateHz));
+  if (inSight <= plotMaxPoints) return null;
+  return `${samples.length} samples; of those too close to tell apart the least and the greatest are drawn, so no peak is lost.`;
+}
+
+function captionOf(truncation: Truncation | null, speedHz: number | null): string {
   const sentences: string[] = [];
   if (speedHz !== null) sentences.push('Broken rules: turns of the shaft.');
   if (truncation !== null && truncation.side !== 'none') {
@@ -136,16 +167,10 @@ function captionOf(
         : `Bars: truncated on ${side}.`,
     );
   }
-  if (samplesPerPoint > 1) {
-    const per = (samplesPerPoint * 2).toFixed(0);
-    sentences.push(
-      `${sampleCount} samples; of each ${per} in sight the least and the greatest are drawn, so no peak is lost.`,
-    );
-  }
   return sentences.join(' ');
 }
 
-function WaveformTable({
+const WaveformTable = memo(function WaveformTable({
   samples,
   sampleRateHz,
   unit,
@@ -174,4 +199,4 @@ function WaveformTable({
       ])}
     />
   );
-}
+});

@@ -4,6 +4,9 @@ import { afterEach, describe, expect, it } from 'vitest';
 import './browser-stubs.ts';
 import { decadeTexts, tickTexts } from '#src/charts/chart-axes.ts';
 import { alignedData } from '#src/charts/aligned-data.ts';
+import { spectrumInUnit } from '#src/charts/amplitude-unit.ts';
+import { noiseFloorLine } from '#src/charts/noise-floor-line.ts';
+import { shownSpectrum } from '#src/charts/shown-spectrum.ts';
 import { perHz, usableUnit } from '#src/charts/frequency-axis.ts';
 import { labelsThatFit } from '#src/charts/label-lane.ts';
 import type { OrderMark } from '#src/charts/order-mark.ts';
@@ -41,6 +44,8 @@ describe('the frequency axis', () => {
   it('writes ticks with the decimals their step needs and a real minus sign', () => {
     expect(tickTexts([-0.5, 0, 0.5], 0.5)).toEqual(['−0.5', '0.0', '0.5']);
     expect(tickTexts([0, 20], 20)).toEqual(['0', '20']);
+    expect(tickTexts([0, 2.5, 5], 2.5)).toEqual(['0.0', '2.5', '5.0']);
+    expect(tickTexts([0, 0.25, 0.5], 0.25)).toEqual(['0.00', '0.25', '0.50']);
     expect(decadeTexts([0.01, 0.02, 1, 10])).toEqual(['0.01', '', '1', '10']);
   });
 });
@@ -81,13 +86,73 @@ describe('the series of a spectrum', () => {
     const amplitude = Float32Array.from([0, 1, 0]);
     const floor = logFloor(amplitude);
     expect(floor).toBeCloseTo(1e-5, 12);
-    expect([...spectrumSeries({ stepHz: 1, amplitude }, 1, floor).y]).toEqual([floor, 1, floor]);
+    const { heightOf } = shownSpectrum({ stepHz: 1, amplitude }, null, null, {
+      recordedUnit: 'g',
+      shownUnit: 'g',
+      detector: 'peak',
+      scale: 'log',
+    });
+    const { y } = spectrumSeries({ stepHz: 1, amplitude }, 1, { min: 0, max: 2 }, heightOf);
+    expect([...y]).toEqual([floor, 1, floor]);
+  });
+
+  it('holds every line of a window, whatever has to be thinned of the whole', () => {
+    const amplitude = new Float32Array(65_536);
+    amplitude[40_001] = 7;
+    const spectrum = { stepHz: 0.5, amplitude };
+    const same = (value: number) => value;
+    const whole = spectrumSeries(spectrum, 1, { min: 0, max: 32_768 }, same);
+    expect(whole.y.length).toBeLessThanOrEqual(4000);
+    expect(Math.max(...whole.y)).toBe(7);
+    const part = spectrumSeries(spectrum, 1, { min: 20_000, max: 20_001 }, same);
+    expect([...part.x]).toEqual([19_999.5, 20_000, 20_000.5, 20_001, 20_001.5]);
+    expect([...part.y]).toEqual([0, 0, 7, 0, 0]);
+  });
+
+  it('begins where integration has hidden nothing', () => {
+    const shown = spectrumInUnit(aSpectrum(), 'm/s²', 'mm/s', 'peak');
+    const { x } = spectrumSeries(shown, 1, { min: 0, max: 10 }, (value) => value);
+    expect(x[0]).toBe(1.5);
+    expect(peakNear(shown, 1, 1)?.frequencyHz).toBe(1.5);
   });
 
   it('reads another survey off at its own lines', () => {
     const front = { x: Float64Array.from([0, 1, 2]), y: Float64Array.from([1, 1, 1]) };
     const behind = { x: Float64Array.from([0, 2]), y: Float64Array.from([0, 10]) };
-    expect(alignedData(front, behind)[1]).toEqual([0, 5, 10]);
+    expect(alignedData(front, [behind])[1]).toEqual([0, 5, 10]);
+  });
+});
+
+describe('the noise floor', () => {
+  it('lies at the noise and not at the lines', () => {
+    const { amplitude } = noiseFloorLine(aSpectrum(), speedHz);
+    // A constant is its own median; the mean of noise of that median is 1/√ln 2 as high.
+    expect(amplitude[50]).toBeCloseTo(0.01 / Math.sqrt(Math.LN2), 4);
+  });
+});
+
+describe('what is said of a spectrum in another unit', () => {
+  const shownIn = (shownUnit: 'mm/s' | 'g' | 'µm', scale: 'linear' | 'db') =>
+    shownSpectrum(aSpectrum(), null, speedHz, {
+      recordedUnit: 'mm/s',
+      shownUnit,
+      detector: 'rms',
+      scale,
+    });
+
+  it('is that it was integrated, from where on, or differentiated', () => {
+    expect(shownIn('µm', 'linear').remark).toBe(
+      'Integrated from mm/s; nothing is shown below 1.5 Hz.',
+    );
+    expect(shownIn('g', 'linear').remark).toBe('Differentiated from mm/s.');
+    expect(shownIn('mm/s', 'linear').remark).toBe('');
+  });
+
+  it('is the reference of a level', () => {
+    const { label, remark, heightOf } = shownIn('mm/s', 'db');
+    expect(label).toBe('dB re 1 nm/s, rms');
+    expect(remark).toBe('0 dB is 1 nm/s (ISO 1683).');
+    expect(heightOf(1)).toBeCloseTo(120, 9);
   });
 });
 

@@ -3,7 +3,13 @@ import { afterEach, describe, expect, it } from 'vitest';
 import './browser-stubs.ts';
 import { firstOrderSine } from '#src/charts/averaged-revolution.ts';
 import { AveragedRevolutionPlot } from '#src/charts/averaged-revolution-plot.tsx';
-import { cursorIndex, zoomedWindow } from '#src/charts/plot-keys.ts';
+import {
+  pannedWindow,
+  windowShowing,
+  windowWithin,
+  zoomedWindow,
+} from '#src/charts/plot-window.ts';
+import { cursorIndex } from '#src/charts/uplot-chart.tsx';
 import { mergedSpans, revolutionTimes, stretchesOf } from '#src/charts/waveform-geometry.ts';
 import { WaveformPlot } from '#src/charts/waveform-plot.tsx';
 
@@ -60,6 +66,25 @@ describe('zooming by key', () => {
   it('does nothing at the whole and at the smallest window', () => {
     expect(zoomedWindow(whole, whole, 50, 2)).toBeNull();
     expect(zoomedWindow({ min: 50, max: 50.0001 }, whole, 50, 0.5)).toBeNull();
+  });
+
+  it('moves along as far as the record goes', () => {
+    expect(pannedWindow({ min: 10, max: 30 }, whole, 0.5)).toEqual({ min: 20, max: 40 });
+    expect(pannedWindow({ min: 70, max: 90 }, whole, 1)).toEqual({ min: 80, max: 100 });
+    expect(pannedWindow({ min: 0, max: 20 }, whole, -0.5)).toBeNull();
+    expect(pannedWindow(whole, whole, 0.5)).toBeNull();
+  });
+
+  it('follows a cursor out of sight', () => {
+    expect(windowShowing({ min: 10, max: 30 }, whole, 20)).toEqual({ min: 10, max: 30 });
+    expect(windowShowing({ min: 10, max: 30 }, whole, 32)).toEqual({ min: 14, max: 34 });
+    expect(windowShowing({ min: 10, max: 30 }, whole, 1)).toEqual({ min: 0, max: 20 });
+  });
+
+  it('shows the whole of a record in which the window kept from another one does not lie', () => {
+    expect(windowWithin({ min: 20, max: 30 }, whole)).toEqual({ min: 20, max: 30 });
+    expect(windowWithin({ min: 90, max: 130 }, whole)).toEqual({ min: 90, max: 100 });
+    expect(windowWithin({ min: 120, max: 130 }, whole)).toEqual(whole);
   });
 
   it('moves the cursor within what is in sight, from the middle at first', () => {
