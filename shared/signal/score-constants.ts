@@ -27,7 +27,7 @@ export const scoreConstants = {
   perAlone: 0.19629,
   perRough: 0.37937,
   /** Reciprocating machines show such families when sound, so theirs say little: by judgement. */
-  perNature: 8,
+  perNature: 6,
   /** Orders that something known explains. */
   perUnexplained: 0.7213,
 } as const;
