@@ -28,6 +28,8 @@ import { todayAnywhere } from './features/inspections/today-anywhere.ts';
 import { inspectionRoutes } from './features/inspections/inspection.routes.ts';
 import { InspectionService } from './features/inspections/inspection.service.ts';
 import { memberRoutes } from './features/members/members.routes.ts';
+import { outcomesRoutes } from './features/outcomes/outcomes.routes.ts';
+import { OutcomesService } from './features/outcomes/outcomes.service.ts';
 import { outboxRoutes } from './features/outbox/outbox.routes.ts';
 import { OutboxService } from './features/outbox/outbox.service.ts';
 import { fitChecks } from './features/register/fit-checks.ts';
@@ -215,6 +217,7 @@ export function compose(
     ...reviewRoutes(review),
     ...findingRoutes(findings),
     ...inspectionRoutes(inspections),
+    ...outcomesRoutes(new OutcomesService(database)),
     ...siteExportRoutes(siteExports),
     ...deskRoutes(desk, new ChangeInspection(database, inspectionNeighbours, now)),
     ...(config.demo ? demoMailboxRoutes(demoMails, options.publicUrl) : []),

@@ -83,6 +83,7 @@ export const accessMatrix: Readonly<Record<string, Allowed>> = {
   'POST /api/sites/:siteId/inspections/:inspectionId/reassign': lead,
   'POST /api/sites/:siteId/inspections/:inspectionId/due-date': lead,
   'POST /api/sites/:siteId/inspections/:inspectionId/remind': lead,
+  'GET /api/sites/:siteId/outcomes': work,
   'GET /api/sites/:siteId/inspections': all,
   'GET /api/sites/:siteId/inspections/:inspectionId': all,
   'POST /api/sites/:siteId/inspections/:inspectionId/accept': owner,
