@@ -20,6 +20,7 @@ const pages: readonly { path: string; label: string; roles: readonly SiteRole[] 
   { path: 'findings', label: 'Findings', roles: ['analyst', 'lead', 'owner'] },
   { path: 'desk', label: 'Desk', roles: ['lead'] },
   { path: 'inspections', label: 'Inspections', roles: ['analyst', 'lead', 'owner'] },
+  { path: 'outcomes', label: 'Outcomes', roles: ['analyst', 'lead'] },
   { path: 'machines', label: 'Machines', roles: ['analyst', 'lead', 'owner'] },
   { path: 'routes', label: 'Routes', roles: ['analyst', 'lead'] },
   { path: 'fit-workbench', label: 'Fit workbench', roles: ['analyst', 'lead', 'owner'] },

@@ -63,6 +63,10 @@ const pages: Readonly<Record<string, Load>> = {
     const { findingLoader, FindingPage } = await import('./routes/finding.tsx');
     return { loader: findingLoader, Component: FindingPage };
   },
+  outcomes: async () => {
+    const { outcomesLoader, OutcomesPage } = await import('./routes/outcomes.tsx');
+    return { loader: outcomesLoader, Component: OutcomesPage };
+  },
   inspections: async () => {
     const { inspectionsLoader, InspectionsPage } = await import('./routes/inspections.tsx');
     return { loader: inspectionsLoader, Component: InspectionsPage };
