@@ -5,7 +5,7 @@ import { formatFixed } from '#src/lib/numbers.ts';
 import { integrates, levelDb, levelReferenceWords, spectrumInUnit } from './amplitude-unit.ts';
 import { noiseFloorLine } from './noise-floor-line.ts';
 import { logFloor, type Spectrum } from './spectrum-data.ts';
-import type { AmplitudeScale } from './spectrum-options.ts';
+import type { AmplitudeScale } from './amplitude-scale.ts';
 
 export interface AmplitudeSettings {
   /** Unit of what was recorded. */

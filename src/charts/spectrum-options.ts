@@ -1,13 +1,11 @@
 import uPlot from 'uplot';
+import type { AmplitudeScale } from './amplitude-scale.ts';
 import { chartBase, xAxis, yAxis } from './chart-axes.ts';
 import type { ChartPalette } from './chart-palette.ts';
 import { frequencyUnitWords, type FrequencyUnit } from './frequency-axis.ts';
 import { drawSpectrumMarks } from './spectrum-overlay.ts';
 import type { SpectrumMark } from './spectrum-data.ts';
 import type { ChartOptions } from './plot-stage.ts';
-
-export const amplitudeScales = ['linear', 'log', 'db'] as const;
-export type AmplitudeScale = (typeof amplitudeScales)[number];
 
 export interface SpectrumOptionsInput {
   palette: ChartPalette;

@@ -2,6 +2,7 @@ import { useId, useMemo, useState, type KeyboardEvent } from 'react';
 import type { Detector } from '#shared/quantities/detector.ts';
 import type { Unit } from '#shared/quantities/quantity.ts';
 import { alignedData } from './aligned-data.ts';
+import type { AmplitudeScale } from './amplitude-scale.ts';
 import { useChartPalette } from './chart-palette.ts';
 import { perHz, usableUnit, type FrequencyUnit } from './frequency-axis.ts';
 import type { OrderMark } from './order-mark.ts';
@@ -15,7 +16,7 @@ import { cursorKindOfKey, SpectrumCursorChoice } from './spectrum-cursor-choice.
 import { spectrumCursorOverlay } from './spectrum-cursor-overlay.ts';
 import { linesIn, plotMaxPoints, spectrumMarks, spectrumSeries } from './spectrum-data.ts';
 import type { Spectrum, SpectrumMark } from './spectrum-data.ts';
-import { spectrumOptions, type AmplitudeScale, type PlotPlace } from './spectrum-options.ts';
+import { spectrumOptions, type PlotPlace } from './spectrum-options.ts';
 import { amplitudeTextOf, cursorReading, readingAt } from './spectrum-reading.ts';
 import { SpectrumStrip } from './spectrum-strip.tsx';
 import { SpectrumTable } from './spectrum-table.tsx';

@@ -10,7 +10,14 @@ import { Pager } from '#src/components/pager.tsx';
 import { Select } from '#src/components/select.tsx';
 import { verdictWords } from '#src/components/verdict-mark.tsx';
 import { reviewQueueQuery } from '#src/features/review/api/review.ts';
-import { readPlotSettings } from '#src/features/review/components/plot-settings.tsx';
+import {
+  keepPlotSettings,
+  preferredPlotSettings,
+} from '#src/features/review/components/plot-preferences.ts';
+import {
+  readPlotSettings,
+  settingTexts,
+} from '#src/features/review/components/plot-settings-value.ts';
 import { ReviewDesk } from '#src/features/review/components/review-desk.tsx';
 import { readListQuery, useListAddress } from '../list-address.ts';
 import { useSite } from '../site-context.ts';
@@ -32,11 +39,18 @@ function readScreeningId(search: URLSearchParams): number | undefined {
   return Number.isSafeInteger(id) && id > 0 ? id : undefined;
 }
 
+const flagProblems = (search: URLSearchParams): string[] =>
+  search.has('screening') && readScreeningId(search) === undefined
+    ? [`“${search.get('screening')}” is no flag.`]
+    : [];
+
 export function ReviewPage() {
-  const { siteId } = useSite();
+  const { siteId, session } = useSite();
   const { search, set } = useListAddress();
   const query = readListQuery(reviewQueueContract, search);
   const screeningId = readScreeningId(search);
+  // Read anew with each render: a choice made here is the preference at once.
+  const plots = readPlotSettings(search, preferredPlotSettings(session.userId));
   const { data } = useQuery({
     ...reviewQueueQuery(siteId, query),
     placeholderData: keepPreviousData,
@@ -105,7 +119,9 @@ export function ReviewPage() {
           siteId={siteId}
           items={items}
           screeningId={screeningId}
-          plotSettings={readPlotSettings(search)}
+          search={search}
+          plotSettings={plots.settings}
+          problems={[...flagProblems(search), ...plots.problems]}
           empty={
             <EmptyState
               title={
@@ -126,7 +142,11 @@ export function ReviewPage() {
             </EmptyState>
           }
           onSelect={(id) => set({ screening: id, page })}
-          onPlotSettings={(changes) => set({ ...changes, page })}
+          onPlotSettings={(changes) => {
+            keepPlotSettings(session.userId, { ...plots.settings, ...changes });
+            set({ ...settingTexts(changes), page });
+          }}
+          onAddress={(changes) => set({ ...changes, page })}
         />
       )}
       {data !== undefined && data.total > query.pageSize && (

@@ -1,7 +1,7 @@
 import { useState } from 'react';
 import { AveragedRevolutionPlot } from '#src/charts/averaged-revolution-plot.tsx';
 import type { FrequencyUnit } from '#src/charts/frequency-axis.ts';
-import type { AmplitudeScale } from '#src/charts/spectrum-options.ts';
+import type { AmplitudeScale } from '#src/charts/amplitude-scale.ts';
 import { SpectrumPlot } from '#src/charts/spectrum-plot.tsx';
 import { WaveformPlot } from '#src/charts/waveform-plot.tsx';
 import { Panel } from '#src/components/panel.tsx';

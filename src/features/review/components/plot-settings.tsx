@@ -1,49 +1,75 @@
+import { detectors, type Detector } from '#shared/quantities/detector.ts';
+import { units, type Unit } from '#shared/quantities/quantity.ts';
 import { frequencyUnits, type FrequencyUnit } from '#src/charts/frequency-axis.ts';
-import type { AmplitudeScale } from '#src/charts/spectrum-options.ts';
+import { amplitudeScales, type AmplitudeScale } from '#src/charts/amplitude-scale.ts';
 import { Select } from '#src/components/select.tsx';
+import { settingText, type PlotSettingsValue } from './plot-settings-value.ts';
 
-export interface PlotSettingsValue {
-  frequencyUnit: FrequencyUnit;
-  amplitudeScale: AmplitudeScale;
-}
-
-const unitLabels: Readonly<Record<FrequencyUnit, string>> = {
+const frequencyLabels: Readonly<Record<FrequencyUnit, string>> = {
   hz: 'Hz',
   cpm: '1/min',
   orders: 'Orders',
 };
 
-/** The plots' settings as the address keeps them; what it doesn't know is the default. */
-export const readPlotSettings = (search: URLSearchParams): PlotSettingsValue => ({
-  frequencyUnit: frequencyUnits.find((unit) => unit === search.get('axis')) ?? 'orders',
-  amplitudeScale: search.get('scale') === 'log' ? 'log' : 'linear',
-});
+const scaleLabels: Readonly<Record<AmplitudeScale, string>> = {
+  linear: 'Linear',
+  log: 'Logarithmic',
+  db: 'dB',
+};
 
+const detectorLabels: Readonly<Record<Detector, string>> = {
+  rms: 'rms',
+  peak: 'Peak',
+  'peak-to-peak': 'Peak-to-peak',
+};
+
+/** In what the spectra are shown; chosen once, it holds for every flag. */
 export function PlotSettings({
   value,
+  recordedUnit,
   onChange,
 }: {
   value: PlotSettingsValue;
-  onChange: (changes: { axis?: string; scale?: string }) => void;
+  recordedUnit: Unit;
+  onChange: (changes: Partial<PlotSettingsValue>) => void;
 }) {
   return (
     <div className="flex flex-wrap gap-2">
       <Select
-        aria-label="Frequency axis"
-        className="w-28"
-        value={value.frequencyUnit}
-        options={frequencyUnits.map((unit) => ({ value: unit, label: unitLabels[unit] }))}
-        onChange={({ target }) => onChange({ axis: target.value })}
+        aria-label="Unit"
+        className="w-40"
+        value={settingText(value.shownUnit)}
+        options={[
+          { value: settingText(null), label: `As recorded (${recordedUnit})` },
+          ...units.map((unit) => ({ value: unit, label: unit })),
+        ]}
+        onChange={({ target }) =>
+          onChange({ shownUnit: units.find((unit) => unit === target.value) ?? null })
+        }
+      />
+      <Select
+        aria-label="Size stated as"
+        className="w-32"
+        value={value.detector}
+        options={detectors.map((detector) => ({
+          value: detector,
+          label: detectorLabels[detector],
+        }))}
+        onChange={({ target }) => onChange({ detector: target.value as Detector })}
       />
       <Select
         aria-label="Amplitude axis"
         className="w-32"
         value={value.amplitudeScale}
-        options={[
-          { value: 'linear', label: 'Linear' },
-          { value: 'log', label: 'Logarithmic' },
-        ]}
-        onChange={({ target }) => onChange({ scale: target.value })}
+        options={amplitudeScales.map((scale) => ({ value: scale, label: scaleLabels[scale] }))}
+        onChange={({ target }) => onChange({ amplitudeScale: target.value as AmplitudeScale })}
+      />
+      <Select
+        aria-label="Frequency axis"
+        className="w-24"
+        value={value.frequencyUnit}
+        options={frequencyUnits.map((unit) => ({ value: unit, label: frequencyLabels[unit] }))}
+        onChange={({ target }) => onChange({ frequencyUnit: target.value as FrequencyUnit })}
       />
     </div>
   );

@@ -5,12 +5,15 @@ import { Button } from '#src/components/button.tsx';
 import { KeyHint } from '#src/components/key-hint.tsx';
 import { prefetchItem } from '../api/recordings.ts';
 import { DecisionBar } from './decision-bar.tsx';
-import type { PlotSettingsValue } from './plot-settings.tsx';
+import { Notice } from '#src/components/notice.tsx';
+import { readPlotPlaces } from './plot-address.ts';
+import type { PlotSettingsValue } from './plot-settings-value.ts';
 import { QueueList } from './queue-list.tsx';
 import { ReasonDialog } from './reason-dialog.tsx';
 import { decisionWords } from './review-words.ts';
 import { ScreeningView } from './screening-view.tsx';
 import { Shortcuts, useShortcutsOn } from './shortcuts.tsx';
+import { usePlotPlaces, type AddressChanges } from './use-plot-places.ts';
 import { useReviewDecisions } from './use-review-decisions.ts';
 import { useReviewKeys } from './use-review-keys.ts';
 
@@ -19,16 +22,23 @@ export interface ReviewDeskProps {
   items: readonly ReviewQueueItem[];
   /** The screening the address names; else the first of the queue is open. */
   screeningId: number | undefined;
+  /** The address, which keeps zoom and cursor. */
+  search: URLSearchParams;
   plotSettings: PlotSettingsValue;
+  /** What else of the address was not understood, in sentences. */
+  problems: readonly string[];
   /** Shown when nothing waits; the last decision stays beside it, to be undone. */
   empty: ReactNode;
   onSelect: (screeningId: number | undefined) => void;
-  onPlotSettings: (changes: { axis?: string; scale?: string }) => void;
+  onPlotSettings: (changes: Partial<PlotSettingsValue>) => void;
+  onAddress: (changes: AddressChanges) => void;
 }
 
 /** The queue on one side, the flag on the other; everything by keys as well. */
 export function ReviewDesk(props: ReviewDeskProps) {
-  const { siteId, items, plotSettings, onSelect, onPlotSettings } = props;
+  const { siteId, items, search, plotSettings, onSelect, onPlotSettings } = props;
+  const places = usePlotPlaces(search, props.onAddress);
+  const problems = [...props.problems, ...readPlotPlaces(search).problems];
   const client = useQueryClient();
   const [asking, setAsking] = useState<'rejected' | 'retake' | null>(null);
   const [showsKeys, setShowsKeys] = useState(false);
@@ -103,27 +113,35 @@ export function ReviewDesk(props: ReviewDeskProps) {
         </Button>
       </div>
       {screeningId !== undefined && (
-        <ScreeningView
-          siteId={siteId}
-          screeningId={screeningId}
-          waveformId={item?.waveformId}
-          plotSettings={plotSettings}
-          onPlotSettings={onPlotSettings}
-          decision={
-            isOpen ? (
-              <DecisionBar busy={decisions.busy} keysOn={keysOn} onDecide={choose} />
-            ) : item?.decision ? (
-              <div className="flex flex-wrap items-center gap-3 text-sm">
-                <span>
-                  {decisionWords[item.decision]} by {item.decidedByName}
-                </span>
-                <Button size="small" onClick={() => decisions.takeBack(item.screeningId)}>
-                  Take back
-                </Button>
-              </div>
-            ) : null
-          }
-        />
+        <div className="flex min-w-0 flex-col gap-4">
+          {problems.length > 0 && (
+            <Notice title="A part of the address was not understood and is left out">
+              {problems.join(' ')}
+            </Notice>
+          )}
+          <ScreeningView
+            siteId={siteId}
+            screeningId={screeningId}
+            waveformId={item?.waveformId}
+            plotSettings={plotSettings}
+            places={places}
+            onPlotSettings={onPlotSettings}
+            decision={
+              isOpen ? (
+                <DecisionBar busy={decisions.busy} keysOn={keysOn} onDecide={choose} />
+              ) : item?.decision ? (
+                <div className="flex flex-wrap items-center gap-3 text-sm">
+                  <span>
+                    {decisionWords[item.decision]} by {item.decidedByName}
+                  </span>
+                  <Button size="small" onClick={() => decisions.takeBack(item.screeningId)}>
+                    Take back
+                  </Button>
+                </div>
+              ) : null
+            }
+          />
+        </div>
       )}
       {asking !== null && item !== undefined && (
         <ReasonDialog

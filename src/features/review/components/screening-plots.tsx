@@ -4,10 +4,11 @@ import { orderCellsOf } from '#shared/contracts/order-cells.ts';
 import type { ScreeningResponse } from '#shared/contracts/screening.ts';
 import type { WaveformResponse } from '#shared/contracts/waveform.ts';
 import { AveragedRevolutionPlot } from '#src/charts/averaged-revolution-plot.tsx';
-import type { FrequencyUnit } from '#src/charts/frequency-axis.ts';
+import type { Window } from '#src/charts/plot-window.ts';
 import type { Spectrum } from '#src/charts/spectrum-data.ts';
-import type { AmplitudeScale } from '#src/charts/spectrum-options.ts';
 import { SpectrumPlot } from '#src/charts/spectrum-plot.tsx';
+import type { SpectrumView } from '#src/charts/spectrum-view.ts';
+import type { Store } from '#src/charts/store.ts';
 import { WaveformPlot } from '#src/charts/waveform-plot.tsx';
 import { ErrorState } from '#src/components/error-state.tsx';
 import { PlotSkeleton } from '#src/components/skeleton.tsx';
@@ -18,6 +19,7 @@ import {
   spectrumQuery,
   waveformQuery,
 } from '../api/recordings.ts';
+import type { PlotSettingsValue } from './plot-settings-value.ts';
 
 const spectrumHeightPx = 230;
 const waveformHeightPx = 190;
@@ -60,9 +62,9 @@ export function ScreeningSpectrum({
   siteId,
   screening,
   waveform,
-  frequencyUnit,
-  amplitudeScale,
-}: PlotProps & { frequencyUnit: FrequencyUnit; amplitudeScale: AmplitudeScale }) {
+  settings,
+  view,
+}: PlotProps & { settings: PlotSettingsValue; view: SpectrumView }) {
   const { result } = screening;
   const spectrum = useQuery(spectrumQuery(siteId, screening.id));
   const previous = usePreviousSpectrum(siteId, waveform);
@@ -78,8 +80,11 @@ export function ScreeningSpectrum({
       speedHz={result.speed.speedHz}
       orders={orders}
       run={result.harmonicRun}
-      frequencyUnit={frequencyUnit}
-      amplitudeScale={amplitudeScale}
+      {...(settings.shownUnit && { shownUnit: settings.shownUnit })}
+      detector={settings.detector}
+      frequencyUnit={settings.frequencyUnit}
+      amplitudeScale={settings.amplitudeScale}
+      view={view}
       previous={previous}
       heightPx={spectrumHeightPx}
     />
@@ -87,7 +92,12 @@ export function ScreeningSpectrum({
 }
 
 /** The waveform, and one averaged revolution where a speed is known. */
-export function ScreeningWaveform({ siteId, screening, waveform }: PlotProps) {
+export function ScreeningWaveform({
+  siteId,
+  screening,
+  waveform,
+  view,
+}: PlotProps & { view: Store<Window | null> }) {
   const { result } = screening;
   const samples = useQuery(samplesQuery(siteId, waveform.id));
   const turn = useQuery({
@@ -106,6 +116,7 @@ export function ScreeningWaveform({ siteId, screening, waveform }: PlotProps) {
           unit={waveform.unit}
           speedHz={result.speed.speedHz}
           truncation={result.truncation}
+          view={view}
           heightPx={waveformHeightPx}
         />
       )}

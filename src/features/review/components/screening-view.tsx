@@ -11,9 +11,12 @@ import { formatFixed } from '#src/lib/numbers.ts';
 import { screeningQuery, waveformQuery } from '../api/recordings.ts';
 import { CorrectSpeed } from './correct-speed.tsx';
 import { Evidence } from './evidence.tsx';
-import { PlotSettings, type PlotSettingsValue } from './plot-settings.tsx';
+import { perHz } from '#src/charts/frequency-axis.ts';
+import { PlotSettings } from './plot-settings.tsx';
+import type { PlotSettingsValue } from './plot-settings-value.ts';
 import { ScreeningFacts } from './screening-facts.tsx';
 import { ScreeningSpectrum, ScreeningWaveform } from './screening-plots.tsx';
+import { rescalePlaces, type PlotPlacesState } from './use-plot-places.ts';
 
 /** One screening whole: verdict and decision on top, plots, figures, evidence. */
 export function ScreeningView({
@@ -21,6 +24,7 @@ export function ScreeningView({
   screeningId,
   waveformId,
   plotSettings,
+  places,
   onPlotSettings,
   decision,
 }: {
@@ -29,7 +33,8 @@ export function ScreeningView({
   /** Where the queue knows it, the waveform is fetched at once and not after the screening. */
   waveformId: number | undefined;
   plotSettings: PlotSettingsValue;
-  onPlotSettings: (changes: { axis?: string; scale?: string }) => void;
+  places: PlotPlacesState;
+  onPlotSettings: (changes: Partial<PlotSettingsValue>) => void;
   /** Buttons, or what was decided. */
   decision: ReactNode;
 }) {
@@ -52,6 +57,14 @@ export function ScreeningView({
     );
   }
   const result = screening.data?.result;
+  const changeSettings = (changes: Partial<PlotSettingsValue>) => {
+    if (changes.frequencyUnit !== undefined) {
+      const speedHz = result?.speed.speedHz ?? null;
+      const before = perHz(plotSettings.frequencyUnit, speedHz);
+      rescalePlaces(places, perHz(changes.frequencyUnit, speedHz) / before);
+    }
+    onPlotSettings(changes);
+  };
   return (
     <div className="flex min-w-0 flex-col gap-4">
       <header className="flex flex-wrap items-center justify-between gap-x-5 gap-y-2 border-y border-ink bg-sheet px-4 py-2 phone:border-x lg:sticky lg:top-0 lg:z-20">
@@ -77,13 +90,18 @@ export function ScreeningView({
           <div className="border border-hairline bg-sheet p-4">
             <div className="mb-2 flex flex-wrap items-center justify-between gap-2">
               <CorrectSpeed siteId={siteId} waveform={waveform.data} />
-              <PlotSettings value={plotSettings} onChange={onPlotSettings} />
+              <PlotSettings
+                value={plotSettings}
+                recordedUnit={waveform.data.unit}
+                onChange={changeSettings}
+              />
             </div>
             <ScreeningSpectrum
               siteId={siteId}
               screening={screening.data}
               waveform={waveform.data}
-              {...plotSettings}
+              settings={plotSettings}
+              view={places.spectrum}
             />
           </div>
           <Panel title="Evidence">
@@ -94,6 +112,7 @@ export function ScreeningView({
               siteId={siteId}
               screening={screening.data}
               waveform={waveform.data}
+              view={places.stretchS}
             />
           </div>
           <Panel title="Figures">

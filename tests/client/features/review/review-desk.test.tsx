@@ -153,4 +153,62 @@ describe('the review desk', () => {
     await shown(labels[1]);
     expect(sent).toEqual([]);
   });
+
+  it('shows the spectrum in the unit chosen, which stays the person’s on this device', async () => {
+    const { router } = openDesk();
+    await shown(labels[1]);
+    const user = userEvent.setup();
+    await user.selectOptions(await screen.findByLabelText('Unit'), 'µm');
+    await user.selectOptions(screen.getByLabelText('Size stated as'), 'Peak-to-peak');
+    await screen.findByRole('application', { name: /Spectrum, µm peak-to-peak/ });
+    await screen.findByText(/Integrated from m\/s²; nothing is shown below 1\.5 Hz/);
+    expect(new URLSearchParams(router.state.location.search).get('unit')).toBe('µm');
+    cleanup();
+    openDesk();
+    await screen.findByRole('application', { name: /Spectrum, µm peak-to-peak/ });
+  });
+
+  it('says the reference of a level where the level is shown', async () => {
+    openDesk({}, '/sites/1/review?scale=db&unit=mm/s&size=rms');
+    await screen.findByRole('application', { name: /Spectrum, dB re 1 nm\/s, rms/ });
+    await screen.findByText(/0 dB is 1 nm\/s \(ISO 1683\)/);
+  });
+
+  it('opens with the cursor of the address and keeps it for the next flag', async () => {
+    openDesk({}, '/sites/1/review?cursor=harmonics_1&zoom=0.2_1.2');
+    await screen.findByText(/^Harmonics of 24\.60 Hz 1476 1\/min 1\.00×/);
+    await userEvent.keyboard('j');
+    await shown(labels[2]);
+    await screen.findByText(/^Harmonics of 24\.60 Hz/);
+    const group = within(screen.getByRole('group', { name: 'Cursor' }));
+    expect(group.getByRole('button', { name: 'Harmonics' }).getAttribute('aria-pressed')).toBe(
+      'true',
+    );
+  });
+
+  it('writes the cursor into the address, and carries it over to an axis in Hz', async () => {
+    const { router } = openDesk();
+    await shown(labels[1]);
+    const user = userEvent.setup();
+    await user.click(await screen.findByRole('button', { name: 'Sidebands' }));
+    const search = () => new URLSearchParams(router.state.location.search);
+    await waitFor(() => expect(search().get('cursor')).toMatch(/^sidebands_[\d.]+_1$/));
+    await user.selectOptions(screen.getByLabelText('Frequency axis'), 'Hz');
+    await waitFor(() => expect(search().get('cursor')).toMatch(/^sidebands_[\d.]+_24\.6$/));
+  });
+
+  it('leaves out what it does not understand of the address, and says so', async () => {
+    openDesk(
+      {},
+      '/sites/1/review?axis=bananas&zoom=9_2&cursor=harmonics_x&unit=parsec&screening=x',
+    );
+    await shown(labels[1]);
+    await screen.findByText('A part of the address was not understood and is left out');
+    screen.getByText(/“bananas” is no frequency axis\./);
+    screen.getByText(/“9_2” is no stretch of a spectrum\./);
+    screen.getByText(/“harmonics_x” is no cursor\./);
+    screen.getByText(/“parsec” is no unit of vibration/);
+    screen.getByText(/“x” is no flag\./);
+    await screen.findByRole('application', { name: /Spectrum, m\/s² peak/ });
+  });
 });

@@ -1,0 +1,2 @@
+export const amplitudeScales = ['linear', 'log', 'db'] as const;
+export type AmplitudeScale = (typeof amplitudeScales)[number];
