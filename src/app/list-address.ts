@@ -1,24 +1,26 @@
-import { useCallback } from 'react';
+import { useCallback, useEffect, useRef } from 'react';
 import { useSearchParams } from 'react-router-dom';
 
 /** State of a list in the address: sort, filters and page can be linked to and gone back to. */
 export function useListAddress() {
   const [search, setSearch] = useSearchParams();
+  // A second change may come before the address shows the first: it must not undo it.
+  const latest = useRef(search);
+  useEffect(() => {
+    latest.current = search;
+  }, [search]);
   const set = useCallback(
-    (changes: Record<string, string | number | undefined>) =>
-      setSearch(
-        (before) => {
-          const after = new URLSearchParams(before);
-          for (const [name, value] of Object.entries(changes)) {
-            if (value === undefined || value === '') after.delete(name);
-            else after.set(name, String(value));
-          }
-          // Whatever narrows or sorts the list anew begins at its first page.
-          if (!('page' in changes)) after.delete('page');
-          return after;
-        },
-        { replace: true },
-      ),
+    (changes: Record<string, string | number | undefined>) => {
+      const after = new URLSearchParams(latest.current);
+      for (const [name, value] of Object.entries(changes)) {
+        if (value === undefined || value === '') after.delete(name);
+        else after.set(name, String(value));
+      }
+      // Whatever narrows or sorts the list anew begins at its first page.
+      if (!('page' in changes)) after.delete('page');
+      latest.current = after;
+      setSearch(after, { replace: true });
+    },
     [setSearch],
   );
   return { search, set };

@@ -28,11 +28,12 @@ export function PlotFrame({
   return (
     <figure aria-label={title} className="flex flex-col gap-1">
       <figcaption className="flex min-h-6 flex-wrap items-baseline justify-between gap-x-4">
-        <span className="flex flex-wrap items-baseline gap-x-4">
+        <span className={`flex flex-wrap items-baseline gap-x-4 ${tools ? 'w-full' : ''}`}>
           <span className="font-semibold">{title}</span>
           {tools}
         </span>
-        {reading}
+        {/* Room for a line from the first: what is read must not push the plot about. */}
+        <span className="min-h-5">{reading}</span>
       </figcaption>
       {children}
       <p id={keysHintId} className="sr-only">

@@ -16,7 +16,10 @@ export function PlotReading<Cursor>({
   const set = useStore(cursor);
   return (
     // Keys say where they have gone to; a pointer's every move would be noise.
-    <output aria-live={x === null ? 'polite' : 'off'} className="figures text-sm">
+    <output
+      aria-live={x === null ? 'polite' : 'off'}
+      className="figures text-sm whitespace-pre-wrap"
+    >
       {x === null ? readCursor(set) : readHover(x)}
     </output>
   );
@@ -32,7 +35,7 @@ export function PointerReading({
 }) {
   const x = useStore(at);
   return (
-    <output aria-live="polite" className="figures text-sm">
+    <output aria-live="polite" className="figures text-sm whitespace-pre-wrap">
       {x === null ? '' : read(x)}
     </output>
   );

@@ -7,8 +7,7 @@ export interface ReadableSpectrum {
   spectrum: Spectrum;
   speedHz: number | null;
   unitsPerHz: number;
-  /** An amplitude with its unit, as the plot's scale states it. */
-  amplitudeText: (amplitude: number) => string;
+  amplitudeText: AmplitudeText;
 }
 
 /** Lines of a family whose amplitudes are read out. */
@@ -18,33 +17,32 @@ const linesRead = 5;
 export function readingAt(readable: ReadableSpectrum, x: number): string {
   const { spectrum, speedHz, unitsPerHz } = readable;
   const { stepHz, amplitude } = spectrum;
+  const { figure, unit } = readable.amplitudeText;
   const nearest = Math.round(x / unitsPerHz / stepHz);
   const line = Math.min(amplitude.length - 1, Math.max(0, nearest));
-  return [
-    frequencyText(line * stepHz, speedHz),
-    amplitudeWords(readable, amplitude[line] ?? Number.NaN),
-  ].join('  ');
+  const value = amplitude[line] ?? Number.NaN;
+  const height = Number.isNaN(value) ? 'below the high-pass' : `${figure(value)} ${unit}`;
+  return `${frequencyText(line * stepHz, speedHz)}  ${height}`;
 }
 
 /** What the cursor that was set says; empty where none is. */
 export function cursorReading(readable: ReadableSpectrum, cursor: SpectrumCursor): string {
-  const { speedHz, unitsPerHz } = readable;
+  const { unitsPerHz } = readable;
   if (cursor.kind === 'free') return cursor.at === null ? '' : readingAt(readable, cursor.at);
   if (cursor.kind === 'harmonics') {
     const ofHz = cursor.of / unitsPerHz;
-    const read = Array.from({ length: linesRead }, (_, index) => {
-      const text = nearText(readable, (index + 1) * ofHz);
-      return text === null ? [] : [`${index + 1}: ${text}`];
-    });
-    return `Harmonics of ${frequencyText(ofHz, speedHz)}  ${read.flat().join('  ')}`;
+    const first = Array.from({ length: linesRead }, (_, index) => index + 1);
+    const lines = first.map((order) => ({ name: `${order}×`, atHz: order * ofHz }));
+    return `Harmonics of ${placeText(readable, ofHz)}  ${linesText(readable, lines)}`;
   }
   const aboutHz = cursor.about / unitsPerHz;
   const spacingHz = cursor.spacing / unitsPerHz;
-  const read = [-1, 0, 1].flatMap((side) => {
-    const text = nearText(readable, aboutHz + side * spacingHz);
-    return text === null ? [] : [`${['−1', '0', '+1'][side + 1] ?? ''}: ${text}`];
-  });
-  return `Sidebands about ${frequencyText(aboutHz, speedHz)}, ${frequencyText(spacingHz, speedHz)} apart  ${read.join('  ')}`;
+  const lines = [
+    { name: '−1', atHz: aboutHz - spacingHz },
+    { name: '0', atHz: aboutHz },
+    { name: '+1', atHz: aboutHz + spacingHz },
+  ];
+  return `Sidebands of ${placeText(readable, aboutHz)} at ${placeText(readable, spacingHz)}  ${linesText(readable, lines)}`;
 }
 
 function frequencyText(frequencyHz: number, speedHz: number | null): string {
@@ -56,24 +54,39 @@ function frequencyText(frequencyHz: number, speedHz: number | null): string {
   return parts.join('  ');
 }
 
-/** The greatest line near a place: a family seldom falls on lines. */
-function nearText(readable: ReadableSpectrum, frequencyHz: number): string | null {
+/** Shorter: what is read at a family has to stand beside it. */
+function placeText({ speedHz }: ReadableSpectrum, frequencyHz: number): string {
+  const order = speedHz === null ? '' : ` (${formatFixed(frequencyHz / speedHz, 3)}×)`;
+  return `${formatFixed(frequencyHz, 2)} Hz${order}`;
+}
+
+/** The greatest line near each place (a family seldom falls on lines), the unit once behind them. */
+function linesText(
+  readable: ReadableSpectrum,
+  places: readonly { name: string; atHz: number }[],
+): string {
   const { spectrum, amplitudeText } = readable;
-  const peak = peakNear(spectrum, frequencyHz, 1.5 * spectrum.stepHz);
-  return peak && amplitudeText(peak.amplitude);
+  const read = places.flatMap(({ name, atHz }) => {
+    const peak = peakNear(spectrum, atHz, 1.5 * spectrum.stepHz);
+    return peak === null ? [] : [`${name} ${amplitudeText.figure(peak.amplitude)}`];
+  });
+  return `${read.join('  ')} ${amplitudeText.unit}`;
 }
 
-function amplitudeWords({ amplitudeText }: ReadableSpectrum, amplitude: number): string {
-  return Number.isNaN(amplitude) ? 'below the high-pass' : amplitudeText(amplitude);
+/** How a plot's scale states amplitudes. */
+export interface AmplitudeText {
+  figure: (amplitude: number) => string;
+  unit: string;
 }
 
-/** "3.2 mm/s peak", "130.1 dB re 1 nm/s, peak". */
+/** "3.2" and "mm/s peak", or "130.1" and "dB": its reference stands at the axis. */
 export function amplitudeTextOf(
   label: string,
   levelOf: ((amplitude: number) => number) | null,
-): (amplitude: number) => string {
-  return (amplitude) => {
-    if (levelOf === null) return `${formatSignificant(amplitude)} ${label}`;
-    return amplitude > 0 ? `${formatFixed(levelOf(amplitude), 1)} ${label}` : `no level, ${label}`;
+): AmplitudeText {
+  if (levelOf === null) return { figure: formatSignificant, unit: label };
+  return {
+    figure: (amplitude) => (amplitude > 0 ? formatFixed(levelOf(amplitude), 1) : 'no level'),
+    unit: 'dB',
   };
 }

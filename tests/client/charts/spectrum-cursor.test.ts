@@ -8,7 +8,7 @@ import {
   steppedCursor,
   type SpectrumCursor,
 } from '#src/charts/spectrum-cursor.ts';
-import { cursorReading, readingAt } from '#src/charts/spectrum-reading.ts';
+import { amplitudeTextOf, cursorReading, readingAt } from '#src/charts/spectrum-reading.ts';
 
 const whole = { min: 0, max: 200 };
 const family: SpectrumCursor = { kind: 'harmonics', of: 24 };
@@ -107,7 +107,7 @@ describe('what a cursor reads', () => {
     spectrum: { stepHz: 0.5, amplitude },
     speedHz: 25,
     unitsPerHz: 1 / 25,
-    amplitudeText: (value: number) => `${value.toFixed(2)} mm/s peak`,
+    amplitudeText: { figure: (value: number) => value.toFixed(2), unit: 'mm/s peak' },
   };
 
   it('is frequency, order and amplitude of the line', () => {
@@ -116,13 +116,20 @@ describe('what a cursor reads', () => {
 
   it('is the greatest line near each multiple', () => {
     const text = cursorReading(readable, { kind: 'harmonics', of: 0.99 });
-    expect(text).toContain('Harmonics of 24.75 Hz');
-    expect(text).toContain('1: 3.00 mm/s peak  2: 1.50 mm/s peak');
+    expect(text).toBe(
+      'Harmonics of 24.75 Hz (0.990×)  1× 3.00  2× 1.50  3× 1.00  4× 0.01  5× 0.01 mm/s peak',
+    );
+  });
+
+  it('gives levels in dB, and none of nothing', () => {
+    const { figure, unit } = amplitudeTextOf('dB re 1 nm/s, rms', () => 120.04);
+    expect([figure(1), figure(0), unit]).toEqual(['120.0', 'no level', 'dB']);
   });
 
   it('is the centre, its neighbours and how far they are apart', () => {
     const text = cursorReading(readable, { kind: 'sidebands', about: 2, spacing: 1 });
-    expect(text).toContain('25.00 Hz  1500 1/min  1.00× apart');
-    expect(text).toContain('−1: 3.00 mm/s peak  0: 1.50 mm/s peak  +1: 1.00 mm/s peak');
+    expect(text).toBe(
+      'Sidebands of 50.00 Hz (2.000×) at 25.00 Hz (1.000×)  −1 3.00  0 1.50  +1 1.00 mm/s peak',
+    );
   });
 });
