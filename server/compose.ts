@@ -27,6 +27,8 @@ import { presentInspectionItem } from './features/inspections/inspection.present
 import { todayAnywhere } from './features/inspections/today-anywhere.ts';
 import { inspectionRoutes } from './features/inspections/inspection.routes.ts';
 import { InspectionService } from './features/inspections/inspection.service.ts';
+import { limitsRoutes } from './features/limits/limits.routes.ts';
+import { LimitsService } from './features/limits/limits.service.ts';
 import { memberRoutes } from './features/members/members.routes.ts';
 import { outcomesRoutes } from './features/outcomes/outcomes.routes.ts';
 import { OutcomesService } from './features/outcomes/outcomes.service.ts';
@@ -217,6 +219,7 @@ export function compose(
     ...reviewRoutes(review),
     ...findingRoutes(findings),
     ...inspectionRoutes(inspections),
+    ...limitsRoutes(new LimitsService(database, now)),
     ...outcomesRoutes(new OutcomesService(database)),
     ...siteExportRoutes(siteExports),
     ...deskRoutes(desk, new ChangeInspection(database, inspectionNeighbours, now)),

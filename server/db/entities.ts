@@ -5,6 +5,7 @@ import { FindingScreening } from './entities/finding-screening.entity.ts';
 import { Finding } from './entities/finding.entity.ts';
 import { FitRecord } from './entities/fit-record.entity.ts';
 import { Inspection } from './entities/inspection.entity.ts';
+import { LimitsChange } from './entities/limits-change.entity.ts';
 import { Machine } from './entities/machine.entity.ts';
 import { MailOptOut } from './entities/mail-opt-out.entity.ts';
 import { MeasuringPoint } from './entities/measuring-point.entity.ts';
@@ -32,6 +33,7 @@ export const entities = [
   FindingScreening,
   FitRecord,
   Inspection,
+  LimitsChange,
   Machine,
   MailOptOut,
   MeasuringPoint,

@@ -3,6 +3,7 @@ import type { Db } from '#server/db/database.ts';
 import { MeasuringPoint } from '#server/db/entities/measuring-point.entity.ts';
 import { Screening } from '#server/db/entities/screening.entity.ts';
 import { Waveform } from '#server/db/entities/waveform.entity.ts';
+import { LimitsRepository, methodLimits, type VerdictLimits } from './limits.repository.ts';
 import type { EarlierScreening } from '#shared/signal/screening-types.ts';
 
 export interface WaveformJob {
@@ -10,6 +11,8 @@ export interface WaveformJob {
   point: MeasuringPoint;
   otherShaftRatios: number[];
   earlier: EarlierScreening[];
+  /** In force for the site and the kind of machine when the work began. */
+  limits: VerdictLimits;
 }
 
 /** Earlier screenings that a new one is set against. */
@@ -69,9 +72,14 @@ export class ScreeningJobRepository {
       where: { id: waveform.measuringPointId },
       relations: { bearingPosition: { machine: true } },
     });
+    const machine = point.bearingPosition?.machine;
     return {
       waveform,
       point,
+      limits:
+        machine === undefined
+          ? methodLimits
+          : await new LimitsRepository(this.db).inForce(machine.siteId, machine.kind),
       otherShaftRatios: await this.otherShaftRatios(point),
       earlier: await this.earlierOf(waveform),
     };

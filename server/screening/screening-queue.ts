@@ -141,9 +141,9 @@ export class InProcessScreeningQueue implements ScreeningQueue {
   }
 
   private async screen(job: WaveformJob): Promise<ScreenAnswer> {
-    const { waveform, point } = job;
+    const { waveform, point, limits } = job;
     const samples = await this.deps.files.readSamples(waveform.contentHash, waveform.channelIndex);
-    return this.deps.workers.screen({
+    const input = {
       samples,
       sampleRateHz: waveform.sampleRateHz,
       unit: waveform.unit,
@@ -151,7 +151,8 @@ export class InProcessScreeningQueue implements ScreeningQueue {
       ...(waveform.fullScale === null ? {} : { fullScale: waveform.fullScale }),
       machine: machineFactsOf(point, job.otherShaftRatios),
       earlier: job.earlier,
-    });
+    };
+    return this.deps.workers.screen(input, limits);
   }
 
   /** Plots first, then the row: a row whose plots are missing would be worse than plots without a row. */

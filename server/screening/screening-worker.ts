@@ -41,8 +41,8 @@ async function read({ path, options }: ReadTask): Promise<ReadAnswer> {
   }
 }
 
-function screen({ input }: ScreenTask): ScreenAnswer {
-  const { result, plots } = screenWaveform(input);
+function screen({ input, limits }: ScreenTask): ScreenAnswer {
+  const { result, plots } = screenWaveform(input, limits);
   return {
     result,
     spectrum: {

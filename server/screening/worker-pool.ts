@@ -1,7 +1,7 @@
 import { fileURLToPath } from 'node:url';
 import { Piscina } from 'piscina';
 import type { ReadWaveformCsvOptions } from '#shared/signal/csv/waveform-csv.ts';
-import type { ScreeningInput } from '#shared/signal/screening-types.ts';
+import type { ScreeningInput, ScreeningLimits } from '#shared/signal/screening-types.ts';
 import type { ReadAnswer, ScreenAnswer, WorkerTask } from './worker-tasks.ts';
 
 /** Longest time one waveform may take; a hundred times what the longest admitted record needs. */
@@ -45,8 +45,11 @@ export class WorkerPool {
   }
 
   /** Screens a waveform. Its samples are handed over and empty here afterwards. */
-  screen(input: ScreeningInput & { samples: Float64Array<ArrayBuffer> }): Promise<ScreenAnswer> {
-    return this.run<ScreenAnswer>({ task: 'screen', input }, [input.samples.buffer]);
+  screen(
+    input: ScreeningInput & { samples: Float64Array<ArrayBuffer> },
+    limits: Partial<ScreeningLimits> = {},
+  ): Promise<ScreenAnswer> {
+    return this.run<ScreenAnswer>({ task: 'screen', input, limits }, [input.samples.buffer]);
   }
 
   private async run<Answer>(task: WorkerTask, transferList: ArrayBuffer[]): Promise<Answer> {

@@ -4,7 +4,11 @@ import type {
   WaveformChannel,
   WaveformCsv,
 } from '#shared/signal/csv/waveform-csv.ts';
-import type { ScreeningInput, ScreeningResult } from '#shared/signal/screening-types.ts';
+import type {
+  ScreeningInput,
+  ScreeningLimits,
+  ScreeningResult,
+} from '#shared/signal/screening-types.ts';
 
 /** Reads the CSV at a path. */
 export interface ReadTask {
@@ -22,6 +26,8 @@ export type ReadAnswer =
 export interface ScreenTask {
   task: 'screen';
   input: ScreeningInput;
+  /** In force for the machine; the method's own fill in what is absent. */
+  limits: Partial<ScreeningLimits>;
 }
 
 export interface ScreenAnswer {

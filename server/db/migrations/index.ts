@@ -9,6 +9,7 @@ import { IndexMachineList1796134294616 } from './1796134294616-index-machine-lis
 import { CreateMailOptOuts1796135460755 } from './1796135460755-create-mail-opt-outs.ts';
 import { TellMailKinds1796135460756 } from './1796135460756-tell-mail-kinds.ts';
 import { LimitMonitoring1796137211959 } from './1796137211959-limit-monitoring.ts';
+import { KeepLimits1796137970428 } from './1796137970428-keep-limits.ts';
 
 /** Every migration, oldest first. */
 export const migrations = [
@@ -23,4 +24,5 @@ export const migrations = [
   CreateMailOptOuts1796135460755,
   TellMailKinds1796135460756,
   LimitMonitoring1796137211959,
+  KeepLimits1796137970428,
 ];
