@@ -49,9 +49,16 @@ export function ReviewDesk(props: ReviewDeskProps) {
   const next = items[place + 1];
   const decisions = useReviewDecisions(siteId, onSelect);
 
+  const afterNext = items[place + 2];
+
   useEffect(() => {
-    if (next !== undefined) void prefetchItem(client, siteId, next);
-  }, [client, siteId, next]);
+    // One after the other: the flag that is gone to first is not to wait for the second's data.
+    const prefetch = async () => {
+      if (next !== undefined) await prefetchItem(client, siteId, next);
+      if (afterNext !== undefined) await prefetchItem(client, siteId, afterNext);
+    };
+    void prefetch();
+  }, [client, siteId, next, afterNext]);
 
   const isOpen = item !== undefined && item.decision === null;
   const go = (step: number) => {
