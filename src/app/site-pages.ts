@@ -67,6 +67,10 @@ const pages: Readonly<Record<string, Load>> = {
     const { outcomesLoader, OutcomesPage } = await import('./routes/outcomes.tsx');
     return { loader: outcomesLoader, Component: OutcomesPage };
   },
+  limits: async () => {
+    const { limitsLoader, LimitsPage } = await import('./routes/limits.tsx');
+    return { loader: limitsLoader, Component: LimitsPage };
+  },
   inspections: async () => {
     const { inspectionsLoader, InspectionsPage } = await import('./routes/inspections.tsx');
     return { loader: inspectionsLoader, Component: InspectionsPage };

@@ -32,6 +32,8 @@ const pages: Readonly<Record<string, readonly string[]>> = {
     '/machines/1/edit',
     '/machines/1/positions/1/seats/shaft',
     '/routes/new',
+    '/outcomes',
+    '/limits',
   ],
   'Asset owner': [
     '/inspections',

@@ -1,5 +1,6 @@
 import { useSuspenseQuery, type QueryClient } from '@tanstack/react-query';
 import type { LoaderFunctionArgs } from 'react-router-dom';
+import { ButtonLink } from '#src/components/button-link.tsx';
 import { DescriptionList } from '#src/components/description-list.tsx';
 import { EmptyState } from '#src/components/empty-state.tsx';
 import { Figure } from '#src/components/figure.tsx';
@@ -21,13 +22,21 @@ export const outcomesLoader =
 
 /** How often the flags proved right, how long it took, and what the wrong ones had in common. */
 export function OutcomesPage() {
-  const { siteId } = useSite();
+  const { siteId, role } = useSite();
   const { data } = useSuspenseQuery(outcomesQuery(siteId));
   const { flags, site } = data;
   const count = (value: number) => <Figure value={String(value)} />;
   return (
     <>
-      <PageHeader title="Outcomes" facts={[{ label: 'Flags so far', value: flags.flaggedCount }]} />
+      <PageHeader
+        title="Outcomes"
+        facts={[{ label: 'Flags so far', value: flags.flaggedCount }]}
+        actions={
+          role === 'lead' && (
+            <ButtonLink to={`/sites/${siteId}/limits`}>Limits of the verdict</ButtonLink>
+          )
+        }
+      />
       {flags.flaggedCount === 0 ? (
         <EmptyState title="No flags yet">
           Outcomes begin with the first screening that suspects looseness.
