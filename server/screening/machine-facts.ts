@@ -8,8 +8,15 @@ function known<T extends object>(facts: { [Key in keyof T]: T[Key] | null | unde
   ) as T;
 }
 
-/** What the register knows of the machine and position a waveform was taken at. */
-export function machineFactsOf(point: MeasuringPoint, otherShaftRatios: number[]): MachineFacts {
+/**
+ * What is known of the machine and position a waveform was taken at: what the register says, and
+ * the line frequency of the file where it says none.
+ */
+export function machineFactsOf(
+  point: MeasuringPoint,
+  otherShaftRatios: number[],
+  toldLineFrequencyHz: number | null,
+): MachineFacts {
   const position = point.bearingPosition;
   const machine = position?.machine;
   return known<MachineFacts>({
@@ -17,7 +24,7 @@ export function machineFactsOf(point: MeasuringPoint, otherShaftRatios: number[]
     nominalSpeedRpm: machine?.nominalSpeedRpm,
     speedMinRpm: machine?.speedMinRpm,
     speedMaxRpm: machine?.speedMaxRpm,
-    lineFrequencyHz: machine?.lineFrequencyHz,
+    lineFrequencyHz: machine?.lineFrequencyHz ?? toldLineFrequencyHz,
     shaftRatio: position?.shaftRatio,
     otherShaftRatios,
     bladeCount: machine?.bladeCount,

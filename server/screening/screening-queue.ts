@@ -149,7 +149,7 @@ export class InProcessScreeningQueue implements ScreeningQueue {
       unit: waveform.unit,
       ...(waveform.toldSpeedRpm === null ? {} : { toldSpeedRpm: waveform.toldSpeedRpm }),
       ...(waveform.fullScale === null ? {} : { fullScale: waveform.fullScale }),
-      machine: machineFactsOf(point, job.otherShaftRatios),
+      machine: machineFactsOf(point, job.otherShaftRatios, waveform.toldLineFrequencyHz),
       earlier: job.earlier,
     };
     return this.deps.workers.screen(input, limits);

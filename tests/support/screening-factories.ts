@@ -24,6 +24,7 @@ export function buildWaveform(
     sampleCount: 16_384,
     gapCount: 0,
     toldSpeedRpm: 1480,
+    toldLineFrequencyHz: null,
     fullScale: null,
     takenAt: null,
     uploadedAt: new Date(),

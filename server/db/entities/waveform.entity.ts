@@ -63,6 +63,10 @@ export class Waveform {
   @Column({ type: 'double', nullable: true })
   toldSpeedRpm: number | null;
 
+  /** Line frequency as the file tells it, Hz. */
+  @Column({ type: 'double', nullable: true })
+  toldLineFrequencyHz: number | null;
+
   /** Range of the recorder in the recorded unit. */
   @Column({ type: 'double', nullable: true })
   fullScale: number | null;

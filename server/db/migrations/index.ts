@@ -10,6 +10,9 @@ import { CreateMailOptOuts1796135460755 } from './1796135460755-create-mail-opt-
 import { TellMailKinds1796135460756 } from './1796135460756-tell-mail-kinds.ts';
 import { LimitMonitoring1796137211959 } from './1796137211959-limit-monitoring.ts';
 import { KeepLimits1796137970428 } from './1796137970428-keep-limits.ts';
+import { KeepToldLineFrequency1796138768972 } from './1796138768972-keep-told-line-frequency.ts';
+import { CreateCalendarFeeds1796138869429 } from './1796138869429-create-calendar-feeds.ts';
+import { CreateWebhooks1796138869430 } from './1796138869430-create-webhooks.ts';
 
 /** Every migration, oldest first. */
 export const migrations = [
@@ -25,4 +28,7 @@ export const migrations = [
   TellMailKinds1796135460756,
   LimitMonitoring1796137211959,
   KeepLimits1796137970428,
+  KeepToldLineFrequency1796138768972,
+  CreateCalendarFeeds1796138869429,
+  CreateWebhooks1796138869430,
 ];

@@ -20,7 +20,7 @@ interface ReadFile {
   channels: ReadChannel[];
   sampleRateHz: number | null;
   speedRpm: number | null;
-  comments: { takenAt?: string; fullScale?: number };
+  comments: { takenAt?: string; fullScale?: number; lineFrequencyHz?: number };
 }
 type ReadFault = { code: string; line: number | null; message: string };
 
@@ -187,6 +187,7 @@ export class UploadService {
       sampleCount: channel.samples.length,
       gapCount: channel.gapCount,
       toldSpeedRpm: read.speedRpm,
+      toldLineFrequencyHz: read.comments.lineFrequencyHz ?? null,
       fullScale: read.comments.fullScale ?? null,
       takenAt: momentOf(takenAt),
       uploadedAt,
