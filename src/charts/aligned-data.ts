@@ -11,28 +11,30 @@ export interface Series {
  */
 export function alignedData(
   spectrum: Series,
-  behind: readonly Series[],
+  behind: readonly (Series | null)[],
   before: readonly Series[] = [],
 ): uPlot.AlignedData {
-  const read = (series: Series) => readAt(series, spectrum.x);
+  const read = (series: Series | null) =>
+    series === null ? spectrum.x.map(() => Number.NaN) : readAt(series, spectrum.x);
   return [spectrum.x, ...behind.map(read), spectrum.y, ...before.map(read)];
 }
 
-function readAt({ x, y }: Series, places: Float64Array): (number | null)[] {
-  const read: (number | null)[] = [];
+function readAt({ x, y }: Series, places: Float64Array): Float64Array {
+  const read = new Float64Array(places.length);
   let right = 0;
-  for (const place of places) {
+  for (let i = 0; i < places.length; i += 1) {
+    const place = places[i] ?? 0;
     while (right < x.length && (x[right] ?? 0) < place) right += 1;
     const xRight = x[right];
     const yRight = y[right];
     if (xRight === undefined || yRight === undefined) {
-      read.push(null);
+      read[i] = Number.NaN;
       continue;
     }
     const xLeft = x[right - 1] ?? xRight;
     const yLeft = y[right - 1] ?? yRight;
     const share = xRight > xLeft ? (place - xLeft) / (xRight - xLeft) : 1;
-    read.push(yLeft + share * (yRight - yLeft));
+    read[i] = yLeft + share * (yRight - yLeft);
   }
   return read;
 }

@@ -7,7 +7,7 @@ import { useChartPalette, type ChartPalette } from './chart-palette.ts';
 import { ChartTable } from './chart-table.tsx';
 import { PlotFrame } from './plot-frame.tsx';
 import { PointerReading } from './plot-reading.tsx';
-import type { ChartOptions } from './plot-stage.ts';
+import type { ChartOptions, PlotSource } from './plot-stage.ts';
 import type { Window } from './plot-window.ts';
 import { createStore } from './store.ts';
 import { UplotChart } from './uplot-chart.tsx';
@@ -36,9 +36,9 @@ export function AveragedRevolutionPlot({
   const [cursorDeg] = useState(() => createStore<number | null>(null));
   const [view] = useState(() => createStore<Window | null>(null));
   const sine = useMemo(() => firstOrderSine(turn), [turn]);
-  const dataFor = useMemo(() => {
+  const source = useMemo<PlotSource>(() => {
     const data = closedTurn(turn, sine);
-    return () => data;
+    return { whole: turn.length > 0 ? wholeTurn : nothing, dataFor: () => data };
   }, [turn, sine]);
   const options = useMemo(
     () => averagedRevolutionOptions(palette, unit, cursorDeg.set),
@@ -80,8 +80,7 @@ export function AveragedRevolutionPlot({
     >
       <UplotChart
         options={options}
-        dataFor={dataFor}
-        whole={turn.length > 0 ? wholeTurn : nothing}
+        source={source}
         view={view}
         heightPx={heightPx}
         label={`${title}, ${unit}`}

@@ -29,6 +29,9 @@ export interface PlotSource {
   whole: Window;
   /** The data to draw in a window, thinned to what can be seen of it. */
   dataFor: (view: Window) => uPlot.AlignedData;
+  /** Drawn beneath the lines, and over them. */
+  drawUnder?: (plot: uPlot) => void;
+  drawOver?: (plot: uPlot) => void;
 }
 
 export interface PlotStage {
@@ -75,7 +78,13 @@ export function stagePlot(
           },
         },
       },
-      hooks: { ...options.hooks, setSelect: [onSelect] },
+      hooks: {
+        ...options.hooks,
+        setSelect: [onSelect],
+        // Of another record other things are drawn, and the chart need not be built anew for it.
+        drawAxes: [(drawn) => source.drawUnder?.(drawn)],
+        draw: [(drawn) => source.drawOver?.(drawn)],
+      },
     },
     source.dataFor(view()),
     element,
@@ -91,7 +100,7 @@ export function stagePlot(
 
   // One frame draws whatever has changed since the last one.
   let frame = 0;
-  let isStale = true;
+  let isStale = false;
   const request = () => {
     frame ||= requestAnimationFrame(paint);
   };
@@ -111,9 +120,11 @@ export function stagePlot(
         plot.setScale('x', next);
       });
     }
-    if (canvas !== null) drawOver(canvas, plot, overlay);
+    if (canvas !== null) drawOverlay(canvas, plot, overlay);
   }
-  refresh();
+  // Before uPlot draws what it was built with, so that it draws once; the overlay needs its layout.
+  plot.setScale('x', view());
+  request();
 
   const unsubscribe = [windowStore.subscribe(refresh), overlay?.subscribe(request)];
   const stage: PlotStage = {
@@ -131,10 +142,12 @@ export function stagePlot(
     },
     reset: () => windowStore.set(null),
     resize: (widthPx, heightPx) => {
+      if (plot.width === widthPx && plot.height === heightPx) return;
       plot.setSize({ width: widthPx, height: heightPx });
       request();
     },
     show: (next) => {
+      if (next === source) return;
       source = next;
       refresh();
     },
@@ -164,7 +177,7 @@ function addCanvas(over: HTMLElement): HTMLCanvasElement {
   return canvas;
 }
 
-function drawOver(canvas: HTMLCanvasElement, plot: uPlot, overlay: PlotOverlay | null): void {
+function drawOverlay(canvas: HTMLCanvasElement, plot: uPlot, overlay: PlotOverlay | null): void {
   const context = canvas.getContext('2d');
   if (context === null || overlay === null) return;
   const ratio = uPlot.pxRatio;
@@ -233,6 +246,7 @@ function listenToPointer(
 
 /** A canvas draws with whatever font is there: draw once more when the shipped ones have come. */
 function redrawWithFonts(chart: uPlot, alive: () => boolean): void {
+  if (document.fonts.check(figuresFont) && document.fonts.check(textFont)) return;
   void Promise.all([document.fonts.load(figuresFont), document.fonts.load(textFont)]).then(() => {
     if (alive()) chart.redraw(false, true);
   });

@@ -21,7 +21,7 @@ const labelHeightPx = 13;
  */
 export function spectrumCursorOverlay(
   cursor: Store<SpectrumCursor>,
-  lineStep: number,
+  lineStep: () => number,
   palette: ChartPalette,
 ): PlotOverlay {
   return {
@@ -33,13 +33,13 @@ export function spectrumCursorOverlay(
     grip: (x, reach) => {
       const grip = gripAt(cursor.get(), x, reach);
       if (grip === null) return null;
-      return (to) => cursor.set(draggedCursor(cursor.get(), grip, to, lineStep));
+      return (to) => cursor.set(draggedCursor(cursor.get(), grip, to, lineStep()));
     },
     pick: (x) => {
       const before = cursor.get();
-      const at = Math.max(0, Math.round(x / lineStep) * lineStep);
+      const at = Math.max(0, Math.round(x / lineStep()) * lineStep());
       if (before.kind === 'free') cursor.set({ kind: 'free', at });
-      else if (before.kind === 'harmonics') cursor.set({ ...before, of: Math.max(lineStep, at) });
+      else if (before.kind === 'harmonics') cursor.set({ ...before, of: Math.max(lineStep(), at) });
       else cursor.set({ ...before, about: at });
     },
   };

@@ -3,21 +3,14 @@ import type { AmplitudeScale } from './amplitude-scale.ts';
 import { chartBase, xAxis, yAxis } from './chart-axes.ts';
 import type { ChartPalette } from './chart-palette.ts';
 import { frequencyUnitWords, type FrequencyUnit } from './frequency-axis.ts';
-import { drawSpectrumMarks } from './spectrum-overlay.ts';
-import type { SpectrumMark } from './spectrum-data.ts';
 import type { ChartOptions } from './plot-stage.ts';
 
 export interface SpectrumOptionsInput {
   palette: ChartPalette;
   frequencyUnit: FrequencyUnit;
-  unitsPerHz: number;
   amplitudeScale: AmplitudeScale;
   /** Written at the axis, e.g. "mm/s peak". */
   amplitudeLabel: string;
-  marks: readonly SpectrumMark[];
-  hasPrevious: boolean;
-  /** Where an amplitude stands on the y axis. */
-  heightOf: (amplitude: number) => number;
   onCursor: (x: number | null) => void;
   /** Where the x axis lies, in CSS pixels. */
   onPlace: (place: PlotPlace) => void;
@@ -58,13 +51,12 @@ export function spectrumOptions(input: SpectrumOptionsInput): ChartOptions {
     ],
     series: [
       { label: words.label },
-      ...(input.hasPrevious ? [previous] : []),
+      previous,
       { label: 'Amplitude', stroke: palette.ink, width: 1, points: { show: false } },
       // On top: the noise itself would hide it.
       floor,
     ],
     hooks: {
-      draw: [(plot) => drawSpectrumMarks(plot, input.marks, input, palette)],
       setCursor: [
         (plot) => {
           const left = plot.cursor.left ?? -1;

@@ -1,4 +1,4 @@
-import { useId, useMemo, useState, type KeyboardEvent } from 'react';
+import { useId, useLayoutEffect, useMemo, useState, type KeyboardEvent } from 'react';
 import type { Detector } from '#shared/quantities/detector.ts';
 import type { Unit } from '#shared/quantities/quantity.ts';
 import { alignedData } from './aligned-data.ts';
@@ -8,7 +8,7 @@ import { perHz, usableUnit, type FrequencyUnit } from './frequency-axis.ts';
 import type { OrderMark } from './order-mark.ts';
 import { PlotFrame } from './plot-frame.tsx';
 import { PlotReading } from './plot-reading.tsx';
-import type { PlotStage } from './plot-stage.ts';
+import type { PlotSource, PlotStage } from './plot-stage.ts';
 import { windowShowing, windowWithin, orWhole, type Window } from './plot-window.ts';
 import { shownSpectrum } from './shown-spectrum.ts';
 import { cursorOfKind, placeOf, steppedCursor } from './spectrum-cursor.ts';
@@ -16,6 +16,7 @@ import { cursorKindOfKey, SpectrumCursorChoice } from './spectrum-cursor-choice.
 import { spectrumCursorOverlay } from './spectrum-cursor-overlay.ts';
 import { linesIn, plotMaxPoints, spectrumMarks, spectrumSeries } from './spectrum-data.ts';
 import type { Spectrum, SpectrumMark } from './spectrum-data.ts';
+import { drawSpectrumMarks } from './spectrum-overlay.ts';
 import { spectrumOptions, type PlotPlace } from './spectrum-options.ts';
 import { amplitudeTextOf, cursorReading, readingAt } from './spectrum-reading.ts';
 import { SpectrumStrip } from './spectrum-strip.tsx';
@@ -84,34 +85,38 @@ export function SpectrumPlot(props: SpectrumPlotProps) {
     () => spectrumMarks(shown.front, speedHz, orders, run, shown.previous),
     [shown, speedHz, orders, run],
   );
-  const dataFor = useMemo(
-    () => (stretch: Window) => {
-      const seriesOf = (one: Spectrum) => spectrumSeries(one, unitsPerHz, stretch, shown.heightOf);
-      const behind = shown.previous === null ? [] : [seriesOf(shown.previous)];
-      return alignedData(seriesOf(shown.front), behind, [seriesOf(shown.noise)]);
-    },
-    [shown, unitsPerHz],
+  const source = useMemo<PlotSource>(
+    () => ({
+      whole,
+      dataFor: (stretch) => {
+        const seriesOf = (one: Spectrum) =>
+          spectrumSeries(one, unitsPerHz, stretch, shown.heightOf);
+        const behind = shown.previous && seriesOf(shown.previous);
+        return alignedData(seriesOf(shown.front), [behind], [seriesOf(shown.noise)]);
+      },
+      drawOver: (plot) =>
+        drawSpectrumMarks(plot, marks, { unitsPerHz, heightOf: shown.heightOf }, palette),
+    }),
+    [whole, shown, unitsPerHz, marks, palette],
   );
-  const hasPrevious = previous !== null;
   const options = useMemo(
     () =>
       spectrumOptions({
         palette,
         frequencyUnit: xUnit,
-        unitsPerHz,
         amplitudeScale,
         amplitudeLabel: shown.label,
-        heightOf: shown.heightOf,
-        marks,
-        hasPrevious,
         onCursor: hover.set,
         onPlace: (next) => setPlace((old) => (samePlace(old, next) ? old : next)),
       }),
-    [palette, xUnit, unitsPerHz, amplitudeScale, shown, marks, hasPrevious, hover],
+    [palette, xUnit, amplitudeScale, shown.label, hover],
   );
+  // Of its own, so that the next flag's lines don't build the chart anew.
+  const [lineSteps] = useState(() => createStore(lineStep));
+  useLayoutEffect(() => lineSteps.set(lineStep), [lineSteps, lineStep]);
   const overlay = useMemo(
-    () => spectrumCursorOverlay(view.cursor, lineStep, palette),
-    [view, lineStep, palette],
+    () => spectrumCursorOverlay(view.cursor, lineSteps.get, palette),
+    [view, lineSteps, palette],
   );
   const readable = useMemo(
     () => ({
@@ -164,7 +169,8 @@ export function SpectrumPlot(props: SpectrumPlotProps) {
       }
       caption={
         <>
-          Grey line: noise floor. {hasPrevious && 'Broken line and cross bars: the survey before. '}
+          Grey line: noise floor.{' '}
+          {previous !== null && 'Broken line and cross bars: the survey before. '}
           {shown.remark}{' '}
           <ThinningRemark
             spectrum={shown.front}
@@ -187,8 +193,7 @@ export function SpectrumPlot(props: SpectrumPlotProps) {
     >
       <UplotChart
         options={options}
-        dataFor={dataFor}
-        whole={whole}
+        source={source}
         view={view.window}
         overlay={overlay}
         onKey={onKey}

@@ -1,6 +1,12 @@
 import { useEffect, useLayoutEffect, useRef, type KeyboardEvent } from 'react';
 import type uPlot from 'uplot';
-import { stagePlot, type ChartOptions, type PlotOverlay, type PlotStage } from './plot-stage.ts';
+import {
+  stagePlot,
+  type ChartOptions,
+  type PlotOverlay,
+  type PlotSource,
+  type PlotStage,
+} from './plot-stage.ts';
 import type { Window } from './plot-window.ts';
 import type { Store } from './store.ts';
 import { useElementWidth } from './use-element-width.ts';
@@ -8,10 +14,8 @@ import { useElementWidth } from './use-element-width.ts';
 export interface UplotChartProps {
   /** A new object rebuilds the chart: keep it in a memo. */
   options: ChartOptions;
-  /** The data for a window; a new function replaces the data. */
-  dataFor: (view: Window) => uPlot.AlignedData;
-  /** The ends of x. Where they are one, nothing is drawn. */
-  whole: Window;
+  /** What is drawn; a new object replaces it. Where the ends of x are one, nothing is drawn. */
+  source: PlotSource;
   /** What of it is in sight; null for the whole. */
   view: Store<Window | null>;
   /** Kept in a memo as well. */
@@ -27,24 +31,23 @@ export interface UplotChartProps {
 
 /** The one owner of uPlot instances. */
 export function UplotChart(props: UplotChartProps) {
-  const { options, dataFor, whole, view, overlay, heightPx, label, describedBy, onKey } = props;
+  const { options, source, view, overlay, heightPx, label, describedBy, onKey } = props;
   const [box, widthPx] = useElementWidth<HTMLDivElement>();
   const stage = useRef<PlotStage | null>(null);
-  const drawable = widthPx > 0 && heightPx > 0 && whole.max > whole.min;
+  const drawable = widthPx > 0 && heightPx > 0 && source.whole.max > source.whole.min;
 
   // What the chart is built with; later changes have their own effects.
-  const atBuild = useRef({ dataFor, whole, widthPx, heightPx });
+  const atBuild = useRef({ source, widthPx, heightPx });
   useLayoutEffect(() => {
-    atBuild.current = { dataFor, whole, widthPx, heightPx };
+    atBuild.current = { source, widthPx, heightPx };
   });
 
   // Before the browser paints, so that a plot is never an empty box first.
   useLayoutEffect(() => {
     const element = box.current;
     if (element === null || !drawable) return;
-    const { dataFor: data, whole: ends, ...size } = atBuild.current;
-    const source = { whole: ends, dataFor: data };
-    const built = stagePlot(element, options, size, source, view, overlay ?? null);
+    const { source: first, ...size } = atBuild.current;
+    const built = stagePlot(element, options, size, first, view, overlay ?? null);
     stage.current = built;
     return () => {
       built.destroy();
@@ -53,8 +56,8 @@ export function UplotChart(props: UplotChartProps) {
   }, [options, drawable, box, view, overlay]);
 
   useEffect(() => {
-    stage.current?.show({ dataFor, whole });
-  }, [dataFor, whole]);
+    stage.current?.show(source);
+  }, [source]);
 
   useEffect(() => {
     stage.current?.resize(widthPx, heightPx);

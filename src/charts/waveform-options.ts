@@ -1,21 +1,17 @@
 import { chartBase, xAxis, yAxis } from './chart-axes.ts';
 import type { ChartPalette } from './chart-palette.ts';
 import type { ChartOptions } from './plot-stage.ts';
-import { drawWaveformMarks, type TruncationMarks } from './waveform-overlay.ts';
 
 export interface WaveformOptionsInput {
   palette: ChartPalette;
   /** Unit of the samples. */
   unit: string;
-  /** Duration of one turn, s; null without a speed. */
-  revolutionS: number | null;
-  truncation: TruncationMarks | null;
   onCursor: (atS: number | null) => void;
 }
 
 /** uPlot options of a time record in seconds from 0. */
 export function waveformOptions(input: WaveformOptionsInput): ChartOptions {
-  const { palette, unit, truncation, revolutionS } = input;
+  const { palette, unit } = input;
   return {
     ...chartBase(),
     // The x scale is told its ends: with thinned data the last point is seldom the record's end.
@@ -26,7 +22,6 @@ export function waveformOptions(input: WaveformOptionsInput): ChartOptions {
       { label: 'Waveform', stroke: palette.ink, width: 1, points: { show: false } },
     ],
     hooks: {
-      drawAxes: [(plot) => drawWaveformMarks(plot, revolutionS, truncation, palette)],
       setCursor: [
         (plot) => {
           const left = plot.cursor.left ?? -1;

@@ -6,12 +6,14 @@ import { ChartTable } from './chart-table.tsx';
 import { decimateMinMax } from './decimate-min-max.ts';
 import { PlotFrame } from './plot-frame.tsx';
 import { PointerReading } from './plot-reading.tsx';
+import type { PlotSource } from './plot-stage.ts';
 import { windowWithin, type Window } from './plot-window.ts';
 import { plotMaxPoints } from './spectrum-data.ts';
 import { createStore, useStore, type Store } from './store.ts';
 import { UplotChart } from './uplot-chart.tsx';
 import { stretchesOf } from './waveform-geometry.ts';
 import { waveformOptions } from './waveform-options.ts';
+import { drawWaveformMarks, type TruncationMarks } from './waveform-overlay.ts';
 
 export interface WaveformPlotProps {
   samples: Float32Array;
@@ -46,34 +48,21 @@ export function WaveformPlot({
   const [cursorS] = useState(() => createStore<number | null>(null));
   const [ownView] = useState(() => createStore<Window | null>(null));
   const viewS = view ?? ownView;
-  const dataFor = useMemo(
-    () => (stretch: Window) => {
-      const thinned = thinnedStretch(samples, sampleRateHz, stretch);
-      return [thinned.index.map((index) => index / sampleRateHz), thinned.value] as [
-        Float64Array,
-        Float64Array,
-      ];
-    },
-    [samples, sampleRateHz],
-  );
+  const source = useMemo<PlotSource>(() => {
+    const revolutionS = speedHz !== null && speedHz > 0 ? 1 / speedHz : null;
+    const marks = truncationMarks(truncation, sampleRateHz);
+    return {
+      whole,
+      dataFor: (stretch) => {
+        const thinned = thinnedStretch(samples, sampleRateHz, stretch);
+        return [thinned.index.map((index) => index / sampleRateHz), thinned.value];
+      },
+      drawUnder: (plot) => drawWaveformMarks(plot, revolutionS, marks, palette),
+    };
+  }, [whole, samples, sampleRateHz, speedHz, truncation, palette]);
   const options = useMemo(
-    () =>
-      waveformOptions({
-        palette,
-        unit,
-        revolutionS: speedHz !== null && speedHz > 0 ? 1 / speedHz : null,
-        truncation:
-          truncation === null || truncation.side === 'none'
-            ? null
-            : {
-                rangesS: truncation.ranges.map(
-                  ([from, to]) => [from / sampleRateHz, to / sampleRateHz] as const,
-                ),
-                instrument: truncation.instrument,
-              },
-        onCursor: cursorS.set,
-      }),
-    [palette, unit, speedHz, truncation, sampleRateHz, cursorS],
+    () => waveformOptions({ palette, unit, onCursor: cursorS.set }),
+    [palette, unit, cursorS],
   );
 
   return (
@@ -101,8 +90,7 @@ export function WaveformPlot({
     >
       <UplotChart
         options={options}
-        dataFor={dataFor}
-        whole={whole}
+        source={source}
         view={viewS}
         heightPx={heightPx}
         label={`${title}, ${unit}, ${formatSignificant(durationS)} s`}
@@ -127,6 +115,19 @@ function readingAt(
     Number.isNaN(value) ? 'gap' : `${formatSignificant(value)} ${unit}`,
   ];
   return parts.join('  ');
+}
+
+function truncationMarks(
+  truncation: Truncation | null,
+  sampleRateHz: number,
+): TruncationMarks | null {
+  if (truncation === null || truncation.side === 'none') return null;
+  return {
+    rangesS: truncation.ranges.map(
+      ([from, to]) => [from / sampleRateHz, to / sampleRateHz] as const,
+    ),
+    instrument: truncation.instrument,
+  };
 }
 
 /** With one sample beyond either end, so that the line goes on to the edge. */
