@@ -27,6 +27,8 @@ async function signedIn(browser: Browser, plant: ClientPlant): Promise<BrowserCo
   const { email, password } = plant;
   const answer = await context.request.post('/api/session', { data: { email, password } });
   if (!answer.ok()) throw new Error(`Signing in was answered by ${answer.status()}.`);
+  // tsx names inner functions by a helper of its own, which a page doesn't have.
+  await context.addInitScript({ content: 'globalThis.__name = (named) => named;' });
   await context.addInitScript(noteDrawing);
   return context;
 }
