@@ -76,6 +76,7 @@ export type TryLimitsQuery = z.infer<typeof tryLimitsQuery>;
 /** A screening whose verdict would change. */
 export const changedFlag = z.object({
   screeningId: z.int(),
+  surveyId: z.int(),
   surveyedOn: z.string(),
   machineTag: z.string(),
   positionName: z.string(),
@@ -84,6 +85,8 @@ export const changedFlag = z.object({
   /** By the limits in force, and by those on trial. */
   verdictNow: verdict,
   verdictThen: verdict,
+  /** As it was given with the limits of its day. */
+  verdictGiven: verdict,
   decision: reviewDecision.nullable(),
   /** What the first inspection of the bearing position said that was reported after the survey. */
   inspection: z.object({ outcome: inspectionOutcome, reportedOn: z.string() }).nullable(),

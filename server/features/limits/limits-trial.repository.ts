@@ -4,6 +4,7 @@ import type { InspectionOutcome } from '#shared/contracts/inspection.ts';
 import type { MachineKind } from '#shared/contracts/machine.ts';
 import type { Direction } from '#shared/contracts/measuring-point.ts';
 import type { ReviewDecision } from '#shared/contracts/review.ts';
+import type { Verdict } from '#shared/signal/screening-types.ts';
 
 /** The machines a trial looks at: one kind, or all but the kinds that have limits of their own. */
 export interface TrialScope {
@@ -14,13 +15,14 @@ export interface TrialScope {
 
 export interface TrialRow {
   screeningId: number;
+  surveyId: number;
   surveyedOn: string;
   machineTag: string;
   positionCode: string;
   positionName: string;
   direction: Direction;
   score: number;
-  methodVersion: string;
+  verdict: Verdict;
   decision: ReviewDecision | null;
   outcome: InspectionOutcome | null;
   reportedAt: Date | null;
@@ -84,10 +86,10 @@ export class LimitsTrialRepository {
          AND inspection.reported_at >= survey.surveyed_on
        ORDER BY inspection.reported_at, inspection.id LIMIT 1)`;
     return this.db.query<TrialRow[]>(
-      `SELECT screening.id AS screeningId, survey.surveyed_on AS surveyedOn,
+      `SELECT screening.id AS screeningId, survey.id AS surveyId, survey.surveyed_on AS surveyedOn,
               machine.tag AS machineTag, bearing_position.code AS positionCode,
               bearing_position.name AS positionName, measuring_point.direction,
-              screening.score, screening.method_version AS methodVersion, screening.decision,
+              screening.score, screening.verdict, screening.decision,
               ${nextReport("JSON_VALUE(inspection.report, '$.outcome')")} AS outcome,
               ${nextReport('inspection.reported_at')} AS reportedAt
          ${from}

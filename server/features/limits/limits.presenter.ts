@@ -23,6 +23,7 @@ export function presentTrial({ now, tried, counts, rows }: Trial): LimitsTrialRe
     const { outcome, reportedAt } = row;
     return {
       screeningId: row.screeningId,
+      surveyId: row.surveyId,
       surveyedOn: row.surveyedOn,
       machineTag: row.machineTag,
       positionName: row.positionName,
@@ -30,6 +31,7 @@ export function presentTrial({ now, tried, counts, rows }: Trial): LimitsTrialRe
       score: row.score,
       verdictNow: verdictOfScore(row.score, now),
       verdictThen: verdictOfScore(row.score, tried),
+      verdictGiven: row.verdict,
       decision: row.decision,
       inspection:
         outcome === null || reportedAt === null

@@ -13,16 +13,22 @@ const outcomeWords = {
 } as const;
 const decisionWords = { accepted: 'Accepted', rejected: 'Rejected', retake: 'Retake' } as const;
 
+/** The desk shows flags; what was none is found in its survey. */
+const addressOf = (
+  siteId: number,
+  { decision, verdictGiven, surveyId, screeningId }: ChangedFlag,
+) =>
+  verdictGiven === 'none' && decision === null
+    ? `/sites/${siteId}/surveys/${surveyId}`
+    : `/sites/${siteId}/review?show=${decision === null ? 'open' : 'decided'}&screening=${screeningId}`;
+
 const columns = (siteId: number): DataTableColumn<ChangedFlag>[] => [
   {
     id: 'point',
     header: 'Point',
     rowHeader: true,
     cell: (row) => (
-      <Link
-        className="ink-link"
-        to={`/sites/${siteId}/review?show=${row.decision === null ? 'open' : 'decided'}&screening=${row.screeningId}`}
-      >
+      <Link className="ink-link" to={addressOf(siteId, row)}>
         <span className="figures">{row.pointLabel}</span> {row.positionName}
       </Link>
     ),

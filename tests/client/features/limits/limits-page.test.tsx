@@ -38,6 +38,7 @@ const trial: LimitsTrialResponse = {
   changes: [
     {
       screeningId: 11,
+      surveyId: 2,
       surveyedOn: '2026-09-28',
       machineTag: 'P-101',
       positionName: 'Pump, drive end',
@@ -45,6 +46,7 @@ const trial: LimitsTrialResponse = {
       score: 0.587,
       verdictNow: 'suspected',
       verdictThen: 'none',
+      verdictGiven: 'suspected',
       decision: 'accepted',
       inspection: { outcome: 'loose', reportedOn: '2026-10-08' },
     },
