@@ -54,11 +54,13 @@ export function ReviewDesk(props: ReviewDeskProps) {
   useEffect(() => {
     // One after the other: the flag that is gone to first is not to wait for the second's data.
     const prefetch = async () => {
+      // Of the open flag as well: its plots' data is not to wait until its facts are there.
+      if (item !== undefined) await prefetchItem(client, siteId, item);
       if (next !== undefined) await prefetchItem(client, siteId, next);
       if (afterNext !== undefined) await prefetchItem(client, siteId, afterNext);
     };
     void prefetch();
-  }, [client, siteId, next, afterNext]);
+  }, [client, siteId, item, next, afterNext]);
 
   const isOpen = item !== undefined && item.decision === null;
   const go = (step: number) => {
