@@ -1,4 +1,3 @@
-import { createTransport } from 'nodemailer';
 import type { Logger } from 'pino';
 import type { DataSource } from 'typeorm';
 import { accessTokenReader } from './auth/access-token.ts';
@@ -6,25 +5,17 @@ import { AccountRepository } from './auth/account.repository.ts';
 import { RefreshTokenRepository } from './auth/refresh-token.repository.ts';
 import { sessionRoutes } from './auth/session.routes.ts';
 import { SessionService } from './auth/session.service.ts';
+import { composeNotices, type Background } from './compose-notices.ts';
 import type { Config } from './config/config.ts';
 import { Database } from './db/database.ts';
-import { accountRoutes } from './features/account/account.routes.ts';
-import { MailChoicesService } from './features/account/mail-choices.service.ts';
 import { administrationRoutes } from './features/administration/administration.routes.ts';
 import { AdministrationService } from './features/administration/administration.service.ts';
-import { demoMailboxRoutes } from './features/demo-mailbox/demo-mailbox.routes.ts';
-import { deskRoutes } from './features/desk/desk.routes.ts';
-import { DeskService } from './features/desk/desk.service.ts';
 import { findingEvidence } from './features/findings/finding-evidence.ts';
 import { moveFinding } from './features/findings/finding-progress.ts';
 import { presentFindingItem } from './features/findings/finding.presenter.ts';
 import { findingRoutes } from './features/findings/finding.routes.ts';
 import { FindingService } from './features/findings/finding.service.ts';
-import { DueReminders } from './features/inspections/due-reminders.ts';
-import { ChangeInspection } from './features/inspections/change-inspection.ts';
 import type { InspectionNeighbours } from './features/inspections/inspection-neighbours.ts';
-import { presentInspectionItem } from './features/inspections/inspection.presenter.ts';
-import { todayAnywhere } from './features/inspections/today-anywhere.ts';
 import { inspectionRoutes } from './features/inspections/inspection.routes.ts';
 import { InspectionService } from './features/inspections/inspection.service.ts';
 import { limitsRoutes } from './features/limits/limits.routes.ts';
@@ -32,8 +23,6 @@ import { LimitsService } from './features/limits/limits.service.ts';
 import { memberRoutes } from './features/members/members.routes.ts';
 import { outcomesRoutes } from './features/outcomes/outcomes.routes.ts';
 import { OutcomesService } from './features/outcomes/outcomes.service.ts';
-import { outboxRoutes } from './features/outbox/outbox.routes.ts';
-import { OutboxService } from './features/outbox/outbox.service.ts';
 import { fitChecks } from './features/register/fit-checks.ts';
 import { machineRoutes, positionRoutes } from './features/register/machine.routes.ts';
 import { MachineService } from './features/register/machine.service.ts';
@@ -44,7 +33,6 @@ import { RouteService } from './features/register/route.service.ts';
 import { ExportService } from './features/register-import/export.service.ts';
 import { ImportService } from './features/register-import/import.service.ts';
 import { registerImportRoutes } from './features/register-import/register-import.routes.ts';
-import { ReviewRepository } from './features/review/review.repository.ts';
 import { reviewRoutes } from './features/review/review.routes.ts';
 import { ReviewService } from './features/review/review.service.ts';
 import { SeatHistoryService } from './features/seats/seat-history.service.ts';
@@ -61,17 +49,11 @@ import { uploadRoutes, waveformRoutes } from './features/waveforms/waveform.rout
 import { WaveformService } from './features/waveforms/waveform.service.ts';
 import type { Route } from './http/route.ts';
 import type { RouteContext } from './http/run-route.ts';
-import { DemoMailRepository } from './mail/demo-mail.repository.ts';
-import { FakeSmtpServer } from './mail/fake-smtp-server.ts';
 import { Mailer } from './mail/mailer.ts';
-import { RegularRound } from './mail/regular-round.ts';
-import { OutboxSender } from './mail/outbox-sender.ts';
 import { InProcessScreeningQueue, type ScreeningQueue } from './screening/screening-queue.ts';
 import { WorkerPool } from './screening/worker-pool.ts';
 import { FileStore } from './storage/file-store.ts';
 import type { ProductResponse } from '#shared/contracts/session.ts';
-
-const reminderRoundMs = 5 * 60 * 1000;
 
 export interface Product {
   routes: Route[];
@@ -145,24 +127,16 @@ export function compose(
     publicUrl: options.publicUrl,
   };
   const inspections: InspectionService = new InspectionService(database, inspectionNeighbours, now);
-  const desk = new DeskService(
+  const notices = composeNotices({
+    config,
     database,
-    {
-      presentInspectionItem,
-      today: todayAnywhere,
-      membersOf: (siteId) => accounts.membersOf(siteId),
-    },
+    logger,
+    accounts,
+    mailer,
+    inspectionNeighbours,
+    publicUrl: options.publicUrl,
     now,
-  );
-  const reminders = new DueReminders(
-    database,
-    {
-      addMail: mailer.add.bind(mailer),
-      publicUrl: options.publicUrl,
-      flagsWaiting: (siteId) => new ReviewRepository(database.db).countOpen(siteId),
-    },
-    now,
-  );
+  });
   const files = new FileStore(config.dataDirectory);
   const workers = new WorkerPool(config.screeningWorkerCount);
   const queue = new InProcessScreeningQueue({ database, files, workers, logger, now });
@@ -197,13 +171,10 @@ export function compose(
     inspections: async (principal, query) => (await inspections.list(principal, query)).items,
     checkSurvey: surveys.progress.bind(surveys),
   });
-  const demoMails = new DemoMailRepository(database.db);
 
   const routes = [
     ...sessionRoutes({ sessions, accounts, demoAccounts: options.demoAccounts ?? [], config }),
-    ...accountRoutes(new MailChoicesService(database, config.authSecret, now), options.publicUrl),
     ...administrationRoutes(administration),
-    ...outboxRoutes(new OutboxService(database, now)),
     ...memberRoutes(accounts),
     ...machineRoutes(machines),
     ...positionRoutes(positions),
@@ -222,12 +193,11 @@ export function compose(
     ...limitsRoutes(new LimitsService(database, now)),
     ...outcomesRoutes(new OutcomesService(database)),
     ...siteExportRoutes(siteExports),
-    ...deskRoutes(desk, new ChangeInspection(database, inspectionNeighbours, now)),
-    ...(config.demo ? demoMailboxRoutes(demoMails, options.publicUrl) : []),
+    ...notices.routes,
   ];
 
   const userIdOf = accessTokenReader(config.authSecret);
-  const background: { stop: () => Promise<void> }[] = [];
+  const background: Background[] = [];
   return {
     routes,
     services: {
@@ -263,30 +233,7 @@ export function compose(
       background.push(queue);
       await imports.start();
       background.push(imports);
-      let smtpUrl = config.smtpUrl;
-      if (smtpUrl === undefined) {
-        const fake = new FakeSmtpServer((mail) => demoMails.add(mail), logger);
-        smtpUrl = await fake.listen();
-        background.push({ stop: () => fake.close() });
-      }
-      const sender = new OutboxSender({
-        database,
-        transport: createTransport(smtpUrl),
-        from: config.mailFrom,
-        logger,
-        unsubscribeAddress: mailer.unsubscribeAddress.bind(mailer),
-        now,
-      });
-      sender.start();
-      background.push(sender);
-      const reminderRound = new RegularRound({
-        name: 'reminders',
-        everyMs: reminderRoundMs,
-        run: () => reminders.round(),
-        logger,
-      });
-      reminderRound.start();
-      background.push(reminderRound);
+      background.push(...(await notices.start()));
     },
     stop: async () => {
       for (const service of background.reverse()) await service.stop();

@@ -1,5 +1,6 @@
 import { Activity } from './entities/activity.entity.ts';
 import { BearingPosition } from './entities/bearing-position.entity.ts';
+import { CalendarFeed } from './entities/calendar-feed.entity.ts';
 import { DemoMail } from './entities/demo-mail.entity.ts';
 import { FindingScreening } from './entities/finding-screening.entity.ts';
 import { Finding } from './entities/finding.entity.ts';
@@ -23,11 +24,14 @@ import { StateChange } from './entities/state-change.entity.ts';
 import { Survey } from './entities/survey.entity.ts';
 import { User } from './entities/user.entity.ts';
 import { Waveform } from './entities/waveform.entity.ts';
+import { WebhookDelivery } from './entities/webhook-delivery.entity.ts';
+import { Webhook } from './entities/webhook.entity.ts';
 
 /** Every table of the product. */
 export const entities = [
   Activity,
   BearingPosition,
+  CalendarFeed,
   DemoMail,
   Finding,
   FindingScreening,
@@ -51,4 +55,6 @@ export const entities = [
   Survey,
   User,
   Waveform,
+  Webhook,
+  WebhookDelivery,
 ];

@@ -52,8 +52,8 @@ module.exports = {
     forbid(
       'composition-is-the-top',
       'Only the process, the tools and the tests see every feature at once',
-      { path: '^server/', pathNot: '^server/(main\\.ts$|compose\\.ts$|cli/)' },
-      { path: '^server/(main|compose)\\.ts$' },
+      { path: '^server/', pathNot: '^server/(main\\.ts$|compose(-notices)?\\.ts$|cli/)' },
+      { path: '^server/(main|compose|compose-notices)\\.ts$' },
     ),
     forbid(
       'production-needs-no-dev-packages',
