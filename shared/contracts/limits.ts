@@ -111,7 +111,7 @@ export const limitsTrialResponse = z.object({
   going: z.object(trialCount),
   /** Flags that stay but change between suspected and likely. */
   changingCount: z.int(),
-  /** Screenings made with another version of the method than the newest one's. */
+  /** Screenings made with another version of the method than the present one. */
   otherMethodCount: z.int(),
   /** Highest score first; no more than `shownMax` of them. */
   changes: z.array(changedFlag),

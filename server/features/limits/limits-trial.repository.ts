@@ -4,6 +4,7 @@ import type { InspectionOutcome } from '#shared/contracts/inspection.ts';
 import type { MachineKind } from '#shared/contracts/machine.ts';
 import type { Direction } from '#shared/contracts/measuring-point.ts';
 import type { ReviewDecision } from '#shared/contracts/review.ts';
+import { methodVersion } from '#shared/signal/screen-waveform.ts';
 import type { Verdict } from '#shared/signal/screening-types.ts';
 
 /** The machines a trial looks at: one kind, or all but the kinds that have limits of their own. */
@@ -53,8 +54,7 @@ export class LimitsTrialRepository {
               SUM(screening.score >= ?) AS flagsThenCount,
               SUM(screening.score >= ? AND screening.score >= ?
                   AND (screening.score >= ?) <> (screening.score >= ?)) AS changingCount,
-              SUM(screening.method_version <> (SELECT newest.method_version FROM screening newest
-                   ORDER BY newest.id DESC LIMIT 1)) AS otherMethodCount
+              SUM(screening.method_version <> ?) AS otherMethodCount
          ${from} WHERE ${where}`,
       [
         now.suspectedScore,
@@ -63,6 +63,7 @@ export class LimitsTrialRepository {
         tried.suspectedScore,
         now.likelyScore,
         tried.likelyScore,
+        methodVersion,
         ...values,
       ],
     );

@@ -109,8 +109,8 @@ export function TrialResult({ siteId, trial }: { siteId: number; trial: LimitsTr
         )}
         {trial.otherMethodCount > 0 && (
           <p className="mt-1 text-ink-soft">
-            {trial.otherMethodCount} of the screenings were made with another version of the method;
-            their scores are not quite on the scale of the new ones.
+            {trial.otherMethodCount} of the screenings were made with another version of the method
+            than the present one; their scores are not quite on the scale of the new ones.
           </p>
         )}
       </div>

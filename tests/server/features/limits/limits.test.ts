@@ -5,7 +5,7 @@ import { Database } from '#server/db/database.ts';
 import { LimitsRepository } from '#server/screening/limits.repository.ts';
 import { ScreeningJobRepository } from '#server/screening/screening-job.repository.ts';
 import type { LimitsResponse, LimitsTrialResponse } from '#shared/contracts/limits.ts';
-import { defaultLimits } from '#shared/signal/screen-waveform.ts';
+import { defaultLimits, methodVersion } from '#shared/signal/screen-waveform.ts';
 import { buildMachine, buildPoint, buildPosition } from '#tests/support/factories.ts';
 import { buildPlant, type Plant } from '#tests/support/plant.ts';
 import { buildScreening, buildWaveform } from '#tests/support/screening-factories.ts';
@@ -190,6 +190,13 @@ describe('limits on trial', () => {
     expect(lower.coming.flagCount).toBe(1);
     expect(lower.changes).toMatchObject([{ score: 0.45, verdictThen: 'suspected' }]);
     expect((await limitsOf(plant)).history).toEqual([]);
+  });
+
+  it('say how many scores another version of the method gave', async () => {
+    const plant = await buildPlant(database());
+    await screened(plant, 0.3);
+    await plant.flag('vertical', { score: 0.4, methodVersion });
+    expect(await trial(plant, '')).toMatchObject({ screeningCount: 2, otherMethodCount: 1 });
   });
 
   it('say what the inspection after the survey found', async () => {

@@ -1,6 +1,9 @@
 import { describe, expect, it } from 'vitest';
+import { Waveform } from '#server/db/entities/waveform.entity.ts';
 import type { OutcomesResponse } from '#shared/contracts/outcomes.ts';
 import { buildPlant } from '#tests/support/plant.ts';
+import { buildScreening } from '#tests/support/screening-factories.ts';
+import { aScreeningResult } from '#tests/support/screening-result.ts';
 import { useTestDatabase } from '#tests/support/test-database.ts';
 import { aReport, inspectionStory } from '../inspections/inspection-story.ts';
 
@@ -41,6 +44,14 @@ describe('the outcomes of a site', () => {
       { trait: 'direction', value: 'vertical', confirmedCount: 1, notFoundCount: 0 },
     ]);
     expect(outcomes.times[0]).toMatchObject({ step: 'survey to inspection', findingCount: 1 });
+  });
+
+  it('count the newest screening of a waveform only', async () => {
+    const plant = await buildPlant(database());
+    const { waveformId } = await plant.flag('axial');
+    await database().getRepository(Waveform).update(waveformId, { screeningRun: 2 });
+    await buildScreening(database(), { id: waveformId }, aScreeningResult(), { run: 2 });
+    expect((await outcomesOf(plant)).flags).toMatchObject({ flaggedCount: 1, waitingCount: 1 });
   });
 
   it('say nothing of another site', async () => {
