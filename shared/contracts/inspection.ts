@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { numberBetween, paragraph } from './fields.ts';
 import { seatCondition, seatName, seatStage } from './fit-record.ts';
+import { inPlaceCheck, inPlaceCheckNames } from './in-place-check.ts';
 import { listQuery, listResponse } from './list.ts';
 import { seatAssessmentsResponse } from './seat-assessment.ts';
 
@@ -46,6 +47,17 @@ export const inspectionReport = z.strictObject({
   outcome: inspectionOutcome,
   seats: z.array(reportedSeat).max(4),
   inPlaceResult: paragraph(2000).nullable(),
+  /** What was checked on pedestal, foot or frame before anything was opened, each check once. */
+  inPlaceChecks: z
+    .array(inPlaceCheck)
+    .max(inPlaceCheckNames.length)
+    .refine(
+      (checks) => new Set(checks.map(({ check }) => check)).size === checks.length,
+      'A check is given twice.',
+    )
+    .default([]),
+  /** The cause was found in place: the seats stayed closed. */
+  causeInPlace: z.boolean().default(false),
   workDone: paragraph(4000).min(1, 'Say what was done, or that nothing was.'),
   /** True where the fit was put right, so that the next survey can prove it. */
   repaired: z.boolean(),

@@ -78,6 +78,8 @@ export async function repairAgitator(
         { seat: 'housing', stage: 'as found', condition: 'sound', readings: [] },
       ],
       inPlaceResult: null,
+      inPlaceChecks: [],
+      causeInPlace: false,
       workDone:
         'Shaft seat sprayed with metal and ground back to m6; bearing and sleeve of the seal replaced.',
       repaired: true,

@@ -1,3 +1,4 @@
+import type { InPlaceCheckName } from '#shared/contracts/in-place-check.ts';
 import type { SeatStage } from '#shared/contracts/fit-record.ts';
 import type { InspectionListItem, InspectionOutcome } from '#shared/contracts/inspection.ts';
 
@@ -31,3 +32,33 @@ export function checksText(
   ].join(', ');
   return words.charAt(0).toUpperCase() + words.slice(1);
 }
+
+export const inPlaceFindingWords = {
+  sound: 'Sound',
+  fault: 'At fault',
+  'not checked': 'Not checked',
+} as const;
+
+/** Names of the checks, what is read, and how it is done (common practice, no source). */
+export const inPlaceWords: Readonly<
+  Record<InPlaceCheckName, { name: string; reading: string; hint: string }>
+> = {
+  'bolt torque': {
+    name: 'Bolt torque',
+    reading: 'Lowest torque',
+    hint: 'Each foot and pedestal bolt, with a torque wrench, against the maker’s figure',
+  },
+  'movement across the joint': {
+    name: 'Movement across the joint',
+    reading: 'Below the joint',
+    hint: 'Vibration at 1× on both sides of the joint, one hand’s breadth apart, while it runs',
+  },
+  'soft foot': {
+    name: 'Soft foot',
+    reading: 'Rise when loosened',
+    hint: 'Dial gauge on each foot in turn, bolt loosened, machine locked out',
+  },
+  shims: { name: 'Shims', reading: '', hint: 'Few, flat, clean and under the whole foot' },
+  grout: { name: 'Grout', reading: '', hint: 'Hollow sound, crumbling edges, oil in it' },
+  cracks: { name: 'Cracks', reading: '', hint: 'Pedestal, welds, base and frame' },
+};

@@ -5,6 +5,11 @@ import {
   type SeatStage,
 } from '#shared/contracts/fit-record.ts';
 import {
+  inPlaceCheckNames,
+  type InPlaceCheck,
+  type InPlaceCheckName,
+} from '#shared/contracts/in-place-check.ts';
+import {
   planes,
   readingDirectionsDeg,
   type InspectionOutcome,
@@ -26,6 +31,16 @@ export interface SeatDraft {
   readings: Readonly<Record<string, string>>;
 }
 
+/** One check as it has been told so far. */
+export interface InPlaceDraft {
+  finding: InPlaceCheck['finding'] | '';
+  reading: string;
+  readingAbove: string;
+  note: string;
+}
+
+export const emptyCheck: InPlaceDraft = { finding: '', reading: '', readingAbove: '', note: '' };
+
 /** A report as far as it has been typed. Kept on the device, so that a dead battery loses nothing. */
 export interface ReportDraft {
   cautionsRead: boolean;
@@ -33,6 +48,9 @@ export interface ReportDraft {
   outcome: InspectionOutcome | '';
   seats: Readonly<Record<string, SeatDraft>>;
   inPlaceResult: string;
+  /** By name of the check. */
+  inPlace: Readonly<Partial<Record<InPlaceCheckName, InPlaceDraft>>>;
+  causeInPlace: boolean;
   workDone: string;
   repaired: boolean;
 }
@@ -46,6 +64,8 @@ export const emptyDraft: ReportDraft = {
   outcome: '',
   seats: {},
   inPlaceResult: '',
+  inPlace: {},
+  causeInPlace: false,
   workDone: '',
   repaired: false,
 };
@@ -82,6 +102,9 @@ export const stagesOf = (draft: ReportDraft): readonly SeatStage[] =>
 const isTouched = (seat: SeatDraft) =>
   seat.condition !== '' || Object.values(seat.readings).some((typed) => typed.trim() !== '');
 
+const isUntouchedCheck = (told: InPlaceDraft) =>
+  Object.values(told).every((typed: string) => typed.trim() === '');
+
 /**
  * The draft as a report to send; faults are left in it for the contract to name. A seat as left
  * of which nothing was said is left out, a seat as found is always asked for.
@@ -90,7 +113,7 @@ export function reportOf(draft: ReportDraft, seats: readonly SeatName[]) {
   return {
     cautionsRead: draft.cautionsRead,
     outcome: draft.outcome,
-    seats: seats.flatMap((seat) =>
+    seats: (draft.causeInPlace ? [] : seats).flatMap((seat) =>
       stagesOf(draft).flatMap((stage) => {
         const told = draft.seats[seatKey(seat, stage)] ?? emptySeat;
         if (stage === 'as left' && !isTouched(told)) return [];
@@ -106,6 +129,20 @@ export function reportOf(draft: ReportDraft, seats: readonly SeatName[]) {
       }),
     ),
     inPlaceResult: draft.inPlaceResult.trim() === '' ? null : draft.inPlaceResult,
+    inPlaceChecks: inPlaceCheckNames.flatMap((check) => {
+      const told = draft.inPlace[check];
+      if (told === undefined || isUntouchedCheck(told)) return [];
+      return [
+        {
+          check,
+          finding: told.finding,
+          reading: parseDecimal(told.reading) ?? null,
+          readingAbove: parseDecimal(told.readingAbove) ?? null,
+          note: told.note.trim() === '' ? null : told.note,
+        },
+      ];
+    }),
+    causeInPlace: draft.causeInPlace,
     workDone: draft.workDone,
     repaired: draft.repaired,
   };

@@ -2,6 +2,7 @@ import { inspectionReport } from '#shared/contracts/inspection.ts';
 import type { FormFault } from '#src/components/form-error-summary.tsx';
 
 type Draft = {
+  inPlaceChecks: readonly { check: string }[];
   seats: readonly { seat: string; stage: string }[];
 };
 
@@ -27,6 +28,16 @@ export function reportFaults(report: Draft): FormFault[] {
 function faultOf(report: Draft, path: readonly PropertyKey[], message: string): FormFault {
   const [field, index, inner] = path;
   if (field === 'outcome') return { message: 'Choose a result.', inputId: 'outcome' };
+  if (field === 'inPlaceChecks' && typeof index === 'number') {
+    const check = report.inPlaceChecks[index]?.check ?? '';
+    return {
+      inputId: `in-place-${check.replaceAll(' ', '-')}`,
+      message:
+        inner === 'finding'
+          ? `Say whether the ${check} is sound, at fault or was not checked.`
+          : `The reading of the ${check} is no number that can be.`,
+    };
+  }
   if (field === 'seats' && typeof index === 'number') {
     const told = report.seats[index];
     const name = `${told?.seat ?? ''} seat ${told?.stage ?? ''}`;

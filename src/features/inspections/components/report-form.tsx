@@ -13,6 +13,7 @@ import { FormErrorSummary, type FormFault } from '#src/components/form-error-sum
 import { RadioGroup } from '#src/components/radio-group.tsx';
 import { Textarea } from '#src/components/textarea.tsx';
 import type { ApiError } from '#src/lib/api-error.ts';
+import { InPlaceReport } from './in-place-report.tsx';
 import { outcomeWords } from './inspection-words.ts';
 import {
   emptySeat,
@@ -76,10 +77,12 @@ export function ReportForm({
     >
       <FormErrorSummary faults={faults} title="Please mend this and report again." />
       {inspection.checkInPlace && (
+        <InPlaceReport draft={draft} mayOpen={seats.length > 0} error={error} onChange={onChange} />
+      )}
+      {inspection.checkInPlace && (
         <Field
           id="inPlaceResult"
-          label="Found in place"
-          hint="Bolt torque, movement across the joint, soft foot, shims, grout, cracks"
+          label="What the checks in place come to"
           optional
           error={error('inPlaceResult')}
         >
@@ -95,7 +98,7 @@ export function ReportForm({
         checked={draft.repaired}
         onChange={(event) => onChange({ repaired: event.target.checked })}
       />
-      {seats.length > 0 && (
+      {seats.length > 0 && !draft.causeInPlace && (
         <>
           <RadioGroup
             inline

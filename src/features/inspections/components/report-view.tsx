@@ -3,6 +3,7 @@ import { planes, readingDirectionsDeg } from '#shared/contracts/inspection.ts';
 import { DescriptionList } from '#src/components/description-list.tsx';
 import { Figure } from '#src/components/figure.tsx';
 import { formatFixed } from '#src/lib/numbers.ts';
+import { InPlaceChecksView } from './in-place-checks-view.tsx';
 import { outcomeWords, partWords, seatWords, stageWords } from './inspection-words.ts';
 
 /** A report as it was given. */
@@ -14,12 +15,16 @@ export function ReportView({ report }: { report: InspectionReport }) {
           { label: 'Result', value: outcomeWords[report.outcome] },
           { label: 'Put right', value: report.repaired ? 'Yes' : 'No' },
           { label: 'Found in place', value: report.inPlaceResult },
+          ...(report.causeInPlace
+            ? [{ label: 'Seats', value: 'Stayed closed: the cause was found in place.' }]
+            : []),
           {
             label: 'Work done',
             value: <span className="whitespace-pre-line">{report.workDone}</span>,
           },
         ]}
       />
+      <InPlaceChecksView checks={report.inPlaceChecks} />
       {report.seats.map((seat) => (
         <ReportedSeatView key={`${seat.seat} ${seat.stage}`} seat={seat} />
       ))}

@@ -85,9 +85,48 @@ describe('reporting an inspection', () => {
             },
           ],
           inPlaceResult: null,
+          inPlaceChecks: [],
+          causeInPlace: false,
           workDone: 'Sleeve fitted.',
           repaired: true,
         },
+      },
+    });
+  });
+
+  it('tells what was checked in place, what it means, and leaves the seats closed', async () => {
+    const { user, sent } = await openReport({
+      [`GET ${path}`]: anInspection({ checkInPlace: true }),
+      [`POST ${path}/report`]: anInspection({ state: 'reported' }),
+    });
+    await user.selectOptions(
+      screen.getByRole('combobox', { name: /^Movement across the joint/ }),
+      'fault',
+    );
+    await user.type(screen.getByRole('textbox', { name: /^Below the joint/ }), '0,8');
+    await user.type(screen.getByRole('textbox', { name: /^Above the joint/ }), '2.9');
+    await screen.findByText(/moves 3\.6 times as much as below: the joint works/);
+    await user.selectOptions(screen.getByRole('combobox', { name: /^Bolt torque/ }), 'fault');
+    await user.type(screen.getByRole('textbox', { name: /^Lowest torque/ }), 'loose');
+    await user.click(screen.getByLabelText('The cause was found here'));
+    expect(screen.queryByLabelText('Condition')).toBeNull();
+    await user.type(screen.getByLabelText('Work done'), 'Bolts tightened.');
+    await user.click(screen.getByLabelText(/^Loose/));
+    await user.click(screen.getByRole('button', { name: 'Report' }));
+    expect((await screen.findByRole('alert')).textContent).toMatch(/reading of the bolt torque/);
+    expect(sent).toEqual([]);
+    await user.clear(screen.getByRole('textbox', { name: /^Lowest torque/ }));
+    await user.type(screen.getByRole('textbox', { name: /^Lowest torque/ }), '45');
+    await user.click(screen.getByRole('button', { name: 'Report' }));
+    await waitFor(() => expect(sent).toHaveLength(1));
+    expect(sent[0]?.body).toMatchObject({
+      report: {
+        seats: [],
+        causeInPlace: true,
+        inPlaceChecks: [
+          { check: 'bolt torque', finding: 'fault', reading: 45, readingAbove: null },
+          { check: 'movement across the joint', reading: 0.8, readingAbove: 2.9 },
+        ],
       },
     });
   });

@@ -33,6 +33,8 @@ export const aReport = (overrides: Partial<InspectionReport> = {}): InspectionRe
     },
   ],
   inPlaceResult: null,
+  inPlaceChecks: [],
+  causeInPlace: false,
   workDone: 'Sleeve fitted, new bearing mounted.',
   repaired: true,
   ...overrides,

@@ -21,6 +21,8 @@ const reportOf = (...seats: ReportedSeat[]): InspectionReport => ({
   outcome: 'loose',
   seats,
   inPlaceResult: null,
+  inPlaceChecks: [],
+  causeInPlace: false,
   workDone: 'Measured.',
   repaired: false,
 });

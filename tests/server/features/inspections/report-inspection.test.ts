@@ -95,6 +95,33 @@ describe('reporting an inspection', () => {
     expect(await database().getRepository(FitRecord).count()).toBe(0);
   });
 
+  it('keeps the checks in place, each once and with readings where there is one', async () => {
+    const plant = await buildPlant(database());
+    const { inspectionId } = await accepted(plant);
+    const movement = {
+      check: 'movement across the joint' as const,
+      finding: 'fault' as const,
+      reading: 0.8,
+      readingAbove: 2.9,
+      note: null,
+    };
+    const send = (inPlaceChecks: unknown[]) =>
+      report(plant, inspectionId, {
+        ...aReport(),
+        seats: [],
+        causeInPlace: true,
+        inPlaceChecks,
+      });
+    expect((await send([movement, movement])).status).toBe(422);
+    const withReading = { ...movement, check: 'grout', readingAbove: null };
+    expect((await send([withReading])).status).toBe(422);
+    const res = await send([movement]);
+    expect(res.status).toBe(200);
+    expect(res.body).toMatchObject({
+      report: { seats: [], causeInPlace: true, inPlaceChecks: [movement] },
+    });
+  });
+
   it('is refused until the cautions are ticked', async () => {
     const plant = await buildPlant(database());
     const { inspectionId } = await accepted(plant);

@@ -68,6 +68,8 @@ async function addInspection(plant: Plant) {
         outcome: 'loose',
         seats: [reportedShaft],
         inPlaceResult: null,
+        inPlaceChecks: [],
+        causeInPlace: false,
         workDone: 'Shaft sprayed and ground.',
         repaired: true,
       } as never,
