@@ -101,6 +101,17 @@ export const waveformResponse = waveformListItem.extend({
   previous: z
     .object({ waveformId: z.int(), screeningId: z.int(), surveyedOn: z.string() })
     .nullable(),
+  /** The other directions of the position in the same survey, where they were screened. */
+  alongside: z.array(
+    z.object({
+      waveformId: z.int(),
+      screeningId: z.int(),
+      direction,
+      unit,
+      /** Speed of the position's shaft as found there, Hz. */
+      speedHz: z.number().nullable(),
+    }),
+  ),
   can: z.object({ decide: z.boolean(), screenAgain: z.boolean() }),
 });
 export type WaveformResponse = z.infer<typeof waveformResponse>;

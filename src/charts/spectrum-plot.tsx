@@ -45,6 +45,8 @@ export interface SpectrumPlotProps {
   view?: SpectrumView;
   heightPx?: number;
   title?: string;
+  /** Under another spectrum that has the tools and says what is drawn. */
+  isCompanion?: boolean;
 }
 
 const keysHint =
@@ -54,7 +56,7 @@ const keysHint =
 export function SpectrumPlot(props: SpectrumPlotProps) {
   const { spectrum, unit, speedHz, orders, run, frequencyUnit, amplitudeScale } = props;
   const { shownUnit = unit, detector = 'peak', previous = null } = props;
-  const { heightPx = 300, title = 'Spectrum' } = props;
+  const { heightPx = 300, title = 'Spectrum', isCompanion = false } = props;
   const palette = useChartPalette();
   const keysHintId = useId();
   const [hover] = useState(() => createStore<number | null>(null));
@@ -161,24 +163,28 @@ export function SpectrumPlot(props: SpectrumPlotProps) {
         />
       }
       tools={
-        <SpectrumCursorChoice
-          cursor={view.cursor}
-          turn={turn}
-          view={() => windowWithin(view.window.get(), whole)}
-        />
+        !isCompanion && (
+          <SpectrumCursorChoice
+            cursor={view.cursor}
+            turn={turn}
+            view={() => windowWithin(view.window.get(), whole)}
+          />
+        )
       }
       caption={
-        <>
-          Grey line: noise floor.{' '}
-          {previous !== null && 'Broken line and cross bars: the survey before. '}
-          {shown.remark}{' '}
-          <ThinningRemark
-            spectrum={shown.front}
-            unitsPerHz={unitsPerHz}
-            whole={whole}
-            window={view.window}
-          />
-        </>
+        !isCompanion && (
+          <>
+            Grey line: noise floor.{' '}
+            {previous !== null && 'Broken line and cross bars: the survey before. '}
+            {shown.remark}{' '}
+            <ThinningRemark
+              spectrum={shown.front}
+              unitsPerHz={unitsPerHz}
+              whole={whole}
+              window={view.window}
+            />
+          </>
+        )
       }
       table={
         <SpectrumTable

@@ -180,5 +180,6 @@ export const aWaveform = (id: number, pointLabel: string): WaveformResponse => (
   direction: 'vertical',
   fullScale: null,
   previous: null,
+  alongside: [],
   can: { decide: true, screenAgain: true },
 });

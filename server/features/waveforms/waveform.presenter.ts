@@ -57,7 +57,7 @@ export function presentListItem(row: WaveformRow): WaveformListItem {
 export function presentWaveform(
   principal: SitePrincipal,
   row: WaveformRow,
-  previous: WaveformResponse['previous'],
+  { previous, alongside }: Pick<WaveformResponse, 'previous' | 'alongside'>,
 ): WaveformResponse {
   const { waveform, screening } = row;
   const { point, position, machine } = placeOf(row);
@@ -76,6 +76,7 @@ export function presentWaveform(
     direction: point.direction,
     fullScale: waveform.fullScale,
     previous,
+    alongside,
     can: {
       decide: mayWork && screening !== null && screening.decision === null,
       screenAgain:

@@ -117,6 +117,30 @@ export class WaveformRepository {
     };
   }
 
+  /** The other directions of the position in the same survey, if they were screened. */
+  async alongside(waveform: Waveform) {
+    const rows = await this.db
+      .createQueryBuilder(Screening, 'screening')
+      .innerJoin('screening.waveform', 'waveform')
+      .innerJoin('waveform.measuringPoint', 'point')
+      .select(['screening.id', 'screening.waveformId', 'screening.speedHz'])
+      .addSelect(['waveform.id', 'waveform.unit', 'point.id', 'point.direction'])
+      .where('waveform.surveyId = :survey', { survey: waveform.surveyId })
+      .andWhere('waveform.measuringPointId <> :point', { point: waveform.measuringPointId })
+      .andWhere('point.bearingPositionId = :position', {
+        position: waveform.measuringPoint?.bearingPositionId,
+      })
+      .andWhere('screening.run = waveform.screeningRun')
+      .orderBy('point.direction')
+      .addOrderBy('waveform.id', 'DESC')
+      .getMany();
+    return rows.flatMap(({ id, waveformId, speedHz, waveform: other }) => {
+      const direction = other?.measuringPoint?.direction;
+      if (other === undefined || direction === undefined) return [];
+      return [{ waveformId, screeningId: id, direction, unit: other.unit, speedHz }];
+    });
+  }
+
   async insert(waveforms: NewWaveform[]): Promise<void> {
     await this.db.insert(Waveform, waveforms);
   }

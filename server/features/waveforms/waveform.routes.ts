@@ -61,8 +61,8 @@ export const waveformRoutes = (waveforms: WaveformService) => [
     params: waveformParams,
     response: waveformResponse,
     handle: async ({ principal, params }) => {
-      const { row, previous } = await waveforms.one(principal, params.waveformId);
-      return presentWaveform(principal, row, previous);
+      const { row, ...company } = await waveforms.one(principal, params.waveformId);
+      return presentWaveform(principal, row, company);
     },
   }),
   route({

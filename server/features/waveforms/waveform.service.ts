@@ -25,7 +25,11 @@ export class WaveformService {
   async one(principal: SitePrincipal, id: number) {
     const repository = new WaveformRepository(this.database.db);
     const row = await this.seen(principal, id);
-    return { row, previous: await repository.previous(row.waveform) };
+    const [previous, alongside] = await Promise.all([
+      repository.previous(row.waveform),
+      repository.alongside(row.waveform),
+    ]);
+    return { row, previous, alongside };
   }
 
   async screening(principal: SitePrincipal, id: number) {

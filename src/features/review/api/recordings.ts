@@ -66,9 +66,15 @@ export async function prefetchItem(
     client.prefetchQuery(averagedRevolutionQuery(siteId, item.screeningId)),
   ]);
   const waveform = client.getQueryData(waveformQuery(siteId, item.waveformId).queryKey);
-  if (!waveform?.previous) return;
+  if (waveform === undefined) return;
+  const { previous, alongside } = waveform;
   await Promise.all([
-    client.prefetchQuery(waveformQuery(siteId, waveform.previous.waveformId)),
-    client.prefetchQuery(spectrumQuery(siteId, waveform.previous.screeningId)),
+    ...(previous === null
+      ? []
+      : [
+          client.prefetchQuery(waveformQuery(siteId, previous.waveformId)),
+          client.prefetchQuery(spectrumQuery(siteId, previous.screeningId)),
+        ]),
+    ...alongside.map((other) => client.prefetchQuery(spectrumQuery(siteId, other.screeningId))),
   ]);
 }

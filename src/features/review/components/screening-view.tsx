@@ -12,6 +12,7 @@ import { screeningQuery, waveformQuery } from '../api/recordings.ts';
 import { CorrectSpeed } from './correct-speed.tsx';
 import { Evidence } from './evidence.tsx';
 import { perHz } from '#src/charts/frequency-axis.ts';
+import { OtherDirections } from './other-directions.tsx';
 import { PlotSettings } from './plot-settings.tsx';
 import type { PlotSettingsValue } from './plot-settings-value.ts';
 import { ScreeningFacts } from './screening-facts.tsx';
@@ -99,6 +100,12 @@ export function ScreeningView({
             <ScreeningSpectrum
               siteId={siteId}
               screening={screening.data}
+              waveform={waveform.data}
+              settings={plotSettings}
+              view={places.spectrum}
+            />
+            <OtherDirections
+              siteId={siteId}
               waveform={waveform.data}
               settings={plotSettings}
               view={places.spectrum}

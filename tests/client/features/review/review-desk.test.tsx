@@ -211,4 +211,28 @@ describe('the review desk', () => {
     screen.getByText(/“x” is no flag\./);
     await screen.findByRole('application', { name: /Spectrum, m\/s² peak/ });
   });
+
+  it('shows the other directions of the position beneath, in the same unit', async () => {
+    const alongside = [
+      {
+        waveformId: 109,
+        screeningId: 9,
+        direction: 'axial' as const,
+        unit: 'm/s²' as const,
+        speedHz: 24.6,
+      },
+    ];
+    openDesk(
+      {
+        [`GET ${site}/waveforms/101`]: { ...aWaveform(101, labels[1]), alongside },
+        [`GET ${site}/screenings/9/spectrum`]: new Float32Array([
+          1,
+          ...Array<number>(32).fill(0.1),
+        ]),
+      },
+      '/sites/1/review?unit=mm/s',
+    );
+    const others = within(await screen.findByRole('region', { name: 'Other directions' }));
+    await others.findByRole('application', { name: /^Axial, same survey, mm\/s peak/ });
+  });
 });

@@ -23,6 +23,26 @@ const app = () => buildTestApp(dataSource(), dataDirectory);
 const as = (user: { id: number }) => app().as(user);
 
 describe('GET …/waveforms/:waveformId', () => {
+  it('names the other directions of the position in the same survey, and those alone', async () => {
+    const { waveformId } = await plant.flag('vertical');
+    const axial = await plant.flag('axial');
+    const earlier = await buildSurvey(dataSource(), { id: plant.survey.routeId }, plant.analyst, {
+      surveyedOn: '2026-08-03',
+    });
+    const before = await buildWaveform(dataSource(), {
+      surveyId: earlier.id,
+      measuringPointId: plant.points.horizontal.id,
+      uploadedByUserId: plant.analyst.id,
+    });
+    await buildScreening(dataSource(), before);
+    const res = await as(plant.lead).get(plant.path(`/waveforms/${waveformId}`));
+    const { alongside } = waveformResponse.parse(res.body);
+    expect(alongside.map(({ screeningId, direction }) => [screeningId, direction])).toEqual([
+      [axial.id, 'axial'],
+    ]);
+    expect(alongside[0]?.waveformId).toBe(axial.waveformId);
+  });
+
   it('names the same point’s screening in the survey before', async () => {
     const earlier = await buildSurvey(dataSource(), { id: plant.survey.routeId }, plant.analyst, {
       surveyedOn: '2026-08-03',
