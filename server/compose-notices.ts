@@ -18,6 +18,9 @@ import { todayAnywhere } from './features/inspections/today-anywhere.ts';
 import { outboxRoutes } from './features/outbox/outbox.routes.ts';
 import { OutboxService } from './features/outbox/outbox.service.ts';
 import { ReviewRepository } from './features/review/review.repository.ts';
+import { webhookRoutes } from './features/webhooks/webhook.routes.ts';
+import { WebhookSender } from './features/webhooks/webhook-sender.ts';
+import { WebhookService } from './features/webhooks/webhook.service.ts';
 import type { Route } from './http/route.ts';
 import { DemoMailRepository } from './mail/demo-mail.repository.ts';
 import { FakeSmtpServer } from './mail/fake-smtp-server.ts';
@@ -26,6 +29,7 @@ import { OutboxSender } from './mail/outbox-sender.ts';
 import { RegularRound } from './mail/regular-round.ts';
 
 const reminderRoundMs = 5 * 60 * 1000;
+const webhookRoundMs = 3_000;
 
 export interface Background {
   stop: () => Promise<void>;
@@ -66,6 +70,7 @@ export function composeNotices(parts: NoticeParts) {
     { roleAt: accounts.roleAt.bind(accounts), publicUrl },
     now,
   );
+  const allowsInnerTargets = config.webhookInnerTargets;
   const demoMails = new DemoMailRepository(database.db);
 
   const routes: Route[] = [
@@ -73,6 +78,7 @@ export function composeNotices(parts: NoticeParts) {
     ...outboxRoutes(new OutboxService(database, now)),
     ...deskRoutes(desk, new ChangeInspection(database, inspectionNeighbours, now)),
     ...calendarRoutes(calendar),
+    ...webhookRoutes(new WebhookService(database, allowsInnerTargets, now)),
     ...(config.demo ? demoMailboxRoutes(demoMails, publicUrl) : []),
   ];
 
@@ -101,7 +107,15 @@ export function composeNotices(parts: NoticeParts) {
       logger,
     });
     reminderRound.start();
-    return [...started, sender, reminderRound];
+    const webhooks = new WebhookSender({ database, logger, publicUrl, allowsInnerTargets, now });
+    const webhookRound = new RegularRound({
+      name: 'webhooks',
+      everyMs: webhookRoundMs,
+      run: () => webhooks.round(),
+      logger,
+    });
+    webhookRound.start();
+    return [...started, sender, reminderRound, webhookRound];
   };
   return { routes, start };
 }

@@ -19,6 +19,7 @@ const environmentSchema = z.object({
   SMTP_URL: z.url({ protocol: /^smtps?$/ }).optional(),
   MAIL_FROM: z.string().min(3).default('Fretline <fretline@localhost>'),
   DEMO: flag.default(false),
+  WEBHOOK_INNER_TARGETS: flag.optional(),
   LOG_LEVEL: z.enum(['silent', 'error', 'warn', 'info', 'debug']).default('info'),
   SCREENING_WORKERS: z.coerce.number().int().min(1).max(64).default(2),
 });
@@ -36,6 +37,8 @@ export interface Config {
   smtpUrl: string | undefined;
   mailFrom: string;
   demo: boolean;
+  /** Webhooks may lead into the server's own network, where a plant's systems often stand. */
+  webhookInnerTargets: boolean;
   logLevel: 'silent' | 'error' | 'warn' | 'info' | 'debug';
   screeningWorkerCount: number;
   accessTokenLifeS: number;
@@ -70,6 +73,7 @@ export function readConfig(environment: Record<string, string | undefined>): Con
     smtpUrl: env.SMTP_URL,
     mailFrom: env.MAIL_FROM,
     demo: env.DEMO,
+    webhookInnerTargets: env.WEBHOOK_INNER_TARGETS ?? env.DEMO,
     logLevel: env.LOG_LEVEL,
     screeningWorkerCount: env.SCREENING_WORKERS,
     accessTokenLifeS: 10 * 60,
