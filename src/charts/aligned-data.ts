@@ -15,22 +15,20 @@ export function alignedData(
   before: readonly Series[] = [],
 ): uPlot.AlignedData {
   const read = (series: Series | null) =>
-    series === null ? spectrum.x.map(() => Number.NaN) : readAt(series, spectrum.x);
+    series === null ? Array.from(spectrum.x, () => null) : readAt(series, spectrum.x);
   return [spectrum.x, ...behind.map(read), spectrum.y, ...before.map(read)];
 }
 
-function readAt({ x, y }: Series, places: Float64Array): Float64Array {
-  const read = new Float64Array(places.length);
+/** Null where there is nothing: a NaN would leave the y scale without an end. */
+function readAt({ x, y }: Series, places: Float64Array): (number | null)[] {
+  const read = Array<number | null>(places.length).fill(null);
   let right = 0;
   for (let i = 0; i < places.length; i += 1) {
     const place = places[i] ?? 0;
     while (right < x.length && (x[right] ?? 0) < place) right += 1;
     const xRight = x[right];
     const yRight = y[right];
-    if (xRight === undefined || yRight === undefined) {
-      read[i] = Number.NaN;
-      continue;
-    }
+    if (xRight === undefined || yRight === undefined) break;
     const xLeft = x[right - 1] ?? xRight;
     const yLeft = y[right - 1] ?? yRight;
     const share = xRight > xLeft ? (place - xLeft) / (xRight - xLeft) : 1;

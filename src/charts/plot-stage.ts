@@ -66,6 +66,8 @@ export function stagePlot(
   const plot = new uPlot(
     {
       ...options,
+      // Told at once: set afterwards, the y scale has been ranged over nothing.
+      scales: { ...options.scales, x: { ...options.scales?.['x'], ...view() } },
       width: size.widthPx,
       height: size.heightPx,
       cursor: {
@@ -122,8 +124,6 @@ export function stagePlot(
     }
     if (canvas !== null) drawOverlay(canvas, plot, overlay);
   }
-  // Before uPlot draws what it was built with, so that it draws once; the overlay needs its layout.
-  plot.setScale('x', view());
   request();
 
   const unsubscribe = [windowStore.subscribe(refresh), overlay?.subscribe(request)];

@@ -55,7 +55,11 @@ export function WaveformPlot({
       whole,
       dataFor: (stretch) => {
         const thinned = thinnedStretch(samples, sampleRateHz, stretch);
-        return [thinned.index.map((index) => index / sampleRateHz), thinned.value];
+        return [
+          thinned.index.map((index) => index / sampleRateHz),
+          // A gap: NaN would leave the y scale without an end.
+          Array.from(thinned.value, (value) => (Number.isNaN(value) ? null : value)),
+        ];
       },
       drawUnder: (plot) => drawWaveformMarks(plot, revolutionS, marks, palette),
     };

@@ -120,7 +120,7 @@ describe('the series of a spectrum', () => {
     const front = { x: Float64Array.from([0, 1, 2]), y: Float64Array.from([1, 1, 1]) };
     const behind = { x: Float64Array.from([0, 2]), y: Float64Array.from([0, 10]) };
     expect([...(alignedData(front, [behind])[1] ?? [])]).toEqual([0, 5, 10]);
-    expect([...(alignedData(front, [null])[1] ?? [])]).toEqual([NaN, NaN, NaN]);
+    expect([...(alignedData(front, [null])[1] ?? [])]).toEqual([null, null, null]);
   });
 });
 
