@@ -11,10 +11,13 @@ export function QueueList({
   items,
   selectedId,
   onSelect,
+  onAim,
 }: {
   items: readonly ReviewQueueItem[];
   selectedId: number | undefined;
   onSelect: (screeningId: number) => void;
+  /** The pointer has come to a flag, and may be about to choose it. */
+  onAim: (item: ReviewQueueItem) => void;
 }) {
   const list = useRef<HTMLOListElement>(null);
   useEffect(() => {
@@ -44,6 +47,7 @@ export function QueueList({
           item={item}
           isSelected={item.screeningId === selectedId}
           onSelect={onSelect}
+          onAim={onAim}
         />
       ))}
     </ol>
@@ -54,10 +58,12 @@ function QueueRow({
   item,
   isSelected,
   onSelect,
+  onAim,
 }: {
   item: ReviewQueueItem;
   isSelected: boolean;
   onSelect: (screeningId: number) => void;
+  onAim: (item: ReviewQueueItem) => void;
 }) {
   return (
     <li className="border-b border-hairline last:border-b-0">
@@ -65,6 +71,7 @@ function QueueRow({
         type="button"
         data-screening={item.screeningId}
         aria-current={isSelected ? 'true' : undefined}
+        onPointerEnter={() => onAim(item)}
         onClick={() => onSelect(item.screeningId)}
         className={`flex w-full cursor-pointer flex-col gap-1 border-l-4 px-3 py-2 text-left hover:bg-well ${isSelected ? 'border-ink bg-well' : 'border-transparent'}`}
       >

@@ -115,7 +115,12 @@ export function ReviewDesk(props: ReviewDeskProps) {
   return (
     <div className="grid items-start gap-4 xl:grid-cols-[17.5rem_minmax(0,1fr)]">
       <div className="flex flex-col gap-2">
-        <QueueList items={items} selectedId={screeningId} onSelect={onSelect} />
+        <QueueList
+          items={items}
+          selectedId={screeningId}
+          onSelect={onSelect}
+          onAim={(aimed) => void prefetchItem(client, siteId, aimed)}
+        />
         {lastDecision}
         <Button size="small" variant="quiet" icon="help" onClick={() => setShowsKeys(true)}>
           Keys
