@@ -83,6 +83,10 @@ const pages: Readonly<Record<string, Load>> = {
     const { deskLoader, DeskPage } = await import('./routes/desk.tsx');
     return { loader: deskLoader, Component: DeskPage };
   },
+  webhook: async () => {
+    const { webhookLoader, WebhookPage } = await import('./routes/webhook.tsx');
+    return { loader: webhookLoader, Component: WebhookPage };
+  },
   mails: async () => {
     const { siteMailsLoader, SiteMailsPage } = await import('./routes/mails.tsx');
     return { loader: siteMailsLoader, Component: SiteMailsPage };

@@ -32,6 +32,9 @@ const pages: Readonly<Record<string, readonly string[]>> = {
     '/machines/1/edit',
     '/machines/1/positions/1/seats/shaft',
     '/routes/new',
+    '/desk',
+    '/mails',
+    '/webhook',
     '/outcomes',
     '/limits',
   ],
@@ -57,7 +60,7 @@ async function violationsOf(page: Page): Promise<string[]> {
 describe.each(['light', 'dark'] as const)('every page, %s', (theme) => {
   it('has nothing that axe objects to, signed out', async () => {
     const { page, close } = await openPage(browser(), { theme });
-    for (const address of ['/sign-in', '/demo/mailbox', '/no-such-page']) {
+    for (const address of ['/sign-in', '/demo/mailbox', '/unsubscribe/nonsense', '/no-such-page']) {
       await page.goto(product().url + address);
       await page.getByRole('heading', { level: 1 }).first().waitFor();
       expect(await violationsOf(page), address).toEqual([]);
@@ -79,9 +82,11 @@ describe.each(['light', 'dark'] as const)('every page, %s', (theme) => {
       await page.getByRole('heading', { level: 1 }).first().waitFor();
       expect(await violationsOf(page), address).toEqual([]);
     }
-    await page.goto(`${url}/method`);
-    await page.getByRole('heading', { level: 1 }).first().waitFor();
-    expect(await violationsOf(page), '/method').toEqual([]);
+    for (const address of ['/method', '/account']) {
+      await page.goto(url + address);
+      await page.getByRole('heading', { level: 1 }).first().waitFor();
+      expect(await violationsOf(page), address).toEqual([]);
+    }
     await close();
   });
 });

@@ -86,9 +86,10 @@ describe('the main job', () => {
     // The e-mail arrives once, with the link to the inspection.
     await page.goto(`${demo.url}/demo/mailbox`);
     const mails = page.getByRole('list', { name: 'Mails received' });
-    await mails.getByText(/P-201/).first().waitFor({ timeout: 20_000 });
-    expect(await mails.getByRole('listitem').count()).toBe(1);
-    await mails.getByRole('button').first().click();
+    const about = mails.getByRole('button', { name: /Fit inspection of P-201/ });
+    await about.first().waitFor({ timeout: 20_000 });
+    expect(await about.count()).toBe(1);
+    await about.click();
     const link = page.getByRole('link', { name: /\/inspections\/\d+/ }).first();
     const address = (await link.getAttribute('href')) ?? '';
     expect(address).toMatch(/\/sites\/\d+\/inspections\/\d+$/);

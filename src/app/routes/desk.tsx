@@ -6,6 +6,8 @@ import { ButtonLink } from '#src/components/button-link.tsx';
 import { PageHeader } from '#src/components/page-header.tsx';
 import { Panel } from '#src/components/panel.tsx';
 import { useToast } from '#src/components/toast.tsx';
+import { calendarFeedQuery } from '#src/features/calendar/api/calendar.ts';
+import { CalendarPanel } from '#src/features/calendar/components/calendar-panel.tsx';
 import { deskQuery, useDeskChange, type DeskChange } from '#src/features/desk/api/desk.ts';
 import { Board, type DeskAction } from '#src/features/desk/components/board.tsx';
 import { ChangeDialog } from '#src/features/desk/components/change-dialog.tsx';
@@ -16,7 +18,11 @@ import { useSite } from '../site-context.ts';
 export const deskLoader =
   (queryClient: QueryClient) =>
   async ({ params }: LoaderFunctionArgs) => {
-    await queryClient.ensureQueryData(deskQuery(Number(params.siteId)));
+    const siteId = Number(params.siteId);
+    await Promise.all([
+      queryClient.ensureQueryData(deskQuery(siteId)),
+      queryClient.ensureQueryData(calendarFeedQuery(siteId)),
+    ]);
     return null;
   };
 
@@ -66,7 +72,12 @@ export function DeskPage() {
       <PageHeader
         title="Desk"
         facts={[{ label: 'Overdue', value: String(overdue) }]}
-        actions={<ButtonLink to={`/sites/${siteId}/mails`}>E-mails sent</ButtonLink>}
+        actions={
+          <>
+            <ButtonLink to={`/sites/${siteId}/mails`}>E-mails sent</ButtonLink>
+            <ButtonLink to={`/sites/${siteId}/webhook`}>Maintenance system</ButtonLink>
+          </>
+        }
       />
       <div className="flex flex-col gap-5">
         <Board siteId={siteId} columns={desk.columns} onAct={act} />
@@ -74,28 +85,31 @@ export function DeskPage() {
           <Panel title="Load of the asset owners">
             <LoadTable owners={desk.owners} />
           </Panel>
-          <Panel title="Machines without an owner">
-            {total === 0 ? (
-              <p className="text-sm text-ink-soft">Every machine has an asset owner.</p>
-            ) : (
-              <>
-                <p className="mb-2 max-w-prose text-sm text-ink-soft">
-                  {total === 1 ? '1 machine has' : `${total} machines have`} no asset owner. When an
-                  inspection is assigned, nobody is proposed for it.
-                </p>
-                <ul className="text-sm">
-                  {machines.map((machine) => (
-                    <li key={machine.id}>
-                      <Link className="ink-link" to={`/sites/${siteId}/machines/${machine.id}`}>
-                        <span className="figures">{machine.tag}</span> {machine.name}
-                      </Link>
-                    </li>
-                  ))}
-                  {total > machines.length && <li>and {total - machines.length} more</li>}
-                </ul>
-              </>
-            )}
-          </Panel>
+          <div className="flex flex-col gap-5">
+            <Panel title="Machines without an owner">
+              {total === 0 ? (
+                <p className="text-sm text-ink-soft">Every machine has an asset owner.</p>
+              ) : (
+                <>
+                  <p className="mb-2 max-w-prose text-sm text-ink-soft">
+                    {total === 1 ? '1 machine has' : `${total} machines have`} no asset owner. When
+                    an inspection is assigned, nobody is proposed for it.
+                  </p>
+                  <ul className="text-sm">
+                    {machines.map((machine) => (
+                      <li key={machine.id}>
+                        <Link className="ink-link" to={`/sites/${siteId}/machines/${machine.id}`}>
+                          <span className="figures">{machine.tag}</span> {machine.name}
+                        </Link>
+                      </li>
+                    ))}
+                    {total > machines.length && <li>and {total - machines.length} more</li>}
+                  </ul>
+                </>
+              )}
+            </Panel>
+            <CalendarPanel siteId={siteId} whose="all inspections due at this site" />
+          </div>
         </div>
       </div>
       {open !== null && (

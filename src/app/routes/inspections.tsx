@@ -11,10 +11,13 @@ import { Pager } from '#src/components/pager.tsx';
 import { SearchInput } from '#src/components/search-input.tsx';
 import { Select } from '#src/components/select.tsx';
 import { inspectionStateWords } from '#src/components/work-state-mark.tsx';
+import { calendarFeedQuery } from '#src/features/calendar/api/calendar.ts';
+import { CalendarPanel } from '#src/features/calendar/components/calendar-panel.tsx';
 import { inspectionListQuery } from '#src/features/inspections/api/inspections.ts';
 import { InspectionTable } from '#src/features/inspections/components/inspection-table.tsx';
 import { SaveFileButton } from '#src/features/papers/components/save-file-button.tsx';
 import { withQuery } from '#src/lib/api-client.ts';
+import { sessionQuery } from '#src/features/session/api/session.ts';
 import { readListQuery, useListAddress } from '../list-address.ts';
 import { useSite } from '../site-context.ts';
 
@@ -27,7 +30,15 @@ export const inspectionsLoader =
   (queryClient: QueryClient) =>
   async ({ params, request }: LoaderFunctionArgs) => {
     const query = readListQuery(inspectionListContract, new URL(request.url).searchParams);
-    await queryClient.ensureQueryData(inspectionListQuery(Number(params.siteId), query));
+    const siteId = Number(params.siteId);
+    const session = await queryClient.ensureQueryData(sessionQuery());
+    const isOwner = session?.memberships.some(
+      (one) => one.siteId === siteId && one.role === 'owner',
+    );
+    await Promise.all([
+      queryClient.ensureQueryData(inspectionListQuery(siteId, query)),
+      ...(isOwner ? [queryClient.ensureQueryData(calendarFeedQuery(siteId))] : []),
+    ]);
     return null;
   };
 
@@ -120,6 +131,11 @@ export function InspectionsPage() {
           onPage={(page) => set({ page })}
           onPageSize={(pageSize) => set({ pageSize })}
         />
+      )}
+      {role === 'owner' && (
+        <div className="mt-6 max-w-2xl">
+          <CalendarPanel siteId={siteId} whose="the inspections that are yours to do" />
+        </div>
       )}
     </>
   );

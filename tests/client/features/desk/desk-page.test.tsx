@@ -36,6 +36,7 @@ const openDesk = (extra: Parameters<typeof renderPage>[1] = {}) =>
   renderPage('/sites/1/desk', {
     'GET /api/session': aSession('lead'),
     'GET /api/sites/1/desk': desk(),
+    'GET /api/sites/1/calendar-feed': { createdAt: null, lastReadAt: null },
     ...extra,
   });
 
