@@ -34,7 +34,7 @@ const columns: DataTableColumn<OwnerLoad>[] = [
 export function LoadTable({ owners }: { owners: readonly OwnerLoad[] }) {
   return (
     <DataTable
-      label="Load of the asset owners"
+      label="Asset owners and what they have on hand"
       columns={columns}
       rows={owners}
       rowId={(owner) => owner.userId}

@@ -55,7 +55,7 @@ const columns = (onSendAgain: (mail: OutboxItem) => void): DataTableColumn<Outbo
       mail.state !== 'sent' && (
         <Button
           size="small"
-          aria-label={`Send again now: ${mail.subject}, to ${mail.toAddress}`}
+          aria-label={`Send now: ${mail.subject}, to ${mail.toAddress}`}
           onClick={() => onSendAgain(mail)}
         >
           Send now

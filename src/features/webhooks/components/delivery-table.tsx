@@ -61,7 +61,7 @@ const columns = (
       row.state !== 'sent' && (
         <Button
           size="small"
-          aria-label={`Tell again now: inspection ${row.inspectionId}, ${row.toState}`}
+          aria-label={`Tell now: inspection ${row.inspectionId}, ${row.toState}`}
           onClick={() => onTellAgain(row.id)}
         >
           Tell now

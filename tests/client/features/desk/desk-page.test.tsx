@@ -55,7 +55,7 @@ describe('the desk', () => {
     expect(within(column).getByRole('link', { name: 'P-101 Pump, drive end' })).toBeTruthy();
     expect(within(column).getByText('WO-4711')).toBeTruthy();
     expect(within(column).getByText('overdue')).toBeTruthy();
-    const load = screen.getByRole('table', { name: 'Load of the asset owners' });
+    const load = screen.getByRole('table', { name: 'Asset owners and what they have on hand' });
     const row = within(load).getByRole('row', { name: /Oskar Owner/ });
     expect(row.textContent).toBe('Oskar Owner1211');
     expect(screen.getByRole('link', { name: 'Z-1 Sump pump' })).toBeTruthy();

@@ -86,7 +86,7 @@ describe('the page of the maintenance system', () => {
     const table = await screen.findByRole('table', { name: 'What was told' });
     expect(within(table).getByText('Given up after 30 attempts')).toBeTruthy();
     expect(within(table).getByText('The receiver answered 503.')).toBeTruthy();
-    const name = 'Tell again now: inspection 5, reported';
+    const name = 'Tell now: inspection 5, reported';
     await userEvent.setup().click(within(table).getByRole('button', { name }));
     expect(await screen.findByText('It is told again now.')).toBeTruthy();
     expect(sent.map(({ call }) => call)).toEqual([
