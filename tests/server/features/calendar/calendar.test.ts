@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { Inspection } from '#server/db/entities/inspection.entity.ts';
 import { Machine } from '#server/db/entities/machine.entity.ts';
 import { Membership } from '#server/db/entities/membership.entity.ts';
-import { foldedLine } from '#server/features/calendar/ical-text.ts';
+import { escapedText, foldedLine } from '#server/features/calendar/ical-text.ts';
 import type { CalendarAddressResponse } from '#shared/contracts/calendar.ts';
 import { buildPlant, type Plant } from '#tests/support/plant.ts';
 import { testPublicUrl } from '#tests/support/test-app.ts';
@@ -107,6 +107,13 @@ describe('the calendar of inspections due', () => {
     await database().getRepository(Membership).delete({ userId: plant.owner.id });
     expect((await read(left)).status).toBe(404);
     expect((await read('/api/calendar/nonsense.ics')).status).toBe(404);
+  });
+});
+
+describe('escaping a text', () => {
+  // RFC 5545, 3.3.11; the parser above forgives what is not escaped.
+  it('escapes backslash, semicolon, comma and line breaks', () => {
+    expect(escapedText('a\\b;c,d\r\ne\nf\tg')).toBe('a\\\\b\\;c\\,d\\ne\\nf g');
   });
 });
 
