@@ -76,7 +76,10 @@ export function FitWorkbenchPage() {
       )}
       <div className="grid items-start gap-5 xl:grid-cols-[minmax(22rem,30rem)_1fr]">
         <WorkbenchForm parameters={parameters} faults={trial.faults} onChange={change} />
-        <section aria-label="What it comes to" aria-live="polite">
+        <section aria-labelledby="workbench-results" aria-live="polite">
+          <h2 id="workbench-results" className="sr-only">
+            What it comes to
+          </h2>
           <WorkbenchResults trial={trial} parameters={parameters} />
         </section>
       </div>

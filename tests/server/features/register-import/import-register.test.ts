@@ -134,12 +134,10 @@ describe('importing a register', () => {
     const record = { seat: 'shaft', recordedOn: '2026-01-15', source: 'drawing' };
     const answers = await Promise.all([
       story.apply(id),
-      story
-        .as(story.lead)
-        .post(`${story.path}/positions/${positionId}/fit-records`, {
-          ...record,
-          toleranceClass: 'm5',
-        }),
+      story.as(story.lead).post(`${story.path}/positions/${positionId}/fit-records`, {
+        ...record,
+        toleranceClass: 'm5',
+      }),
     ]);
     expect(answers.filter(({ status }) => status === 409)).toHaveLength(1);
     expect((await whole()).body.positions[0].fitRecords).toHaveLength(1);
