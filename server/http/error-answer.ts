@@ -8,6 +8,12 @@ import { AppError, statusOfCode } from './app-error.ts';
 /** Turns whatever was thrown into the one error body; only AppErrors keep their words. */
 export function errorAnswer(logger: Logger): ErrorRequestHandler {
   return (thrown: unknown, req, res, next) => {
+    if (res.headersSent && isLeft(thrown)) {
+      // Gone to another page in the middle of a download: nobody is left to tell, nothing failed.
+      logger.debug({ method: req.method, url: req.originalUrl }, 'the browser left');
+      res.destroy();
+      return;
+    }
     const error = asAppError(thrown);
     const id = randomUUID();
     const details = { errorId: id, method: req.method, url: req.originalUrl, code: error.code };
@@ -28,6 +34,9 @@ export function errorAnswer(logger: Logger): ErrorRequestHandler {
     res.status(statusOfCode[error.code]).json(body);
   };
 }
+
+const isLeft = (thrown: unknown) =>
+  (thrown as { code?: unknown } | null)?.code === 'ERR_STREAM_PREMATURE_CLOSE';
 
 function asAppError(thrown: unknown): AppError {
   if (thrown instanceof AppError) return thrown;
