@@ -20,7 +20,7 @@ import { profileByFile, type FileShare } from './profile-by-file.ts';
 
 const fileCount = 200;
 const sampleCount = 16_384;
-const rounds = 3;
+const rounds = 5;
 export const screeningAims = { ratio: 1, aimedRatio: 0.6 } as const;
 
 interface BenchFile {
