@@ -45,6 +45,7 @@ function openInspections(answers: Parameters<typeof renderPage>[1]) {
   });
   renderPage('/sites/1/inspections?state=assigned', {
     'GET /api/session': aSession('owner'),
+    'GET /api/sites/1/calendar-feed': { createdAt: null, lastReadAt: null },
     'GET /api/sites/1/inspections': { items: [anItem], total: 1, page: 1, pageSize: 50 },
     ...answers,
   });
