@@ -12,10 +12,11 @@ import { administrationRoutes } from './features/administration/administration.r
 import { AdministrationService } from './features/administration/administration.service.ts';
 import { findingEvidence } from './features/findings/finding-evidence.ts';
 import { moveFinding } from './features/findings/finding-progress.ts';
-import { presentFindingItem } from './features/findings/finding.presenter.ts';
+import { presentFinding, presentFindingItem } from './features/findings/finding.presenter.ts';
 import { findingRoutes } from './features/findings/finding.routes.ts';
 import { FindingService } from './features/findings/finding.service.ts';
 import type { InspectionNeighbours } from './features/inspections/inspection-neighbours.ts';
+import { presentInspection } from './features/inspections/inspection.presenter.ts';
 import { inspectionRoutes } from './features/inspections/inspection.routes.ts';
 import { InspectionService } from './features/inspections/inspection.service.ts';
 import { limitsRoutes } from './features/limits/limits.routes.ts';
@@ -23,6 +24,8 @@ import { LimitsService } from './features/limits/limits.service.ts';
 import { memberRoutes } from './features/members/members.routes.ts';
 import { outcomesRoutes } from './features/outcomes/outcomes.routes.ts';
 import { OutcomesService } from './features/outcomes/outcomes.service.ts';
+import { paperRoutes } from './features/papers/papers.routes.ts';
+import { PapersService } from './features/papers/papers.service.ts';
 import { fitChecks } from './features/register/fit-checks.ts';
 import { machineRoutes, positionRoutes } from './features/register/machine.routes.ts';
 import { MachineService } from './features/register/machine.service.ts';
@@ -35,15 +38,17 @@ import { ImportService } from './features/register-import/import.service.ts';
 import { registerImportRoutes } from './features/register-import/register-import.routes.ts';
 import { reviewRoutes } from './features/review/review.routes.ts';
 import { ReviewService } from './features/review/review.service.ts';
+import { bearingSizeOf } from './features/seats/position-fit.ts';
 import { SeatHistoryService } from './features/seats/seat-history.service.ts';
 import { seatRoutes } from './features/seats/seat.routes.ts';
 import { SeatService } from './features/seats/seat.service.ts';
 import { siteExportRoutes } from './features/site-exports/site-export.routes.ts';
 import { SiteExportService } from './features/site-exports/site-export.service.ts';
+import { presentSurvey } from './features/surveys/survey.presenter.ts';
 import { surveyRoutes } from './features/surveys/survey.routes.ts';
 import { SurveyService } from './features/surveys/survey.service.ts';
 import { UploadService } from './features/waveforms/upload.service.ts';
-import { presentListItem } from './features/waveforms/waveform.presenter.ts';
+import { presentListItem, presentScreening } from './features/waveforms/waveform.presenter.ts';
 import { WaveformRepository } from './features/waveforms/waveform.repository.ts';
 import { uploadRoutes, waveformRoutes } from './features/waveforms/waveform.routes.ts';
 import { WaveformService } from './features/waveforms/waveform.service.ts';
@@ -171,6 +176,28 @@ export function compose(
     inspections: async (principal, query) => (await inspections.list(principal, query)).items,
     checkSurvey: surveys.progress.bind(surveys),
   });
+  const papers = new PapersService(
+    database,
+    {
+      finding: async (principal, findingId) =>
+        presentFinding(principal, await findings.whole(principal, findingId)),
+      inspection: async (principal, inspectionId) =>
+        presentInspection(principal, await inspections.whole(principal, inspectionId)),
+      survey: async (principal, surveyId) =>
+        presentSurvey(await surveys.whole(principal, surveyId)),
+      bearingWidthMm: (position) => bearingSizeOf(position).widthMm,
+      screening: async (principal, screeningId) => {
+        const { screening, findingId } = await waveforms.screening(principal, screeningId);
+        return presentScreening(screening, findingId);
+      },
+      waveform: async (principal, waveformId) =>
+        presentListItem((await waveforms.one(principal, waveformId)).row),
+      plot: waveforms.plot.bind(waveforms),
+      samples: async (principal, waveformId) =>
+        (await waveforms.samples(principal, waveformId)).chunks,
+    },
+    now,
+  );
 
   const routes = [
     ...sessionRoutes({ sessions, accounts, demoAccounts: options.demoAccounts ?? [], config }),
@@ -193,6 +220,7 @@ export function compose(
     ...limitsRoutes(new LimitsService(database, now)),
     ...outcomesRoutes(new OutcomesService(database)),
     ...siteExportRoutes(siteExports),
+    ...paperRoutes(papers),
     ...notices.routes,
   ];
 
