@@ -1,4 +1,9 @@
-import { readingDirectionsDeg, type InspectionResponse } from '#shared/contracts/inspection.ts';
+import {
+  planes,
+  readingDirectionsDeg,
+  type InspectionResponse,
+} from '#shared/contracts/inspection.ts';
+import type { SeatStage } from '#shared/contracts/fit-record.ts';
 import { inPlaceCheckNames, inPlaceReadingUnits } from '#shared/contracts/in-place-check.ts';
 import { safetyCautions } from '#shared/contracts/safety-cautions.ts';
 import type { SeatAssessment } from '#shared/contracts/seat-assessment.ts';
@@ -39,7 +44,7 @@ export function drawInspection(sheet: Sheet, { inspection, widthMm }: Inspection
     sheet.heading('Instructions');
     sheet.paragraph(inspection.instructions);
   }
-  drawCautions(sheet, inspection);
+  drawCautions(sheet);
   if (inspection.checkInPlace) drawInPlace(sheet);
   for (const seat of seatsToCheck(inspection)) drawSeat(sheet, seat, widthMm);
   drawWork(sheet, inspection);
@@ -56,9 +61,9 @@ function tickLine(sheet: Sheet, text: string, left = margin, size = 8.5): void {
   sheet.y += sheet.textAt(text, left + tickIndent, sheet.y, width, { size }) + 2;
 }
 
-function drawCautions(sheet: Sheet, { seats }: InspectionResponse): void {
+function drawCautions(sheet: Sheet): void {
   sheet.heading('Read and tick before anything is touched', 60);
-  for (const caution of [...safetyCautions, ...seats.cautions]) tickLine(sheet, caution);
+  for (const caution of safetyCautions) tickLine(sheet, caution);
 }
 
 function drawInPlace(sheet: Sheet): void {
@@ -131,45 +136,49 @@ function drawPlan(sheet: Sheet, seat: SeatAssessment, widthMm: number | null): v
     }
     for (const step of plan.steps) sheet.paragraph(`· ${step}`, { size: 8, indent: 6 });
   }
-  for (const stage of ['as found', 'as left'] as const) {
-    for (const part of ['seat', 'ring'] as const) {
-      drawReadings(sheet, `${partWords[seat.seat][part]} ${stage}, mm or inch (cross out one)`);
-    }
+  for (const stage of ['as found', 'as left'] as const) drawReadings(sheet, seat.seat, stage);
+}
+
+const labelWidth = 44;
+const rowHeight = 18;
+const sideGap = 12;
+
+/** The seat on the left, the ring on the right: two planes, four directions, a blank for each. */
+function drawReadings(sheet: Sheet, seat: SeatAssessment['seat'], stage: SeatStage): void {
+  sheet.ensure(28 + 2 * rowHeight);
+  sheet.y += 5;
+  const width = (contentWidth - sideGap) / 2;
+  const top = sheet.y;
+  for (const [index, part] of (['seat', 'ring'] as const).entries()) {
+    sheet.y = top;
+    const left = margin + index * (width + sideGap);
+    readingGrid(sheet, `${partWords[seat][part]} ${stage}, mm / inch`, left, width);
   }
 }
 
-/** Two planes, four directions: a blank for each, and how it was read. */
-function drawReadings(sheet: Sheet, title: string): void {
-  const labelWidth = 60;
-  const column = (contentWidth - labelWidth) / readingDirectionsDeg.length;
-  const rowHeight = 18;
-  sheet.ensure(16 + 12 + 2 * rowHeight);
-  sheet.y += 5;
-  sheet.textAt(title, margin, sheet.y, contentWidth, { face: 'strong', size: 8 });
+function readingGrid(sheet: Sheet, title: string, left: number, width: number): void {
+  const column = (width - labelWidth) / readingDirectionsDeg.length;
+  const xOf = (index: number) => left + labelWidth + index * column;
+  sheet.textAt(title, left, sheet.y, width, { face: 'strong', size: 8, maxLines: 1 });
   sheet.y += 12;
-  readingDirectionsDeg.forEach((direction, index) =>
-    sheet.textAt(`${direction}°`, margin + labelWidth + index * column, sheet.y, column, {
+  for (const [index, direction] of readingDirectionsDeg.entries()) {
+    sheet.textAt(`${direction}°`, xOf(index), sheet.y, column, {
       size: 7,
       color: ink.soft,
       align: 'center',
-    }),
-  );
+    });
+  }
   sheet.y += 10;
-  for (const plane of [1, 2]) {
-    sheet.textAt(
-      plane === 1 ? 'Plane 1 (shoulder)' : 'Plane 2 (open end)',
-      margin,
-      sheet.y + 5,
-      labelWidth,
-      { size: 6.5, color: ink.soft },
-    );
-    readingDirectionsDeg.forEach((_, index) => {
+  for (const plane of planes) {
+    const label = plane === 1 ? 'Plane 1, at the shoulder' : 'Plane 2, open end';
+    sheet.textAt(label, left, sheet.y + 1, labelWidth - 3, { size: 6.5, color: ink.soft });
+    for (const index of readingDirectionsDeg.keys()) {
       sheet.doc
-        .rect(margin + labelWidth + index * column, sheet.y, column, rowHeight)
+        .rect(xOf(index), sheet.y, column, rowHeight)
         .lineWidth(0.6)
         .strokeColor(ink.full)
         .stroke();
-    });
+    }
     sheet.y += rowHeight;
   }
 }
@@ -198,9 +207,9 @@ function drawCondition(sheet: Sheet): void {
 }
 
 function drawWork(sheet: Sheet, { seats }: InspectionResponse): void {
-  sheet.heading('Work done', 150);
-  if (seats.mounting !== null) sheet.paragraph(seats.mounting.advice, { color: ink.soft });
-  sheet.ensure(140);
+  const advice = seats.mounting?.advice ?? '';
+  sheet.heading('Work done', 150 + (advice === '' ? 0 : sheet.heightOf(advice, contentWidth)));
+  if (advice !== '') sheet.paragraph(advice, { color: ink.soft });
   sheet.y += 4;
   ['What was done, parts used', '', '', ''].forEach((label) => {
     blank(sheet, label, margin, contentWidth, 20);
@@ -220,4 +229,7 @@ function drawWork(sheet: Sheet, { seats }: InspectionResponse): void {
     blank(sheet, label, margin + index * (third + 10), third, 30),
   );
   sheet.y += 32;
+  if (seats.cautions.length === 0) return;
+  sheet.heading('About these figures');
+  for (const note of seats.cautions) sheet.paragraph(note, { size: 7.5, color: ink.soft });
 }

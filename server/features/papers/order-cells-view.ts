@@ -44,3 +44,23 @@ export function cellViews(
       };
     });
 }
+
+/** "1–7, 9": the whole orders that stand out unexplained, rows of three and more drawn together. */
+export function standingOrdersText(cells: readonly OrderCell[]): string {
+  const orders = cells
+    .filter(({ order, significant, explainedBy }) => {
+      return significant && explainedBy === null && isWhole(order);
+    })
+    .map(({ order }) => Math.round(order))
+    .sort((a, b) => a - b);
+  const rows: number[][] = [];
+  for (const order of orders) {
+    const row = rows.at(-1);
+    if (row?.at(-1) === order - 1) row.push(order);
+    else rows.push([order]);
+  }
+  const text = rows.flatMap((row) =>
+    row.length >= 3 ? [`${row[0]}–${row.at(-1)}`] : row.map((order) => String(order)),
+  );
+  return text.join(', ') || 'none';
+}

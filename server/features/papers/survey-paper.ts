@@ -1,6 +1,7 @@
 import type { SurveyResponse } from '#shared/contracts/survey.ts';
 import type { WaveformListItem } from '#shared/contracts/waveform.ts';
 import { formatFixed } from '#shared/quantities/format-number.ts';
+import { standingOrdersText } from './order-cells-view.ts';
 import { scoreText, verdictWords } from './paper-words.ts';
 import { titleBlock } from './sheet-blocks.ts';
 import { ink, type Sheet } from './sheet.ts';
@@ -94,15 +95,6 @@ const speed: TableColumn<WaveformListItem> = {
   style: () => ({ face: 'figures' }),
 };
 
-const standingOrders = ({ orders }: WaveformListItem): string =>
-  orders
-    .filter(
-      ({ order, significant, explainedBy }) =>
-        significant && explainedBy === null && order >= 1 && Number.isInteger(order),
-    )
-    .map(({ order }) => String(order))
-    .join(' ') || 'none';
-
 const flagColumns = ({ points }: SurveyResponse): readonly TableColumn<WaveformListItem>[] => {
   const machineOf = new Map(points.map((point) => [point.id, point]));
   return [
@@ -136,7 +128,11 @@ const flagColumns = ({ points }: SurveyResponse): readonly TableColumn<WaveformL
       style: () => ({ face: 'figures' }),
     },
     speed,
-    { header: 'Orders that stand out', share: 20, value: standingOrders },
+    {
+      header: 'Orders that stand out',
+      share: 20,
+      value: ({ orders }) => standingOrdersText(orders),
+    },
     { header: 'Decision', share: 12, value: decisionText },
   ];
 };

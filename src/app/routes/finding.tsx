@@ -12,6 +12,7 @@ import { FindingInspections } from '#src/features/findings/components/finding-in
 import { FindingScreenings } from '#src/features/findings/components/finding-screenings.tsx';
 import { FindingVerification } from '#src/features/findings/components/finding-verification.tsx';
 import { MonitoringEnd } from '#src/features/findings/components/monitoring-end.tsx';
+import { SaveFileButton } from '#src/features/papers/components/save-file-button.tsx';
 import { SeatsView } from '#src/features/seats/components/seats-view.tsx';
 import { formatDay } from '#src/lib/dates.ts';
 import { useSite } from '../site-context.ts';
@@ -61,7 +62,17 @@ export function FindingPage() {
           { label: 'Opened', value: formatDay(finding.openedAt) },
           { label: 'Owner', value: finding.ownerName ?? 'nobody' },
         ]}
-        actions={hasDecisions(finding) && <FindingDecisions siteId={siteId} finding={finding} />}
+        actions={
+          <>
+            {hasDecisions(finding) && <FindingDecisions siteId={siteId} finding={finding} />}
+            <SaveFileButton
+              path={`/api/sites/${siteId}/findings/${findingId}/paper.pdf`}
+              fileName={`finding-${findingId}.pdf`}
+            >
+              Save as PDF
+            </SaveFileButton>
+          </>
+        }
       />
       <div className="grid items-start gap-5 2xl:grid-cols-[3fr_1fr]">
         <div className="flex min-w-0 flex-col gap-5">

@@ -10,6 +10,7 @@ import { InspectionDecisions } from '#src/features/inspections/components/inspec
 import { InspectionWork } from '#src/features/inspections/components/inspection-work.tsx';
 import { ReportView } from '#src/features/inspections/components/report-view.tsx';
 import { SeatLimits } from '#src/features/inspections/components/seat-limits.tsx';
+import { SaveFileButton } from '#src/features/papers/components/save-file-button.tsx';
 import { SeatsView } from '#src/features/seats/components/seats-view.tsx';
 import { formatDay, formatInstant } from '#src/lib/dates.ts';
 import { useSite } from '../site-context.ts';
@@ -53,9 +54,17 @@ export function InspectionPage() {
           { label: 'Assigned by', value: inspection.assignedByName },
         ]}
         actions={
-          (can.close || can.cancel) && (
-            <InspectionDecisions siteId={siteId} inspection={inspection} />
-          )
+          <>
+            {(can.close || can.cancel) && (
+              <InspectionDecisions siteId={siteId} inspection={inspection} />
+            )}
+            <SaveFileButton
+              path={`/api/sites/${siteId}/inspections/${inspectionId}/paper.pdf`}
+              fileName={`inspection-${inspectionId}.pdf`}
+            >
+              Sheet to take along
+            </SaveFileButton>
+          </>
         }
       />
       <div className="grid items-start gap-5 xl:grid-cols-2">

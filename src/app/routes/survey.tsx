@@ -64,6 +64,14 @@ export function SurveyPage() {
                 Save as CSV
               </SaveFileButton>
             )}
+            {counts.waveformCount > 0 && (
+              <SaveFileButton
+                path={`/api/sites/${siteId}/surveys/${surveyId}/paper.pdf`}
+                fileName={`survey-${survey.surveyedOn}.pdf`}
+              >
+                Save as PDF
+              </SaveFileButton>
+            )}
           </>
         }
       />
