@@ -1,6 +1,6 @@
 import PDFDocument from 'pdfkit';
 import { canShow, faces, fontPath, type Face } from './paper-fonts.ts';
-import { cutLines, linesOf, runsOf, type Typesetter } from './text-lines.ts';
+import { cutLines, linesOf, runsOf, withoutRaisedMinus, type Typesetter } from './text-lines.ts';
 
 /** Ink on white paper; vermilion and blue-green mean on paper what they mean on the pages. */
 export const ink = {
@@ -84,7 +84,13 @@ export class Sheet {
   lines(text: string, width: number, style: TextStyle = {}): string[] {
     const { size = normalSize, face = 'text', maxLines = Infinity } = style;
     const setter = this.setter(size);
-    return cutLines(linesOf(text, width, face, setter), maxLines, width, face, setter);
+    return cutLines(
+      linesOf(withoutRaisedMinus(text), width, face, setter),
+      maxLines,
+      width,
+      face,
+      setter,
+    );
   }
 
   heightOf(text: string, width: number, style: TextStyle = {}): number {

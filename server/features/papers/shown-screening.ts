@@ -139,16 +139,17 @@ async function readRecord(
   const shownS = samples.length / waveform.sampleRateHz;
   const turns = speedHz === null ? '' : `, first ${formatFixed(shownS * speedHz, 0)} revolutions`;
   const { truncation } = result;
+  const truncated =
+    truncation.side === 'none'
+      ? []
+      : truncation.ranges
+          .filter(([from]) => from < samples.length)
+          .map(([from, to]) => [from, Math.min(to, samples.length)] as const);
   return {
-    title: `Waveform, ${waveform.unit}${turns}${truncation.side === 'none' ? '' : '; truncated parts in vermilion'}`,
+    title: `Waveform, ${waveform.unit}${turns}${truncated.length === 0 ? '' : '; truncated parts in vermilion'}`,
     samples,
     span: shownS,
     spanUnit: 's',
-    truncated:
-      truncation.side === 'none'
-        ? []
-        : truncation.ranges
-            .filter(([from]) => from < samples.length)
-            .map(([from, to]) => [from, Math.min(to, samples.length)] as const),
+    truncated,
   };
 }

@@ -1,5 +1,5 @@
 import type { OrderCell } from '#shared/contracts/order-cells.ts';
-import { formatSignificant } from '#shared/quantities/format-number.ts';
+import { formatFixed } from '#shared/quantities/format-number.ts';
 import { cellViews, type CellFill } from './order-cells-view.ts';
 import { decadesOf, highestPath, placeOn, tickText, ticksOf, type Axis } from './plot-geometry.ts';
 import { contentWidth, ink, margin, type Ink, type Sheet } from './sheet.ts';
@@ -24,6 +24,10 @@ const fillInk: Readonly<Record<CellFill, Ink>> = {
   floor: ink.hairline,
 };
 
+/** "0.001", "10": plain as long as it fits before the axis. */
+const decadeText = (decade: number): string =>
+  decade < -5 ? `10^−${-decade}` : formatFixed(10 ** decade, Math.max(0, -decade));
+
 /** The spectrum with a logarithmic height, and under it the order strip in line with the orders. */
 export function drawSpectrum(sheet: Sheet, data: SpectrumData): void {
   const { doc } = sheet;
@@ -44,7 +48,7 @@ export function drawSpectrum(sheet: Sheet, data: SpectrumData): void {
   for (let decade = decades.from; decade <= decades.to; decade += 1) {
     const at = placeOn(y, decade);
     sheet.rule(at, ink.hairline, x.start, x.length);
-    sheet.textAt(formatSignificant(10 ** decade, 1), margin, at - 5, leftRoom - 4, {
+    sheet.textAt(decadeText(decade), margin, at - 5, leftRoom - 4, {
       size: 7,
       face: 'figures',
       color: ink.soft,

@@ -15,6 +15,14 @@ export interface Typesetter {
 /** Shown for a sign that none of the fonts has. */
 const unknownSign = '□';
 
+const raisedFigures = '⁰¹²³⁴⁵⁶⁷⁸⁹';
+
+/** "10⁻⁶" as "10^−6": none of the fonts has a raised minus. */
+export const withoutRaisedMinus = (text: string): string =>
+  text.replace(/⁻([⁰¹²³⁴⁵⁶⁷⁸⁹]*)/gu, (_, figures: string) => {
+    return `^−${[...figures].map((figure) => raisedFigures.indexOf(figure)).join('')}`;
+  });
+
 /** Cuts a text into stretches, each in a face that has its signs. */
 export function runsOf(text: string, face: Face, { canShow }: Typesetter): TextRun[] {
   const runs: TextRun[] = [];
