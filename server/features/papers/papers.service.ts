@@ -2,7 +2,7 @@ import type { SitePrincipal } from '#server/auth/principal.ts';
 import type { Database } from '#server/db/database.ts';
 import type { BearingPosition } from '#server/db/entities/bearing-position.entity.ts';
 import type { FindingResponse } from '#shared/contracts/finding.ts';
-import type { InspectionResponse } from '#shared/contracts/inspection.ts';
+import { inspectionResponse, type InspectionResponse } from '#shared/contracts/inspection.ts';
 import type { SurveyResponse } from '#shared/contracts/survey.ts';
 import { drawFinding } from './finding-paper.ts';
 import { drawInspection } from './inspection-paper.ts';
@@ -50,7 +50,10 @@ export class PapersService {
   }
 
   async inspection(principal: SitePrincipal, inspectionId: number): Promise<Paper> {
-    const inspection = await this.sources.inspection(principal, inspectionId);
+    // By its contract: reports kept from before a field was there get its default.
+    const inspection = inspectionResponse.parse(
+      await this.sources.inspection(principal, inspectionId),
+    );
     const position = await this.repository.positionOf(principal.siteId, inspection.findingId);
     const widthMm = position === null ? null : this.sources.bearingWidthMm(position);
     const sheet = await this.sheet(principal, `Inspection ${inspection.id}`);

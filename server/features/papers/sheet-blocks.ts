@@ -68,8 +68,17 @@ export function listWithin(
   return used;
 }
 
-/** A field to fill by hand: label above a line. */
-export function blank(sheet: Sheet, label: string, x: number, width: number, height = 24): void {
+/** A field to fill by hand, label above a line, or with what was filled in. */
+export function blank(
+  sheet: Sheet,
+  label: string,
+  place: { x: number; width: number; height?: number },
+  filled: string | null = null,
+): void {
+  const { x, width, height = 24 } = place;
   sheet.textAt(label, x, sheet.y, width, { size: 6.5, color: ink.faint, maxLines: 1 });
+  if (filled !== null) {
+    sheet.textAt(filled, x, sheet.y + height - 10, width, { size: 7.5, maxLines: 1 });
+  }
   sheet.rule(sheet.y + height, ink.full, x, width);
 }

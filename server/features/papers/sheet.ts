@@ -134,9 +134,15 @@ export class Sheet {
       .stroke();
   }
 
-  /** An empty box to tick by hand. */
-  box(x: number, y: number, side = 8): void {
+  /** A box to tick by hand, or ticked. */
+  box(x: number, y: number, ticked = false): void {
+    const side = 8;
     this.doc.rect(x, y, side, side).lineWidth(0.7).strokeColor(ink.full).stroke();
+    if (!ticked) return;
+    const [near, far] = [1.6, side - 1.6];
+    this.doc.moveTo(x + near, y + near).lineTo(x + far, y + far);
+    this.doc.moveTo(x + near, y + far).lineTo(x + far, y + near);
+    this.doc.lineWidth(1.1).strokeColor(ink.full).stroke();
   }
 
   /** Writes the foot of every page and closes the document. */

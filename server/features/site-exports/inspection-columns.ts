@@ -65,6 +65,17 @@ export const inspectionColumns: readonly CsvColumn<InspectionRow>[] = [
     header: 'found in place',
     value: ({ inspection }) => inspection?.report?.inPlaceResult ?? null,
   },
+  {
+    header: 'checks in place',
+    value: ({ inspection }) =>
+      inspection?.report?.inPlaceChecks
+        ?.map(({ check, finding }) => `${check}: ${finding}`)
+        .join('; ') ?? null,
+  },
+  {
+    header: 'cause found in place',
+    value: ({ inspection }) => inspection?.report?.causeInPlace ?? null,
+  },
   { header: 'work done', value: ({ inspection }) => inspection?.report?.workDone ?? null },
   ...(['shaft', 'housing'] as const).flatMap((seat) => [
     ...seatColumns(seat, 'as found'),

@@ -11,7 +11,7 @@ import { buildMember, buildSite } from '#tests/support/factories.ts';
 import { buildPlant, type Plant } from '#tests/support/plant.ts';
 import { buildTestApp } from '#tests/support/test-app.ts';
 import { useTestDatabase } from '#tests/support/test-database.ts';
-import { inspectionStory } from '../inspections/inspection-story.ts';
+import { aReport, inspectionStory } from '../inspections/inspection-story.ts';
 
 const dataSource = useTestDatabase();
 const dataDirectory = mkdtempSync(join(tmpdir(), 'fretline-papers-'));
@@ -194,6 +194,24 @@ describe('the sheet of an inspection', () => {
     ]) {
       expect(text).toContain(told);
     }
+  });
+
+  it('holds what was reported once it is', async () => {
+    const plant = await buildPlant(dataSource());
+    const { inspectionId } = await story.accepted(plant);
+    await story.report(plant, inspectionId, aReport());
+    const { text } = await paper(plant, plant.lead, `/inspections/${inspectionId}/paper.pdf`);
+    for (const told of [
+      'Reported',
+      'Shaft diameter as found, mm ',
+      '59.9700',
+      '59.9740',
+      'Sleeve fitted, new bearing mounted.',
+      'name Oskar Owner',
+    ]) {
+      expect(text).toContain(told);
+    }
+    expect(text).not.toContain('What was done, parts used');
   });
 
   it('asks for what is to be checked alone', async () => {
