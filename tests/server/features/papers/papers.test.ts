@@ -128,7 +128,7 @@ describe('the paper of a finding', () => {
         reason: 'A reason that is told at length. '.repeat(50),
       });
     const findingId = (accepted.body as { findingId: number }).findingId;
-    for (let version = 1; version <= 12; version += 1) {
+    for (let version = 1; version <= 40; version += 1) {
       await app()
         .as(plant.lead)
         .post(plant.path(`/findings/${findingId}/decision`), {
