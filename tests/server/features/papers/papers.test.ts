@@ -1,7 +1,7 @@
 import { mkdtempSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { extractText, getDocumentProxy } from 'unpdf';
+import { extractText, extractTextItems, getDocumentProxy } from 'unpdf';
 import { describe, expect, it } from 'vitest';
 import { BearingPosition } from '#server/db/entities/bearing-position.entity.ts';
 import { Machine } from '#server/db/entities/machine.entity.ts';
@@ -21,11 +21,19 @@ const app = () => buildTestApp(dataSource(), dataDirectory);
 
 async function paper(plant: Plant, user: { id: number }, path: string) {
   const res = await app().as(user).get(plant.path(path)).buffer(true);
-  if (res.status !== 200) return { status: res.status, headers: res.headers, pages: [], text: '' };
+  if (res.status !== 200) {
+    return { status: res.status, headers: res.headers, pages: [], text: '', feet: [] };
+  }
   const document = await getDocumentProxy(new Uint8Array(res.body as Buffer));
   const { text } = await extractText(document);
+  const { items } = await extractTextItems(document);
   const pages = text.map((page) => page.replace(/[\s\u00a0\u202f]+/g, ' '));
-  return { status: res.status, headers: res.headers, pages, text: pages.join(' ') };
+  // All that stands as low as the foot of the page or lower.
+  const feet = items.map((page) => {
+    const footAt = page.find(({ str }) => str.startsWith('A screening is a hint'))?.y ?? 0;
+    return page.filter(({ str, y }) => str !== '' && y <= footAt + 4).map(({ str }) => str);
+  });
+  return { status: res.status, headers: res.headers, pages, text: pages.join(' '), feet };
 }
 
 /** A finding whose clearest screening has its plots and samples on the disk. */
@@ -137,8 +145,14 @@ describe('the paper of a finding', () => {
           version,
         });
     }
-    const { pages, text } = await paper(plant, plant.lead, `/findings/${findingId}/paper.pdf`);
+    const { pages, text, feet } = await paper(
+      plant,
+      plant.lead,
+      `/findings/${findingId}/paper.pdf`,
+    );
     expect(pages).toHaveLength(1);
+    // Nothing else runs into it: two lines of caution, the page number, and what the paper is.
+    expect(feet[0]).toHaveLength(4);
     expect(text).toMatch(/\d+ more on the page of the finding\./);
     expect(text).toContain('Łukasiewicz½');
   });
