@@ -16,6 +16,8 @@ import { presentFinding, presentFindingItem } from './features/findings/finding.
 import { findingRoutes } from './features/findings/finding.routes.ts';
 import { FindingService } from './features/findings/finding.service.ts';
 import type { InspectionNeighbours } from './features/inspections/inspection-neighbours.ts';
+import { inspectionPhotoRoutes } from './features/inspections/inspection-photo.routes.ts';
+import { InspectionPhotoService } from './features/inspections/inspection-photo.service.ts';
 import { presentInspection } from './features/inspections/inspection.presenter.ts';
 import { inspectionRoutes } from './features/inspections/inspection.routes.ts';
 import { InspectionService } from './features/inspections/inspection.service.ts';
@@ -217,6 +219,9 @@ export function compose(
     ...reviewRoutes(review),
     ...findingRoutes(findings),
     ...inspectionRoutes(inspections),
+    ...inspectionPhotoRoutes(new InspectionPhotoService(database, files, now), () =>
+      files.incomingDirectory(),
+    ),
     ...limitsRoutes(new LimitsService(database, now)),
     ...outcomesRoutes(new OutcomesService(database)),
     ...siteExportRoutes(siteExports),

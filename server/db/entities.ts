@@ -5,6 +5,7 @@ import { DemoMail } from './entities/demo-mail.entity.ts';
 import { FindingScreening } from './entities/finding-screening.entity.ts';
 import { Finding } from './entities/finding.entity.ts';
 import { FitRecord } from './entities/fit-record.entity.ts';
+import { InspectionPhoto } from './entities/inspection-photo.entity.ts';
 import { Inspection } from './entities/inspection.entity.ts';
 import { LimitsChange } from './entities/limits-change.entity.ts';
 import { Machine } from './entities/machine.entity.ts';
@@ -37,6 +38,7 @@ export const entities = [
   FindingScreening,
   FitRecord,
   Inspection,
+  InspectionPhoto,
   LimitsChange,
   Machine,
   MailOptOut,

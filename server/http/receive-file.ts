@@ -15,7 +15,8 @@ export interface ReceivedFile {
 const fieldMaxBytes = 4096;
 
 /**
- * Takes the one file of a multipart form to disk, from its field `file`.
+ * Takes the one file of a multipart form to disk, from its field `file`. `tooLarge` says what to do
+ * about one over the limit.
  *
  * @throws {AppError} `too_large`, or `validation` for a broken form or one without a file
  */
@@ -24,6 +25,7 @@ export async function receiveFile(
   res: Response,
   directory: string,
   fileMaxBytes: number,
+  { tooLarge = 'Split it.' }: { tooLarge?: string } = {},
 ): Promise<ReceivedFile> {
   const take = multer({
     storage: multer.diskStorage({
@@ -36,7 +38,7 @@ export async function receiveFile(
   await new Promise<void>((resolve, reject) => {
     take(req, res, (error: unknown) => {
       if (!error) resolve();
-      else reject(faultOf(error, fileMaxBytes));
+      else reject(faultOf(error, fileMaxBytes, tooLarge));
     });
   });
   if (req.file === undefined) {
@@ -51,10 +53,10 @@ export async function receiveFile(
   };
 }
 
-function faultOf(error: unknown, fileMaxBytes: number): unknown {
+function faultOf(error: unknown, fileMaxBytes: number, tooLarge: string): unknown {
   if (error instanceof multer.MulterError && error.code === 'LIMIT_FILE_SIZE') {
     const most = Math.floor(fileMaxBytes / 1024 / 1024);
-    const message = `The file is larger than ${most} MB, the most that is taken. Split it.`;
+    const message = `The file is larger than ${most} MB, the most that is taken. ${tooLarge}`;
     return new AppError('too_large', message, { cause: error });
   }
   const known = diskFullInWords(error);

@@ -41,6 +41,10 @@ export class FileStore {
     return join(this.directory, 'plots', `${waveformId}-${run}-${plot}.f32`);
   }
 
+  photoPath(inspectionId: number, contentHash: string, size: 'small' | 'full'): string {
+    return join(this.directory, 'photos', String(inspectionId), `${contentHash}-${size}.jpg`);
+  }
+
   /** Moves an arrived upload to its place; a file that is there already stays. */
   async keepOriginal(incomingPath: string, contentHash: string): Promise<void> {
     const path = this.originalPath(contentHash);

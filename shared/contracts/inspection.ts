@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { numberBetween, paragraph } from './fields.ts';
 import { seatCondition, seatName, seatStage } from './fit-record.ts';
 import { inPlaceCheck, inPlaceCheckNames } from './in-place-check.ts';
+import { inspectionPhotoResponse } from './inspection-photo.ts';
 import { listQuery, listResponse } from './list.ts';
 import { seatAssessmentsResponse } from './seat-assessment.ts';
 
@@ -100,6 +101,7 @@ export const inspectionResponse = inspectionListItem.extend({
   seats: seatAssessmentsResponse,
   report: inspectionReport.nullable(),
   reportedAt: z.string().nullable(),
+  photos: z.array(inspectionPhotoResponse),
   version: z.int(),
   can: z.object({
     accept: z.boolean(),

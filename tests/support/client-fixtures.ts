@@ -78,6 +78,7 @@ export const anInspection = (overrides: Partial<InspectionResponse> = {}): Inspe
   seats,
   report: null,
   reportedAt: null,
+  photos: [],
   version: 2,
   can: { accept: false, report: true, close: false, cancel: false, seeFinding: true },
   ...overrides,

@@ -13,6 +13,7 @@ import { KeepLimits1796137970428 } from './1796137970428-keep-limits.ts';
 import { KeepToldLineFrequency1796138768972 } from './1796138768972-keep-told-line-frequency.ts';
 import { CreateCalendarFeeds1796138869429 } from './1796138869429-create-calendar-feeds.ts';
 import { CreateWebhooks1796138869430 } from './1796138869430-create-webhooks.ts';
+import { CreateInspectionPhotos1796143028389 } from './1796143028389-create-inspection-photos.ts';
 
 /** Every migration, oldest first. */
 export const migrations = [
@@ -31,4 +32,5 @@ export const migrations = [
   KeepToldLineFrequency1796138768972,
   CreateCalendarFeeds1796138869429,
   CreateWebhooks1796138869430,
+  CreateInspectionPhotos1796143028389,
 ];

@@ -1,8 +1,10 @@
 import type { SitePrincipal } from '#server/auth/principal.ts';
 import type { Inspection } from '#server/db/entities/inspection.entity.ts';
+import type { InspectionPhoto } from '#server/db/entities/inspection-photo.entity.ts';
 import type { InspectionListItem, InspectionResponse } from '#shared/contracts/inspection.ts';
 import type { SeatAssessmentsResponse } from '#shared/contracts/seat-assessment.ts';
 import { nextInspectionState, type InspectionAction } from './inspection-transitions.ts';
+import { presentPhoto } from './inspection-photo.presenter.ts';
 import { isAssignee, maySeeFindingOf } from './inspection.policy.ts';
 
 const waitingStates: readonly Inspection['state'][] = ['assigned', 'accepted'];
@@ -35,12 +37,13 @@ export interface InspectionWhole {
   inspection: Inspection;
   summary: string;
   seats: SeatAssessmentsResponse;
+  photos: InspectionPhoto[];
   today: string;
 }
 
 export function presentInspection(
   principal: SitePrincipal,
-  { inspection, summary, seats, today }: InspectionWhole,
+  { inspection, summary, seats, photos, today }: InspectionWhole,
 ): InspectionResponse {
   const can = (action: InspectionAction) =>
     nextInspectionState(inspection.state, action, principal.role) !== null;
@@ -52,6 +55,7 @@ export function presentInspection(
     seats,
     report: inspection.report,
     reportedAt: inspection.reportedAt?.toISOString() ?? null,
+    photos: photos.map(presentPhoto),
     version: inspection.version,
     can: {
       accept: isOwn && can('accept'),

@@ -12,6 +12,7 @@ import { AssignInspection } from './assign-inspection.ts';
 import { fitRecordsOf } from './inspection-fit-records.ts';
 import { cancelledMail, closedMail, mailFactsOf, reportedMail } from './inspection-mails.ts';
 import type { InspectionEvent, InspectionNeighbours } from './inspection-neighbours.ts';
+import { InspectionPhotoRepository } from './inspection-photo.repository.ts';
 import { inspectionSummary } from './inspection-summary.ts';
 import { isAssignee, maySeeInspection } from './inspection.policy.ts';
 import { presentInspectionItem, type InspectionWhole } from './inspection.presenter.ts';
@@ -70,6 +71,7 @@ export class InspectionService {
       inspection,
       summary: inspectionSummary(finding.bearingPosition?.name ?? '', clearest, screenings.length),
       seats: await this.neighbours.assessSeats(finding.bearingPositionId, screenings),
+      photos: await new InspectionPhotoRepository(this.database.db).ofInspection(inspectionId),
       today: this.today(),
     };
   }
